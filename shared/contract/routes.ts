@@ -1,0 +1,20 @@
+import { accountRoutes } from './accounts.js';
+import { benchRoutes, hardwareRoutes } from './hardware.js';
+import { deskRoutes } from './moderation.js';
+import { photoRoutes } from './photos.js';
+import { searchRoutes } from './search.js';
+import { systemRoutes } from './system.js';
+import { writeUpRoutes } from './write-ups.js';
+
+/** Every route of the API, and who may call it. A route that does not stand here is not served. */
+export const routes = {
+  ...systemRoutes,
+  ...accountRoutes,
+  ...hardwareRoutes,
+  ...benchRoutes,
+  ...searchRoutes,
+  ...writeUpRoutes,
+  ...photoRoutes,
+  ...deskRoutes,
+};
+export type RouteName = keyof typeof routes;
