@@ -1,0 +1,35 @@
+import { z } from 'zod';
+
+const flag = z.enum(['true', 'false', '1', '0']).transform((value) => value === 'true' || value === '1');
+
+const Settings = z.object({
+  NODE_ENV: z.enum(['development', 'production', 'test']).default('development'),
+  HOST: z.string().default('127.0.0.1'),
+  PORT: z.coerce.number().int().min(0).max(65535).default(4310),
+  /** What stands in mails and in structured data; https here makes cookies Secure. */
+  PUBLIC_ADDRESS: z.url({ protocol: /^https?$/ }).default('http://localhost:4310'),
+  DATABASE_URL: z.url({ protocol: /^(mysql|mariadb)$/, hostname: /.+/ }),
+  MEILI_HOST: z.url({ protocol: /^https?$/ }),
+  MEILI_KEY: z.string().optional(),
+  SMTP_URL: z.url({ protocol: /^smtps?$/, hostname: /.+/ }),
+  MAIL_FROM: z.string().default('Shimlore <desk@shimlore.example>'),
+  PHOTO_DIR: z.string().default('data/photos'),
+  SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
+  LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
+  /** Whether X-Forwarded-* headers of a proxy in front are believed. */
+  TRUST_PROXY: flag.default(false),
+  /** Page of the local mailbox; only set where the local fake catches mail. */
+  MAILBOX_URL: z.url().optional(),
+});
+export type Settings = z.infer<typeof Settings>;
+
+/**
+ * Settings from the environment. Throws one sentence for each that is missing or off, naming the variable,
+ * so that a wrong setting ends the start instead of a request.
+ */
+export function readSettings(environment: Record<string, string | undefined>): Settings {
+  const parsed = Settings.safeParse(environment);
+  if (parsed.success) return parsed.data;
+  const lines = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
+  throw new Error(`These settings cannot be used:\n  ${lines.join('\n  ')}\nThe table in README.md says what each takes.`);
+}
