@@ -1,0 +1,73 @@
+import { spawn } from 'node:child_process';
+import { createWriteStream, mkdirSync, readFileSync } from 'node:fs';
+import { dirname } from 'node:path';
+
+/**
+ * A program that runs beside this one, its output in a log file. It has a process group of its own, so that Ctrl-C in
+ * the terminal reaches only the launcher, which then ends its children in order.
+ *
+ * @param {{ name: string; command: string; args: readonly string[]; logFile: string; env?: NodeJS.ProcessEnv; cwd?: string }} what
+ */
+export function startChild({ name, command, args, logFile, env = process.env, cwd }) {
+  mkdirSync(dirname(logFile), { recursive: true });
+  const log = createWriteStream(logFile, { flags: 'a' });
+  log.write(`--- ${new Date().toISOString()} start of ${name}\n`);
+  const child = spawn(command, args, { env, cwd, detached: true, stdio: ['ignore', 'pipe', 'pipe'] });
+  child.stdout.pipe(log, { end: false });
+  child.stderr.pipe(log, { end: false });
+  let over = false;
+  const exited = new Promise((resolve) => {
+    const end = (how) => {
+      over = true;
+      log.end();
+      resolve(how);
+    };
+    child.once('error', (error) => end(error.message));
+    child.once('close', (code, signal) => end(signal ? `signal ${signal}` : `exit code ${code}`));
+  });
+  return {
+    name,
+    pid: child.pid,
+    logFile,
+    /** Resolves, never rejects, with how it ended. */
+    exited,
+    isOver: () => over,
+    /** Asks it to end; after `patience` milliseconds it is ended without asking. */
+    async stop(patience = 15_000) {
+      if (over) return;
+      child.kill('SIGTERM');
+      const hurry = setTimeout(() => child.kill('SIGKILL'), patience);
+      await exited;
+      clearTimeout(hurry);
+    },
+  };
+}
+
+/**
+ * Waits until `isReady` answers true. Throws one sentence with the last lines of the log when the child ends before
+ * that or `seconds` have passed.
+ */
+export async function untilReady(child, isReady, seconds = 60) {
+  const end = Date.now() + seconds * 1000;
+  for (;;) {
+    if (child.isOver()) {
+      throw new Error(
+        `${child.name} ended while starting (${await child.exited}).\n${lastLines(child.logFile)}`,
+      );
+    }
+    if (await isReady()) return;
+    if (Date.now() > end)
+      throw new Error(`${child.name} was not ready within ${seconds} s.\n${lastLines(child.logFile)}`);
+    await new Promise((resolve) => setTimeout(resolve, 50));
+  }
+}
+
+/** The end of a log, for a message. */
+export function lastLines(file, count = 12) {
+  try {
+    const lines = readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count);
+    return [`Last lines of ${file}:`, ...lines.map((line) => `  ${line}`)].join('\n');
+  } catch {
+    return `Nothing in ${file}.`;
+  }
+}
