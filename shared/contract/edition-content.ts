@@ -3,7 +3,9 @@ import { Id, Slug, line, passage } from './primitives.js';
 import { Afterwards, FixKind, Instrument, Permanence, ReadingUnit } from './vocabulary.js';
 
 /** Identity of a fix, reading or step across editions; made by the editor. */
-export const ItemKey = z.string().regex(/^[a-z0-9-]{8,36}$/, 'takes 8 to 36 lower-case letters, digits and hyphens');
+export const ItemKey = z
+  .string()
+  .regex(/^[a-z0-9-]{8,36}$/, 'takes 8 to 36 lower-case letters, digits and hyphens');
 
 /** Whether the write-up holds for a revision, as its author found it. A revision that is not listed is not known. */
 export const RevisionMark = z.strictObject({ revisionId: Id, holds: z.boolean() });
@@ -86,5 +88,14 @@ export const EditionContent = z.strictObject({
 export type EditionContent = z.infer<typeof EditionContent>;
 
 export const emptyContent: EditionContent = {
-  title: '', summary: '', joints: [], symptoms: [], noticed: '', cause: '', readings: [], fixes: [], photos: [], sources: '',
+  title: '',
+  summary: '',
+  joints: [],
+  symptoms: [],
+  noticed: '',
+  cause: '',
+  readings: [],
+  fixes: [],
+  photos: [],
+  sources: '',
 };

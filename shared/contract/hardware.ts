@@ -13,7 +13,11 @@ export const PartRef = z.object({ id: Id, slug: Slug, name: z.string(), kind: Pa
 export type PartRef = z.infer<typeof PartRef>;
 
 /** A part with its revisions from the oldest to the newest. */
-export const PartSummary = PartRef.extend({ about: z.string(), revisions: z.array(RevisionRef), writeUps: z.number().int() });
+export const PartSummary = PartRef.extend({
+  about: z.string(),
+  revisions: z.array(RevisionRef),
+  writeUps: z.number().int(),
+});
 export type PartSummary = z.infer<typeof PartSummary>;
 
 export const Revision = RevisionRef.extend({
@@ -31,10 +35,21 @@ export type Feature = z.infer<typeof Feature>;
 
 export const PartPage = PartRef.extend({
   about: z.string(),
-  photo: z.object({ hash: z.string(), alt: z.string(), width: z.number(), height: z.number(), widths: z.array(z.number()), placeholder: z.string() }).nullable(),
+  photo: z
+    .object({
+      hash: z.string(),
+      alt: z.string(),
+      width: z.number(),
+      height: z.number(),
+      widths: z.array(z.number()),
+      placeholder: z.string(),
+    })
+    .nullable(),
   revisions: z.array(Revision),
   features: z.array(Feature),
-  writeUps: z.array(z.object({ slug: Slug, title: z.string(), holdsFor: z.array(z.string()), notFor: z.array(z.string()) })),
+  writeUps: z.array(
+    z.object({ slug: Slug, title: z.string(), holdsFor: z.array(z.string()), notFor: z.array(z.string()) }),
+  ),
 });
 export type PartPage = z.infer<typeof PartPage>;
 
@@ -47,24 +62,78 @@ export type BenchItem = z.infer<typeof BenchItem>;
 
 const tag = 'hardware';
 export const hardwareRoutes = {
-  listMakers: route({ method: 'get', path: '/api/makers', tag, access: anyone, summary: 'All makers by name', response: z.object({ items: z.array(MakerRef) }) }),
-  listParts: route({
-    method: 'get', path: '/api/parts', tag, access: anyone, summary: 'Parts by name, with their revisions',
-    query: PageQuery.extend({ q: line(100).optional(), kind: PartKind.optional(), maker: Slug.optional() }), response: pageOf(PartSummary),
+  listMakers: route({
+    method: 'get',
+    path: '/api/makers',
+    tag,
+    access: anyone,
+    summary: 'All makers by name',
+    response: z.object({ items: z.array(MakerRef) }),
   }),
-  readPart: route({ method: 'get', path: '/api/parts/:slug', tag, access: anyone, summary: 'One part: revisions, features, write-ups', params: z.object({ slug: Slug }), response: PartPage }),
-  listSymptoms: route({ method: 'get', path: '/api/symptoms', tag, access: anyone, summary: 'The controlled list of symptoms', response: z.object({ items: z.array(Symptom) }) }),
+  listParts: route({
+    method: 'get',
+    path: '/api/parts',
+    tag,
+    access: anyone,
+    summary: 'Parts by name, with their revisions',
+    query: PageQuery.extend({ q: line(100).optional(), kind: PartKind.optional(), maker: Slug.optional() }),
+    response: pageOf(PartSummary),
+  }),
+  readPart: route({
+    method: 'get',
+    path: '/api/parts/:slug',
+    tag,
+    access: anyone,
+    summary: 'One part: revisions, features, write-ups',
+    params: z.object({ slug: Slug }),
+    response: PartPage,
+  }),
+  listSymptoms: route({
+    method: 'get',
+    path: '/api/symptoms',
+    tag,
+    access: anyone,
+    summary: 'The controlled list of symptoms',
+    response: z.object({ items: z.array(Symptom) }),
+  }),
 };
 
 export const benchRoutes = {
-  readBench: route({ method: 'get', path: '/api/bench', tag: 'bench', access: signedIn, summary: 'My parts and their revisions', response: z.object({ items: z.array(BenchItem) }) }),
+  readBench: route({
+    method: 'get',
+    path: '/api/bench',
+    tag: 'bench',
+    access: signedIn,
+    summary: 'My parts and their revisions',
+    response: z.object({ items: z.array(BenchItem) }),
+  }),
   addToBench: route({
-    method: 'post', path: '/api/bench', tag: 'bench', access: signedIn, status: 201, summary: 'Put a part on my bench',
-    body: z.strictObject({ partId: Id, revisionId: Id.nullable() }), response: BenchItem, problems: ['already-there'],
+    method: 'post',
+    path: '/api/bench',
+    tag: 'bench',
+    access: signedIn,
+    status: 201,
+    summary: 'Put a part on my bench',
+    body: z.strictObject({ partId: Id, revisionId: Id.nullable() }),
+    response: BenchItem,
+    problems: ['already-there'],
   }),
   changeBenchItem: route({
-    method: 'patch', path: '/api/bench/:id', tag: 'bench', access: signedIn, summary: 'Say which revision it is',
-    params: z.object({ id: IdText }), body: z.strictObject({ revisionId: Id.nullable() }), response: BenchItem,
+    method: 'patch',
+    path: '/api/bench/:id',
+    tag: 'bench',
+    access: signedIn,
+    summary: 'Say which revision it is',
+    params: z.object({ id: IdText }),
+    body: z.strictObject({ revisionId: Id.nullable() }),
+    response: BenchItem,
   }),
-  removeFromBench: route({ method: 'delete', path: '/api/bench/:id', tag: 'bench', access: signedIn, summary: 'Take a part off my bench', params: z.object({ id: IdText }) }),
+  removeFromBench: route({
+    method: 'delete',
+    path: '/api/bench/:id',
+    tag: 'bench',
+    access: signedIn,
+    summary: 'Take a part off my bench',
+    params: z.object({ id: IdText }),
+  }),
 };

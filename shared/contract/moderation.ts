@@ -5,7 +5,12 @@ import { moderators, route } from './route.js';
 import { Caution, EditionComparison, EditionView, PersonRef } from './write-ups.js';
 
 export const DeskLine = z.object({
-  editionId: Id, number: z.number().int(), title: z.string(), author: PersonRef, submittedAt: Instant, changeNote: z.string(),
+  editionId: Id,
+  number: z.number().int(),
+  title: z.string(),
+  author: PersonRef,
+  submittedAt: Instant,
+  changeNote: z.string(),
   /** Hazards named in the text that no caution answers yet. */
   openHazards: z.number().int(),
 });
@@ -23,13 +28,25 @@ export const FoundHazard = z.object({
 export type FoundHazard = z.infer<typeof FoundHazard>;
 
 export const LibraryCaution = z.object({
-  id: Id, name: z.string(), signalWord: SignalWord, hazards: z.array(HazardKind), hazard: z.string(), consequence: z.string(), avoidance: z.string(),
+  id: Id,
+  name: z.string(),
+  signalWord: SignalWord,
+  hazards: z.array(HazardKind),
+  hazard: z.string(),
+  consequence: z.string(),
+  avoidance: z.string(),
 });
 export type LibraryCaution = z.infer<typeof LibraryCaution>;
 
 export const DeskEdition = z.object({
-  editionId: Id, writeUpId: Id, slug: z.string().nullable(), number: z.number().int(), state: EditionState, author: PersonRef,
-  submittedAt: Instant.nullable(), changeNote: z.string(),
+  editionId: Id,
+  writeUpId: Id,
+  slug: z.string().nullable(),
+  number: z.number().int(),
+  state: EditionState,
+  author: PersonRef,
+  submittedAt: Instant.nullable(),
+  changeNote: z.string(),
   view: EditionView,
   /** Against the edition that is published now; null for a first edition. */
   comparison: EditionComparison.nullable(),
@@ -59,18 +76,80 @@ const idParams = z.object({ id: IdText });
 const tag = 'desk';
 
 export const deskRoutes = {
-  readDesk: route({ method: 'get', path: '/api/desk', tag, access: moderators, summary: 'Editions that wait, the longest wait first', query: PageQuery, response: pageOf(DeskLine) }),
-  readDeskEdition: route({ method: 'get', path: '/api/desk/editions/:id', tag, access: moderators, summary: 'One edition on the desk: view, difference, hazards, cautions', params: idParams, response: DeskEdition }),
-  listLibraryCautions: route({ method: 'get', path: '/api/desk/caution-library', tag, access: moderators, summary: 'The library of cautions', response: z.object({ items: z.array(LibraryCaution) }) }),
-  placeCaution: route({ method: 'post', path: '/api/desk/cautions', tag, access: moderators, status: 201, summary: 'Place a caution on a write-up or one of its fixes', body: PlaceCaution, response: Caution }),
-  changeCaution: route({ method: 'patch', path: '/api/desk/cautions/:id', tag, access: moderators, summary: 'Word a caution anew', params: idParams, body: z.strictObject(CautionWords), response: Caution }),
-  removeCaution: route({ method: 'delete', path: '/api/desk/cautions/:id', tag, access: moderators, summary: 'Take a caution off; refused while a published fix needs it', params: idParams, problems: ['caution-missing'] }),
+  readDesk: route({
+    method: 'get',
+    path: '/api/desk',
+    tag,
+    access: moderators,
+    summary: 'Editions that wait, the longest wait first',
+    query: PageQuery,
+    response: pageOf(DeskLine),
+  }),
+  readDeskEdition: route({
+    method: 'get',
+    path: '/api/desk/editions/:id',
+    tag,
+    access: moderators,
+    summary: 'One edition on the desk: view, difference, hazards, cautions',
+    params: idParams,
+    response: DeskEdition,
+  }),
+  listLibraryCautions: route({
+    method: 'get',
+    path: '/api/desk/caution-library',
+    tag,
+    access: moderators,
+    summary: 'The library of cautions',
+    response: z.object({ items: z.array(LibraryCaution) }),
+  }),
+  placeCaution: route({
+    method: 'post',
+    path: '/api/desk/cautions',
+    tag,
+    access: moderators,
+    status: 201,
+    summary: 'Place a caution on a write-up or one of its fixes',
+    body: PlaceCaution,
+    response: Caution,
+  }),
+  changeCaution: route({
+    method: 'patch',
+    path: '/api/desk/cautions/:id',
+    tag,
+    access: moderators,
+    summary: 'Word a caution anew',
+    params: idParams,
+    body: z.strictObject(CautionWords),
+    response: Caution,
+  }),
+  removeCaution: route({
+    method: 'delete',
+    path: '/api/desk/cautions/:id',
+    tag,
+    access: moderators,
+    summary: 'Take a caution off; refused while a published fix needs it',
+    params: idParams,
+    problems: ['caution-missing'],
+  }),
   publishEdition: route({
-    method: 'post', path: '/api/desk/editions/:id/publish', tag, access: moderators, summary: 'Publish; impossible while a hazard has no caution',
-    params: idParams, body: z.strictObject({ note: passage(2000) }), response: z.object({ slug: z.string(), number: z.number().int() }), problems: ['caution-missing', 'edition-state', 'not-complete'],
+    method: 'post',
+    path: '/api/desk/editions/:id/publish',
+    tag,
+    access: moderators,
+    summary: 'Publish; impossible while a hazard has no caution',
+    params: idParams,
+    body: z.strictObject({ note: passage(2000) }),
+    response: z.object({ slug: z.string(), number: z.number().int() }),
+    problems: ['caution-missing', 'edition-state', 'not-complete'],
   }),
   returnEdition: route({
-    method: 'post', path: '/api/desk/editions/:id/return', tag, access: moderators, summary: 'Return to the author with a reason',
-    params: idParams, body: z.strictObject({ reason: passage(2000, 10) }), problems: ['edition-state'],
+    method: 'post',
+    path: '/api/desk/editions/:id/return',
+    tag,
+    access: moderators,
+    summary: 'Return to the author with a reason',
+    params: idParams,
+    body: z.strictObject({ reason: passage(2000, 10) }),
+    problems: ['edition-state'],
   }),
 };

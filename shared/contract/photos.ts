@@ -22,12 +22,25 @@ export type Photo = z.infer<typeof Photo>;
 
 export const photoRoutes = {
   addPhoto: route({
-    method: 'post', path: '/api/photos', tag: 'photos', access: signedIn, status: 201, multipart: true,
+    method: 'post',
+    path: '/api/photos',
+    tag: 'photos',
+    access: signedIn,
+    status: 201,
+    multipart: true,
     summary: 'Store a photo (JPEG, PNG, WebP, AVIF, HEIF where decodable); all metadata is removed',
-    body: z.strictObject({ alt: AlternativeText }), response: Photo, problems: ['photo-refused', 'body-too-large', 'too-many-requests'],
+    body: z.strictObject({ alt: AlternativeText }),
+    response: Photo,
+    problems: ['photo-refused', 'body-too-large', 'too-many-requests'],
   }),
   servePhoto: route({
-    method: 'get', path: '/photos/:file', tag: 'photos', access: anyone, summary: 'A photo file, never changing',
-    params: z.object({ file: z.string().regex(/^[0-9a-f]{64}-\d{3,4}\.(?:avif|webp)$/, 'is not the name of a photo file') }),
+    method: 'get',
+    path: '/photos/:file',
+    tag: 'photos',
+    access: anyone,
+    summary: 'A photo file, never changing',
+    params: z.object({
+      file: z.string().regex(/^[0-9a-f]{64}-\d{3,4}\.(?:avif|webp)$/, 'is not the name of a photo file'),
+    }),
   }),
 };

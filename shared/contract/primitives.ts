@@ -4,7 +4,11 @@ import { z } from 'zod';
 export const Id = z.number().int().positive().max(Number.MAX_SAFE_INTEGER);
 
 /** The same identity as it stands in a path or a query string. */
-export const IdText = z.coerce.number().int('is a whole number').positive('is a positive number').max(Number.MAX_SAFE_INTEGER);
+export const IdText = z.coerce
+  .number()
+  .int('is a whole number')
+  .positive('is a positive number')
+  .max(Number.MAX_SAFE_INTEGER);
 
 /** Lower-case words joined by hyphens, as they stand in addresses. */
 export const Slug = z

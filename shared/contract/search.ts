@@ -47,7 +47,16 @@ export const SearchHit = z.object({
   sides: z.array(z.object({ part: PartRef, holdsFor: z.array(RevisionRef), notFor: z.array(RevisionRef) })),
   symptoms: z.array(z.string()),
   fixes: z.array(z.object({ title: z.string(), kind: FixKind, permanence: Permanence, standing: Standing })),
-  photo: z.object({ hash: z.string(), alt: z.string(), placeholder: z.string(), width: z.number().int(), height: z.number().int(), widths: z.array(z.number().int()) }).nullable(),
+  photo: z
+    .object({
+      hash: z.string(),
+      alt: z.string(),
+      placeholder: z.string(),
+      width: z.number().int(),
+      height: z.number().int(),
+      widths: z.array(z.number().int()),
+    })
+    .nullable(),
   publishedAt: Instant,
   applicability: Applicability,
 });
@@ -76,9 +85,15 @@ export type SearchResults = z.infer<typeof SearchResults>;
 
 export const searchRoutes = {
   search: route({
-    method: 'get', path: '/api/search', tag: 'search', access: anyone,
-    summary: 'Write-ups for a symptom: what holds for the reader’s bench first, then what is not known for it, then the rest',
-    query: SearchQuery, response: SearchResults, problems: ['search-unavailable'],
+    method: 'get',
+    path: '/api/search',
+    tag: 'search',
+    access: anyone,
+    summary:
+      'Write-ups for a symptom: what holds for the reader’s bench first, then what is not known for it, then the rest',
+    query: SearchQuery,
+    response: SearchResults,
+    problems: ['search-unavailable'],
   }),
 };
 

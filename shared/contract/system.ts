@@ -6,7 +6,27 @@ export const Health = z.object({ ok: z.boolean(), database: Part, search: Part, 
 export type Health = z.infer<typeof Health>;
 
 export const systemRoutes = {
-  health: route({ method: 'get', path: '/api/health', tag: 'system', access: anyone, summary: 'Whether database, search, mail and photo store answer (503 when one does not)', response: Health }),
-  openApi: route({ method: 'get', path: '/api/openapi.json', tag: 'system', access: anyone, summary: 'This document', response: z.unknown() }),
-  apiPage: route({ method: 'get', path: '/api/reference', tag: 'system', access: anyone, summary: 'This document as a page' }),
+  health: route({
+    method: 'get',
+    path: '/api/health',
+    tag: 'system',
+    access: anyone,
+    summary: 'Whether database, search, mail and photo store answer (503 when one does not)',
+    response: Health,
+  }),
+  openApi: route({
+    method: 'get',
+    path: '/api/openapi.json',
+    tag: 'system',
+    access: anyone,
+    summary: 'This document',
+    response: z.unknown(),
+  }),
+  apiPage: route({
+    method: 'get',
+    path: '/api/reference',
+    tag: 'system',
+    access: anyone,
+    summary: 'This document as a page',
+  }),
 };

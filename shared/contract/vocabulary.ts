@@ -10,8 +10,20 @@ export const AccountRole = z.enum(['member', 'maker', 'moderator', 'administrato
 export type AccountRole = z.infer<typeof AccountRole>;
 
 export const PartKind = z.enum([
-  'telescope', 'focuser', 'focus-motor', 'motor-bracket', 'gear-kit', 'belt-kit', 'spacer', 'clamp',
-  'guide-scope-foot', 'dew-heater', 'camera', 'corrector', 'filter-wheel', 'rotator',
+  'telescope',
+  'focuser',
+  'focus-motor',
+  'motor-bracket',
+  'gear-kit',
+  'belt-kit',
+  'spacer',
+  'clamp',
+  'guide-scope-foot',
+  'dew-heater',
+  'camera',
+  'corrector',
+  'filter-wheel',
+  'rotator',
 ]);
 export type PartKind = z.infer<typeof PartKind>;
 export const partKindWords: Record<PartKind, string> = {
@@ -33,7 +45,18 @@ export const partKindWords: Record<PartKind, string> = {
 
 /** Mating features of a part. */
 export const FeatureKind = z.enum([
-  'boss', 'recess', 'bore', 'barrel', 'thread', 'hole-pattern', 'slot', 'gear', 'pulley', 'shaft', 'dovetail', 'envelope',
+  'boss',
+  'recess',
+  'bore',
+  'barrel',
+  'thread',
+  'hole-pattern',
+  'slot',
+  'gear',
+  'pulley',
+  'shaft',
+  'dovetail',
+  'envelope',
 ]);
 export type FeatureKind = z.infer<typeof FeatureKind>;
 
@@ -84,7 +107,14 @@ export const signalWordMeans: Record<SignalWord, string> = {
 };
 
 /** What a fix disturbs and must be done again. */
-export const Afterwards = z.enum(['camera-angle', 'flats', 'balance', 'collimation', 'back-focus', 'focus-offsets']);
+export const Afterwards = z.enum([
+  'camera-angle',
+  'flats',
+  'balance',
+  'collimation',
+  'back-focus',
+  'focus-offsets',
+]);
 export type Afterwards = z.infer<typeof Afterwards>;
 export const afterwardsWords: Record<Afterwards, string> = {
   'camera-angle': 'camera angle',
@@ -98,10 +128,25 @@ export const afterwardsWords: Record<Afterwards, string> = {
 export const ReadingUnit = z.enum(['mm', 'in', 'um', 'deg', 'arcmin', 'steps', 'N']);
 export type ReadingUnit = z.infer<typeof ReadingUnit>;
 export const readingUnitSymbols: Record<ReadingUnit, string> = {
-  mm: 'mm', in: 'in', um: 'µm', deg: '°', arcmin: '′', steps: 'steps', N: 'N',
+  mm: 'mm',
+  in: 'in',
+  um: 'µm',
+  deg: '°',
+  arcmin: '′',
+  steps: 'steps',
+  N: 'N',
 };
 
-export const Instrument = z.enum(['caliper', 'micrometer', 'ruler', 'feeler-leaf', 'print-model', 'makers-drawing', 'count', 'other']);
+export const Instrument = z.enum([
+  'caliper',
+  'micrometer',
+  'ruler',
+  'feeler-leaf',
+  'print-model',
+  'makers-drawing',
+  'count',
+  'other',
+]);
 export type Instrument = z.infer<typeof Instrument>;
 export const instrumentWords: Record<Instrument, string> = {
   caliper: 'caliper',
@@ -116,7 +161,18 @@ export const instrumentWords: Record<Instrument, string> = {
 
 /** Hazards that a fix's text can name; each wants a caution before publishing. */
 export const HazardKind = z.enum([
-  'blade', 'power-tool', 'dust', 'solvent', 'adhesive', 'heat', 'lithium-cell', 'mains', 'sun', 'swarf-near-optics', 'pinch', 'magnet',
+  'blade',
+  'power-tool',
+  'dust',
+  'solvent',
+  'adhesive',
+  'heat',
+  'lithium-cell',
+  'mains',
+  'sun',
+  'swarf-near-optics',
+  'pinch',
+  'magnet',
 ]);
 export type HazardKind = z.infer<typeof HazardKind>;
 export const hazardKindWords: Record<HazardKind, string> = {

@@ -5,7 +5,16 @@ import { Photo } from './photos.js';
 import { Id, IdText, Instant, PageQuery, Slug, line, pageOf, passage } from './primitives.js';
 import { anyone, route, signedIn } from './route.js';
 import {
-  Afterwards, EditionState, FixKind, HazardKind, Instrument, Permanence, ReadingUnit, SignalWord, Standing, TrialOutcome,
+  Afterwards,
+  EditionState,
+  FixKind,
+  HazardKind,
+  Instrument,
+  Permanence,
+  ReadingUnit,
+  SignalWord,
+  Standing,
+  TrialOutcome,
 } from './vocabulary.js';
 
 export const PersonRef = z.object({ id: Id, displayName: z.string() });
@@ -68,7 +77,11 @@ export const FixView = z.object({
   afterwardsNote: z.string(),
   acceptance: Acceptance.nullable(),
   cautions: z.array(Caution),
-  trialCounts: z.object({ held: z.number().int(), heldForAWhile: z.number().int(), didNotHelp: z.number().int() }),
+  trialCounts: z.object({
+    held: z.number().int(),
+    heldForAWhile: z.number().int(),
+    didNotHelp: z.number().int(),
+  }),
 });
 export type FixView = z.infer<typeof FixView>;
 
@@ -82,8 +95,14 @@ export const EditionView = z.object({
   cause: RichText,
   readings: z.array(
     z.object({
-      key: z.string(), part: z.string().nullable(), revision: RevisionRef.nullable(), dimension: z.string(), value: z.number().nullable(),
-      unit: ReadingUnit, instrument: Instrument, uncertainty: z.number().nullable(),
+      key: z.string(),
+      part: z.string().nullable(),
+      revision: RevisionRef.nullable(),
+      dimension: z.string(),
+      value: z.number().nullable(),
+      unit: ReadingUnit,
+      instrument: Instrument,
+      uncertainty: z.number().nullable(),
     }),
   ),
   fixes: z.array(FixView),
@@ -94,7 +113,12 @@ export const EditionView = z.object({
 export type EditionView = z.infer<typeof EditionView>;
 
 export const EditionLine = z.object({
-  id: Id, number: z.number().int(), author: PersonRef, changeNote: z.string(), publishedAt: Instant, title: z.string(),
+  id: Id,
+  number: z.number().int(),
+  author: PersonRef,
+  changeNote: z.string(),
+  publishedAt: Instant,
+  title: z.string(),
 });
 export type EditionLine = z.infer<typeof EditionLine>;
 
@@ -117,11 +141,18 @@ export type WriteUpPage = z.infer<typeof WriteUpPage>;
 /** A run of words that both editions share, or only the earlier or the later one has. */
 export const DifferencePiece = z.object({ kind: z.enum(['same', 'removed', 'added']), text: z.string() });
 /** One field of the edition, such as "Cause" or "Fix “Coin behind the plate”, step 2". */
-export const FieldDifference = z.object({ field: z.string(), label: z.string(), pieces: z.array(DifferencePiece) });
+export const FieldDifference = z.object({
+  field: z.string(),
+  label: z.string(),
+  pieces: z.array(DifferencePiece),
+});
 export type FieldDifference = z.infer<typeof FieldDifference>;
 
 export const EditionComparison = z.object({
-  from: EditionLine.nullable(), to: EditionLine, changed: z.array(FieldDifference), unchangedFields: z.number().int(),
+  from: EditionLine.nullable(),
+  to: EditionLine,
+  changed: z.array(FieldDifference),
+  unchangedFields: z.number().int(),
 });
 export type EditionComparison = z.infer<typeof EditionComparison>;
 
@@ -145,7 +176,12 @@ export const Draft = z.object({
 export type Draft = z.infer<typeof Draft>;
 
 export const MyWriteUp = z.object({
-  editionId: Id, slug: Slug.nullable(), number: z.number().int(), state: EditionState, title: z.string(), updatedAt: Instant,
+  editionId: Id,
+  slug: Slug.nullable(),
+  number: z.number().int(),
+  state: EditionState,
+  title: z.string(),
+  updatedAt: Instant,
   returnReason: z.string().nullable(),
 });
 export type MyWriteUp = z.infer<typeof MyWriteUp>;
@@ -156,42 +192,161 @@ const tag = 'write-ups';
 const changeNote = line(300);
 
 export const writeUpRoutes = {
-  readWriteUp: route({ method: 'get', path: '/api/write-ups/:slug', tag, access: anyone, summary: 'The published edition with cautions and trials', params: slugParams, response: WriteUpPage }),
-  listEditions: route({ method: 'get', path: '/api/write-ups/:slug/editions', tag, access: anyone, summary: 'Every published edition: who, when, why; newest first', params: slugParams, response: z.object({ items: z.array(EditionLine) }) }),
+  readWriteUp: route({
+    method: 'get',
+    path: '/api/write-ups/:slug',
+    tag,
+    access: anyone,
+    summary: 'The published edition with cautions and trials',
+    params: slugParams,
+    response: WriteUpPage,
+  }),
+  listEditions: route({
+    method: 'get',
+    path: '/api/write-ups/:slug/editions',
+    tag,
+    access: anyone,
+    summary: 'Every published edition: who, when, why; newest first',
+    params: slugParams,
+    response: z.object({ items: z.array(EditionLine) }),
+  }),
   readEdition: route({
-    method: 'get', path: '/api/write-ups/:slug/editions/:number', tag, access: anyone, summary: 'One published edition as it was',
-    params: z.object({ slug: Slug, number: IdText }), response: z.object({ slug: Slug, edition: EditionLine, latestNumber: z.number().int(), view: EditionView }),
+    method: 'get',
+    path: '/api/write-ups/:slug/editions/:number',
+    tag,
+    access: anyone,
+    summary: 'One published edition as it was',
+    params: z.object({ slug: Slug, number: IdText }),
+    response: z.object({
+      slug: Slug,
+      edition: EditionLine,
+      latestNumber: z.number().int(),
+      view: EditionView,
+    }),
   }),
   compareEditions: route({
-    method: 'get', path: '/api/write-ups/:slug/comparison', tag, access: anyone, summary: 'Two published editions, word by word',
-    params: slugParams, query: z.strictObject({ from: IdText, to: IdText }), response: EditionComparison,
+    method: 'get',
+    path: '/api/write-ups/:slug/comparison',
+    tag,
+    access: anyone,
+    summary: 'Two published editions, word by word',
+    params: slugParams,
+    query: z.strictObject({ from: IdText, to: IdText }),
+    response: EditionComparison,
   }),
-  listMine: route({ method: 'get', path: '/api/my/write-ups', tag, access: signedIn, summary: 'My editions, the last touched first', query: PageQuery.extend({ state: EditionState.optional() }), response: pageOf(MyWriteUp) }),
-  startWriteUp: route({ method: 'post', path: '/api/write-ups', tag, access: signedIn, status: 201, summary: 'Start a write-up: an empty draft', body: z.strictObject({ title: line(140).optional() }), response: Draft }),
+  listMine: route({
+    method: 'get',
+    path: '/api/my/write-ups',
+    tag,
+    access: signedIn,
+    summary: 'My editions, the last touched first',
+    query: PageQuery.extend({ state: EditionState.optional() }),
+    response: pageOf(MyWriteUp),
+  }),
+  startWriteUp: route({
+    method: 'post',
+    path: '/api/write-ups',
+    tag,
+    access: signedIn,
+    status: 201,
+    summary: 'Start a write-up: an empty draft',
+    body: z.strictObject({ title: line(140).optional() }),
+    response: Draft,
+  }),
   startEdition: route({
-    method: 'post', path: '/api/write-ups/:slug/editions', tag, access: signedIn, status: 201,
-    summary: 'Start the next edition from the published one (its authors and moderators); an open draft of the caller is given back instead of a second one',
-    params: slugParams, response: Draft,
+    method: 'post',
+    path: '/api/write-ups/:slug/editions',
+    tag,
+    access: signedIn,
+    status: 201,
+    summary:
+      'Start the next edition from the published one (its authors and moderators); an open draft of the caller is given back instead of a second one',
+    params: slugParams,
+    response: Draft,
   }),
-  readDraft: route({ method: 'get', path: '/api/drafts/:id', tag, access: signedIn, summary: 'A draft of mine; carries an ETag', params: idParams, response: Draft }),
+  readDraft: route({
+    method: 'get',
+    path: '/api/drafts/:id',
+    tag,
+    access: signedIn,
+    summary: 'A draft of mine; carries an ETag',
+    params: idParams,
+    response: Draft,
+  }),
   saveDraft: route({
-    method: 'put', path: '/api/drafts/:id', tag, access: signedIn, ifMatch: true, summary: 'Save a draft; a lost update is refused with what changed',
-    params: idParams, body: z.strictObject({ content: EditionContent, changeNote }), response: Draft, problems: ['edition-moved-on', 'precondition-needed', 'edition-state'],
+    method: 'put',
+    path: '/api/drafts/:id',
+    tag,
+    access: signedIn,
+    ifMatch: true,
+    summary: 'Save a draft; a lost update is refused with what changed',
+    params: idParams,
+    body: z.strictObject({ content: EditionContent, changeNote }),
+    response: Draft,
+    problems: ['edition-moved-on', 'precondition-needed', 'edition-state'],
   }),
-  discardDraft: route({ method: 'delete', path: '/api/drafts/:id', tag, access: signedIn, summary: 'Throw a draft or returned edition away; it can be brought back', params: idParams, problems: ['edition-state'] }),
-  restoreDraft: route({ method: 'post', path: '/api/drafts/:id/restore', tag, access: signedIn, summary: 'Bring a thrown-away draft back', params: idParams, response: Draft, problems: ['edition-state'] }),
-  previewDraft: route({ method: 'get', path: '/api/drafts/:id/preview', tag, access: signedIn, summary: 'The draft as its page would show it', params: idParams, response: z.object({ view: EditionView }) }),
+  discardDraft: route({
+    method: 'delete',
+    path: '/api/drafts/:id',
+    tag,
+    access: signedIn,
+    summary: 'Throw a draft or returned edition away; it can be brought back',
+    params: idParams,
+    problems: ['edition-state'],
+  }),
+  restoreDraft: route({
+    method: 'post',
+    path: '/api/drafts/:id/restore',
+    tag,
+    access: signedIn,
+    summary: 'Bring a thrown-away draft back',
+    params: idParams,
+    response: Draft,
+    problems: ['edition-state'],
+  }),
+  previewDraft: route({
+    method: 'get',
+    path: '/api/drafts/:id/preview',
+    tag,
+    access: signedIn,
+    summary: 'The draft as its page would show it',
+    params: idParams,
+    response: z.object({ view: EditionView }),
+  }),
   submitDraft: route({
-    method: 'post', path: '/api/drafts/:id/submit', tag, access: signedIn, ifMatch: true, summary: 'Hand a draft to the desk; a later edition needs a change note',
-    params: idParams, response: Draft, problems: ['edition-moved-on', 'precondition-needed', 'edition-state', 'not-complete'],
+    method: 'post',
+    path: '/api/drafts/:id/submit',
+    tag,
+    access: signedIn,
+    ifMatch: true,
+    summary: 'Hand a draft to the desk; a later edition needs a change note',
+    params: idParams,
+    response: Draft,
+    problems: ['edition-moved-on', 'precondition-needed', 'edition-state', 'not-complete'],
   }),
-  recallDraft: route({ method: 'post', path: '/api/drafts/:id/recall', tag, access: signedIn, summary: 'Take a submitted edition back from the desk', params: idParams, response: Draft, problems: ['edition-state'] }),
+  recallDraft: route({
+    method: 'post',
+    path: '/api/drafts/:id/recall',
+    tag,
+    access: signedIn,
+    summary: 'Take a submitted edition back from the desk',
+    params: idParams,
+    response: Draft,
+    problems: ['edition-state'],
+  }),
   reportTrial: route({
-    method: 'post', path: '/api/write-ups/:slug/trials', tag, access: signedIn, status: 201,
+    method: 'post',
+    path: '/api/write-ups/:slug/trials',
+    tag,
+    access: signedIn,
+    status: 201,
     summary: 'Report a trial of a fix; one per person and fix, a second replaces the first',
     params: slugParams,
     body: z.strictObject({
-      fixKey: z.string().min(8).max(36), outcome: TrialOutcome, revisionIds: z.array(Id).max(8), note: passage(2000),
+      fixKey: z.string().min(8).max(36),
+      outcome: TrialOutcome,
+      revisionIds: z.array(Id).max(8),
+      note: passage(2000),
       figure: z.number().finite().min(-100_000).max(100_000).nullable(),
     }),
     response: Trial,

@@ -44,7 +44,12 @@ function reasonFor(side: SpokenPart, item: OwnedPart): Reason {
     : side.notFor.some((revision) => revision.id === id)
       ? 'written-for-others'
       : 'not-known';
-  return { verdict, part: side.part.name, mine: item.revision, holdsFor: side.holdsFor.map((revision) => revision.label) };
+  return {
+    verdict,
+    part: side.part.name,
+    mine: item.revision,
+    holdsFor: side.holdsFor.map((revision) => revision.label),
+  };
 }
 
 /** The statement shown to the reader: "holds for your M1 Rev C", "written for M1 Rev A–B only", "not known for your M1 Rev D". */
@@ -56,5 +61,7 @@ export function applicabilityWords(reason: Reason): string {
 }
 
 function joinLabels(labels: readonly string[]): string {
-  return labels.length <= 1 ? (labels[0] ?? 'no revision') : `${labels.slice(0, -1).join(', ')} and ${labels.at(-1)}`;
+  return labels.length <= 1
+    ? (labels[0] ?? 'no revision')
+    : `${labels.slice(0, -1).join(', ')} and ${labels.at(-1)}`;
 }

@@ -22,7 +22,11 @@ export interface Figure {
 export const coverage95 = 1.959963984540054;
 
 export function figure(value: number, uncertainty: number): Figure {
-  return { value, uncertainty, interval: [value - coverage95 * uncertainty, value + coverage95 * uncertainty] };
+  return {
+    value,
+    uncertainty,
+    interval: [value - coverage95 * uncertainty, value + coverage95 * uncertainty],
+  };
 }
 
 /** Millimetres in an inch, exact since 1959. */

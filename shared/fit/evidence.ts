@@ -29,15 +29,25 @@ export const priorWeight = 2;
 export function moveChance(evidence: Evidence): MovedChance {
   const { predicted, sat, didNotSit } = evidence;
   if (!(predicted >= 0 && predicted <= 1)) throw new RangeError('A chance lies between 0 and 1.');
-  if (![sat, didNotSit].every((count) => Number.isInteger(count) && count >= 0)) throw new RangeError('Counts are whole numbers from zero.');
+  if (![sat, didNotSit].every((count) => Number.isInteger(count) && count >= 0))
+    throw new RangeError('Counts are whole numbers from zero.');
   const prior = Math.min(0.999, Math.max(0.001, predicted));
   const a = priorWeight * prior;
   const b = priorWeight * (1 - prior);
-  const interval: [number, number] = [betaQuantile(0.05, a + sat, b + didNotSit), betaQuantile(0.95, a + sat, b + didNotSit)];
+  const interval: [number, number] = [
+    betaQuantile(0.05, a + sat, b + didNotSit),
+    betaQuantile(0.95, a + sat, b + didNotSit),
+  ];
   const bayesFactorAgainst = Math.exp(
     logBeta(1 + sat, 1 + didNotSit) - logBeta(1, 1) - (logBeta(a + sat, b + didNotSit) - logBeta(a, b)),
   );
-  return { ...evidence, chance: (a + sat) / (priorWeight + sat + didNotSit), interval, bayesFactorAgainst, contradicts: bayesFactorAgainst > 20 };
+  return {
+    ...evidence,
+    chance: (a + sat) / (priorWeight + sat + didNotSit),
+    interval,
+    bayesFactorAgainst,
+    contradicts: bayesFactorAgainst > 20,
+  };
 }
 
 function logBeta(a: number, b: number): number {

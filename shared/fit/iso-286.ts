@@ -56,7 +56,9 @@ export function shaftDeviation(nominal: number, tolerance: string): Deviations {
     return { upper: lower + width, lower };
   }
   const deviation = shaftDeviations[letter]![stepOf(nominal, steps)]!;
-  return letter <= 'h' ? { upper: deviation, lower: deviation - width } : { upper: deviation + width, lower: deviation };
+  return letter <= 'h'
+    ? { upper: deviation, lower: deviation - width }
+    : { upper: deviation + width, lower: deviation };
 }
 
 /** Deviations of a hole class such as "H7" or "D10" at a nominal size, µm. RangeError for a class or size not known here. */
@@ -88,7 +90,15 @@ export function isoFit(nominal: number, hole: string, shaft: string): IsoFit {
 
 /** Preferred hole-basis fits (ISO 286-1:2010, annex), from the loosest to the tightest. */
 export const preferredFits = [
-  ['H11', 'd9'], ['H9', 'e8'], ['H8', 'f7'], ['H7', 'g6'], ['H7', 'h6'], ['H7', 'k6'], ['H7', 'n6'], ['H7', 'p6'], ['H7', 's6'],
+  ['H11', 'd9'],
+  ['H9', 'e8'],
+  ['H8', 'f7'],
+  ['H7', 'g6'],
+  ['H7', 'h6'],
+  ['H7', 'k6'],
+  ['H7', 'n6'],
+  ['H7', 'p6'],
+  ['H7', 's6'],
 ] as const;
 
 /**
@@ -102,7 +112,8 @@ export function nearestFit(nominal: number, clearance: number): IsoFit | null {
   const loosest = Math.max(...fits.map((fit) => fit.largestClearance));
   const tightest = Math.min(...fits.map((fit) => fit.smallestClearance));
   if (measured > loosest || measured < tightest) return null;
-  const distance = (fit: IsoFit): number => Math.abs((fit.largestClearance + fit.smallestClearance) / 2 - measured);
+  const distance = (fit: IsoFit): number =>
+    Math.abs((fit.largestClearance + fit.smallestClearance) / 2 - measured);
   return fits.reduce((best, fit) => (distance(fit) < distance(best) ? fit : best));
 }
 

@@ -1,10 +1,8 @@
-import { normalProbability } from '../statistics/normal-distribution.js';
 import type { Process } from '../statistics/consensus.js';
 import { checkDimension, figure, type Dimension, type Figure } from './dimension.js';
 import { nearestFit, type IsoFit } from './iso-286.js';
 import { tiltOf, type Tilt } from './tilt.js';
-
-export type SeatVerdict = 'seats-with-room' | 'seats-snugly' | 'tight' | 'will-not-seat' | 'not-known';
+import { chancePositive, verdictOf, type SeatVerdict } from './verdict.js';
 
 /** What is to mate: a boss that enters a recess (or a barrel a bore). Any dimension may be missing (null). Lengths in mm. */
 export interface SeatInput {
@@ -71,31 +69,55 @@ export function judgeSeat(input: SeatInput): SeatResult {
   const chanceEnters = clearance && chancePositive(clearance);
   const chanceFaceMeets = depthSpare && chancePositive(depthSpare);
   if (clearance === null || chanceEnters === null) {
-    return { verdict: 'not-known', clearance, chanceEnters, depthSpare, chanceFaceMeets, chanceSeats: null, carriedBy: null, gap: null, tilt: null, isoFit: null, missing };
+    return {
+      verdict: 'not-known',
+      clearance,
+      chanceEnters,
+      depthSpare,
+      chanceFaceMeets,
+      chanceSeats: null,
+      carriedBy: null,
+      gap: null,
+      tilt: null,
+      isoFit: null,
+      missing,
+    };
   }
   const chanceSeats = chanceEnters * (chanceFaceMeets ?? 1);
   const snugLimit = input.snugLimit ?? defaultSnugLimit[input.process];
-  const verdict = chanceSeats >= 0.95 ? (clearance.value > snugLimit ? 'seats-with-room' : 'seats-snugly') : chanceSeats <= 0.05 ? 'will-not-seat' : 'tight';
-  const carriedBy = chanceEnters < 0.5 ? 'boss-on-face' : (chanceFaceMeets ?? 1) < 0.5 ? 'boss-on-floor' : 'faces';
+  const verdict = verdictOf(chanceSeats, clearance.value, snugLimit);
+  const carriedBy =
+    chanceEnters < 0.5 ? 'boss-on-face' : (chanceFaceMeets ?? 1) < 0.5 ? 'boss-on-floor' : 'faces';
   const gap = gapLeft(carriedBy, bossHeight, depthSpare);
   return {
-    verdict, clearance, chanceEnters, depthSpare, chanceFaceMeets, chanceSeats, carriedBy, gap,
+    verdict,
+    clearance,
+    chanceEnters,
+    depthSpare,
+    chanceFaceMeets,
+    chanceSeats,
+    carriedBy,
+    gap,
     tilt: gap && { best: tiltOf(0, 1), worst: worstTilt(gap.value, input.plateWidth, bossDiameter!.value) },
-    isoFit: input.process === 'machined' && carriedBy !== 'boss-on-face' ? nearestFit(bossDiameter!.value, clearance.value) : null,
+    isoFit:
+      input.process === 'machined' && carriedBy !== 'boss-on-face'
+        ? nearestFit(bossDiameter!.value, clearance.value)
+        : null,
     missing,
   };
 }
 
 function difference(outer: Dimension | null, inner: Dimension | null): Figure | null {
-  return outer && inner && figure(outer.value - inner.value, Math.hypot(outer.uncertainty, inner.uncertainty));
+  return (
+    outer && inner && figure(outer.value - inner.value, Math.hypot(outer.uncertainty, inner.uncertainty))
+  );
 }
 
-function chancePositive(value: Figure): number {
-  if (value.uncertainty === 0) return value.value >= 0 ? 1 : 0;
-  return normalProbability(value.value / value.uncertainty);
-}
-
-function gapLeft(carriedBy: SeatResult['carriedBy'], bossHeight: Dimension | null, depthSpare: Figure | null): Figure | null {
+function gapLeft(
+  carriedBy: SeatResult['carriedBy'],
+  bossHeight: Dimension | null,
+  depthSpare: Figure | null,
+): Figure | null {
   if (carriedBy === 'faces') return figure(0, 0);
   if (carriedBy === 'boss-on-floor') return depthSpare && figure(-depthSpare.value, depthSpare.uncertainty);
   return bossHeight && figure(bossHeight.value, bossHeight.uncertainty);

@@ -4,7 +4,8 @@ import { coverage95 } from './dimension.js';
 export interface StockKind {
   readonly id: string;
   readonly name: string;
-  readonly family: 'coin' | 'washer' | 'shim-ring' | 'feeler-leaf' | 'sheet' | 'tape' | 'printed-layer' | 'own';
+  readonly family:
+    'coin' | 'washer' | 'shim-ring' | 'feeler-leaf' | 'sheet' | 'tape' | 'printed-layer' | 'own';
   readonly thickness: number;
   /** Standard uncertainty of one piece's thickness. */
   readonly uncertainty: number;
@@ -60,14 +61,20 @@ export function bestStacks(question: ShimQuestion): ShimStack[] {
     .filter((kind) => limitOf(kind, question.copies) > 0)
     .sort((one, other) => other.thickness - one.thickness || one.uncertainty - other.uncertainty);
   const found: ShimStack[] = [];
-  for (let count = 1; count <= question.mostPieces; count += 1) found.push(...bestOfCount(kinds, count, question));
+  for (let count = 1; count <= question.mostPieces; count += 1)
+    found.push(...bestOfCount(kinds, count, question));
   return found.sort(byWorth).slice(0, question.wanted);
 }
 
 function byWorth(one: ShimStack, other: ShimStack): number {
   if (one.withinTolerance !== other.withinTolerance) return one.withinTolerance ? -1 : 1;
   const count = one.withinTolerance ? one.count - other.count : 0;
-  return count || Math.abs(one.error) - Math.abs(other.error) || one.count - other.count || one.uncertainty - other.uncertainty;
+  return (
+    count ||
+    Math.abs(one.error) - Math.abs(other.error) ||
+    one.count - other.count ||
+    one.uncertainty - other.uncertainty
+  );
 }
 
 function bestOfCount(kinds: readonly StockKind[], count: number, question: ShimQuestion): ShimStack[] {
@@ -140,7 +147,11 @@ function describe(chosen: Int32Array, kinds: readonly StockKind[], question: Shi
   const uncertainty = Math.hypot(own, question.gapUncertainty);
   const error = thickness - question.gap;
   return {
-    pieces, count: chosen.length, thickness, error, uncertainty,
+    pieces,
+    count: chosen.length,
+    thickness,
+    error,
+    uncertainty,
     interval: [error - coverage95 * uncertainty, error + coverage95 * uncertainty],
     // A gap and a tolerance typed as decimals must not fail by the last bit of their binary forms.
     withinTolerance: Math.abs(error) <= question.tolerance + 1e-9,
@@ -155,10 +166,14 @@ function check(question: ShimQuestion): void {
   const { gap, tolerance, mostPieces, wanted, stock, gapUncertainty } = question;
   if (!(gap > 0 && gap <= 100)) throw new RangeError('The gap must lie over 0 and up to 100 mm.');
   if (!(tolerance >= 0 && tolerance <= 10)) throw new RangeError('The tolerance must lie from 0 to 10 mm.');
-  if (!(gapUncertainty >= 0 && Number.isFinite(gapUncertainty))) throw new RangeError('The uncertainty of the gap must be zero or more.');
-  if (!Number.isInteger(mostPieces) || mostPieces < 1 || mostPieces > 8) throw new RangeError('From 1 to 8 pieces can be stacked.');
-  if (!Number.isInteger(wanted) || wanted < 1 || wanted > 100) throw new RangeError('From 1 to 100 stacks can be asked for.');
-  if (stock.some((kind) => !(kind.thickness > 0 && Number.isFinite(kind.thickness)))) throw new RangeError('Every piece of stock needs a thickness over 0 mm.');
+  if (!(gapUncertainty >= 0 && Number.isFinite(gapUncertainty)))
+    throw new RangeError('The uncertainty of the gap must be zero or more.');
+  if (!Number.isInteger(mostPieces) || mostPieces < 1 || mostPieces > 8)
+    throw new RangeError('From 1 to 8 pieces can be stacked.');
+  if (!Number.isInteger(wanted) || wanted < 1 || wanted > 100)
+    throw new RangeError('From 1 to 100 stacks can be asked for.');
+  if (stock.some((kind) => !(kind.thickness > 0 && Number.isFinite(kind.thickness))))
+    throw new RangeError('Every piece of stock needs a thickness over 0 mm.');
 }
 
 export interface ThreePoints {
@@ -174,7 +189,11 @@ export interface ThreePoints {
  * both axes, hence a root-mean-square tilt of atan(2u / (√3 r)). Bolt circle diameter and u in mm, both > 0 and ≥ 0.
  */
 export function threePoints(boltCircle: number, stackSpread: number): ThreePoints {
-  if (!(boltCircle > 0) || !(stackSpread >= 0)) throw new RangeError('The bolt circle must be over 0 mm and the spread zero or more.');
+  if (!(boltCircle > 0) || !(stackSpread >= 0))
+    throw new RangeError('The bolt circle must be over 0 mm and the spread zero or more.');
   const leastRadius = 0.6 * (boltCircle / 2);
-  return { leastRadius, residualTilt: (Math.atan((2 * stackSpread) / (Math.sqrt(3) * leastRadius)) * 180) / Math.PI };
+  return {
+    leastRadius,
+    residualTilt: (Math.atan((2 * stackSpread) / (Math.sqrt(3) * leastRadius)) * 180) / Math.PI,
+  };
 }

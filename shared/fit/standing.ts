@@ -17,11 +17,19 @@ export function passesAcceptance(figure: number, acceptance: Acceptance): boolea
  * How far a fix is borne out: made right (the maker corrected the part), else measured (a trial that held has a figure
  * which passes the acceptance figure), else tried (somebody other than an author reported a trial), else told.
  */
-export function standingOf(trials: readonly TrialEvidence[], acceptance: Acceptance | null, madeRight: boolean): Standing {
+export function standingOf(
+  trials: readonly TrialEvidence[],
+  acceptance: Acceptance | null,
+  madeRight: boolean,
+): Standing {
   if (madeRight) return 'made-right';
   const byOthers = trials.filter((trial) => !trial.byAuthor);
   const measured = byOthers.some(
-    (trial) => trial.outcome === 'held' && trial.figure !== null && acceptance !== null && passesAcceptance(trial.figure, acceptance),
+    (trial) =>
+      trial.outcome === 'held' &&
+      trial.figure !== null &&
+      acceptance !== null &&
+      passesAcceptance(trial.figure, acceptance),
   );
   if (measured) return 'measured';
   return byOthers.length > 0 ? 'tried' : 'told';

@@ -37,15 +37,20 @@ export interface TrimResult {
  * RangeError for an allowance or clearance below zero.
  */
 export function sizeTrim(input: TrimInput): TrimResult {
-  if (!(input.allowance >= 0) || !(input.clearanceWanted >= 0)) throw new RangeError('Allowance and clearance must be zero or more.');
+  if (!(input.allowance >= 0) || !(input.clearanceWanted >= 0))
+    throw new RangeError('Allowance and clearance must be zero or more.');
   const spread = Math.hypot(input.bossDiameter.uncertainty, input.recessDiameter.uncertainty);
   const off = input.bossDiameter.value - input.recessDiameter.value + input.clearanceWanted;
   const offDiameter = off > 0 ? figure(off, spread) : null;
   // The recess is opened to the boss plus the wanted clearance, so only the boss's own uncertainty remains in it.
-  const newRecess = offDiameter && figure(input.bossDiameter.value + input.clearanceWanted, input.bossDiameter.uncertainty);
+  const newRecess =
+    offDiameter && figure(input.bossDiameter.value + input.clearanceWanted, input.bossDiameter.uncertainty);
   const wallLeft =
     newRecess && input.recessOuter
-      ? figure((input.recessOuter.value - newRecess.value) / 2, Math.hypot(input.recessOuter.uncertainty, newRecess.uncertainty) / 2)
+      ? figure(
+          (input.recessOuter.value - newRecess.value) / 2,
+          Math.hypot(input.recessOuter.uncertainty, newRecess.uncertainty) / 2,
+        )
       : null;
   return {
     offHeight: figure(input.bossHeight.value + input.allowance, input.bossHeight.uncertainty),

@@ -11,7 +11,12 @@ export function logGamma(x: number): number {
     y += 1;
   }
   const inverse = 1 / (y * y);
-  const series = (1 / 12 - inverse * (1 / 360 - inverse * (1 / 1260 - inverse * (1 / 1680 - inverse * (1 / 1188 - (inverse * 691) / 360360))))) / y;
+  const series =
+    (1 / 12 -
+      inverse *
+        (1 / 360 -
+          inverse * (1 / 1260 - inverse * (1 / 1680 - inverse * (1 / 1188 - (inverse * 691) / 360360))))) /
+    y;
   return (y - 0.5) * Math.log(y) - y + Math.log(2 * Math.PI) / 2 + series - shift;
 }
 
@@ -25,7 +30,8 @@ export function betaProbability(x: number, a: number, b: number): number {
   if (!(x >= 0 && x <= 1)) throw new RangeError('A beta variable lies between 0 and 1.');
   if (x === 0 || x === 1) return x;
   if (x > (a + 1) / (a + b + 2)) return 1 - betaProbability(1 - x, b, a);
-  const front = Math.exp(logGamma(a + b) - logGamma(a) - logGamma(b) + a * Math.log(x) + b * Math.log1p(-x)) / a;
+  const front =
+    Math.exp(logGamma(a + b) - logGamma(a) - logGamma(b) + a * Math.log(x) + b * Math.log1p(-x)) / a;
   const tiny = 1e-300;
   let c = 1;
   let d = 1 / nonZero(1 - ((a + b) * x) / (a + 1));

@@ -46,8 +46,12 @@ export function consensusOf(readings: readonly Result[], process: Process): Cons
   const counted = readings.filter((_, index) => !unitSlips.includes(index));
   if (counted.length === 0) throw new RangeError('At least one reading is needed.');
   const robust = robustMean(counted);
-  const spread = counted.length <= 3 ? Math.max(Math.sqrt(robust.betweenVariance), defaultSpread[process]) : Math.sqrt(robust.betweenVariance);
-  const uncertainty = counted.length <= 3 ? Math.max(robust.uncertainty, thinUncertainty(counted, spread)) : robust.uncertainty;
+  const spread =
+    counted.length <= 3
+      ? Math.max(Math.sqrt(robust.betweenVariance), defaultSpread[process])
+      : Math.sqrt(robust.betweenVariance);
+  const uncertainty =
+    counted.length <= 3 ? Math.max(robust.uncertainty, thinUncertainty(counted, spread)) : robust.uncertainty;
   const weights = [...robust.weights];
   return {
     count: readings.length,
@@ -64,10 +68,19 @@ export function consensusOf(readings: readonly Result[], process: Process): Cons
 }
 
 function thinUncertainty(readings: readonly Result[], spread: number): number {
-  return 1 / Math.sqrt(readings.reduce((total, reading) => total + 1 / (reading.uncertainty ** 2 + spread ** 2), 0));
+  return (
+    1 /
+    Math.sqrt(readings.reduce((total, reading) => total + 1 / (reading.uncertainty ** 2 + spread ** 2), 0))
+  );
 }
 
-function robustMean(readings: readonly Result[]): { mean: number; uncertainty: number; betweenVariance: number; weights: number[]; converged: boolean } {
+function robustMean(readings: readonly Result[]): {
+  mean: number;
+  uncertainty: number;
+  betweenVariance: number;
+  weights: number[];
+  converged: boolean;
+} {
   const values = readings.map((reading) => reading.value);
   let mean = medianOf(values);
   let between = (1.4826 * medianDeviation(values)) ** 2;
@@ -79,7 +92,9 @@ function robustMean(readings: readonly Result[]): { mean: number; uncertainty: n
     }));
     const anyCut = cut.some((reading, index) => reading.value !== values[index]);
     const fit = derSimonianLaird(cut, anyCut ? 1 / shareLeftByCut : 1);
-    const converged = Math.abs(fit.mean - mean) <= 1e-12 * Math.max(1, Math.abs(mean)) && Math.abs(fit.betweenVariance - between) <= 1e-9 * (fit.betweenVariance + 1e-12);
+    const converged =
+      Math.abs(fit.mean - mean) <= 1e-12 * Math.max(1, Math.abs(mean)) &&
+      Math.abs(fit.betweenVariance - between) <= 1e-9 * (fit.betweenVariance + 1e-12);
     mean = fit.mean;
     between = fit.betweenVariance;
     if (converged || round === 500) {

@@ -32,6 +32,9 @@ export function ratioToNumber(numerator: bigint, denominator: bigint): number {
   if (numerator === 0n) return 0;
   // 25 significant digits before the one rounding to double.
   const shift = 25 - (numerator.toString().length - denominator.toString().length);
-  const quotient = shift >= 0 ? (numerator * 10n ** BigInt(shift)) / denominator : numerator / (denominator * 10n ** BigInt(-shift));
+  const quotient =
+    shift >= 0
+      ? (numerator * 10n ** BigInt(shift)) / denominator
+      : numerator / (denominator * 10n ** BigInt(-shift));
   return Number(`${quotient}e${-shift}`);
 }

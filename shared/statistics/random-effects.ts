@@ -22,7 +22,8 @@ export interface RandomEffects {
  */
 export function derSimonianLaird(results: readonly Result[], inflation = 1): RandomEffects {
   if (results.length === 0) throw new RangeError('At least one result is needed.');
-  if (results.some((result) => !(result.uncertainty > 0))) throw new RangeError('Every result needs a positive standard uncertainty.');
+  if (results.some((result) => !(result.uncertainty > 0)))
+    throw new RangeError('Every result needs a positive standard uncertainty.');
   const fixed = results.map((result) => 1 / result.uncertainty ** 2);
   const total = sumOf(fixed);
   const fixedMean = sumOf(results.map((result, index) => result.value * fixed[index]!)) / total;
