@@ -48,15 +48,10 @@ export function createPartPageStore(knex: Knex) {
 
 async function revisionsOf(knex: Knex, partId: number): Promise<Revision[]> {
   return knex('revisions')
-    .select('id', { partId: 'part_id' }, 'label', { howToTell: 'how_to_tell', whatChanged: 'what_changed' })
-    .select({ soldFrom: dayOf(knex, 'sold_from'), soldTo: dayOf(knex, 'sold_to') })
+    .select('id', { partId: 'part_id' }, 'label', { soldFrom: 'sold_from', soldTo: 'sold_to' })
+    .select({ howToTell: 'how_to_tell', whatChanged: 'what_changed' })
     .where('part_id', partId)
     .orderBy('position');
-}
-
-// A day has no time zone: read as text, it cannot slip by one.
-function dayOf(knex: Knex, column: string): Knex.Raw<string | null> {
-  return knex.raw("DATE_FORMAT(??, '%Y-%m-%d')", [column]);
 }
 
 async function featuresOf(knex: Knex, partId: number): Promise<Feature[]> {
