@@ -1,0 +1,51 @@
+import { createServer, type IncomingMessage, type Server, type ServerResponse } from 'node:http';
+import type { Mailbox } from './mailbox.js';
+import { listPage, mailPage } from './pages.js';
+
+const headers = {
+  // A mail's HTML is shown as it came: nothing in it may load or run.
+  'Content-Security-Policy':
+    "default-src 'none'; style-src 'unsafe-inline'; img-src data:; frame-src 'self'; base-uri 'none'",
+  'X-Content-Type-Options': 'nosniff',
+  'Cache-Control': 'no-store',
+};
+
+/**
+ * Pages to read the mail by, and for tests `GET /messages.json?to=<address>` (newest first) and `DELETE /messages`.
+ */
+export function createMailboxServer(mailbox: Mailbox): Server {
+  return createServer((request, response) => answer(mailbox, request, response));
+}
+
+function answer(mailbox: Mailbox, request: IncomingMessage, response: ServerResponse): void {
+  const address = new URL(request.url ?? '/', 'http://mailbox');
+  if (request.method === 'DELETE' && address.pathname === '/messages') {
+    mailbox.empty();
+    response.writeHead(204, headers).end();
+    return;
+  }
+  if (request.method !== 'GET') {
+    send(response, 405, 'text/plain', 'Only GET, and DELETE /messages.');
+    return;
+  }
+  if (address.pathname === '/messages.json') {
+    send(
+      response,
+      200,
+      'application/json',
+      JSON.stringify(mailbox.list(address.searchParams.get('to') ?? undefined)),
+    );
+    return;
+  }
+  if (address.pathname === '/') {
+    send(response, 200, 'text/html', listPage(mailbox.list()));
+    return;
+  }
+  const mail = mailbox.find(Number(/^\/messages\/(\d{1,9})$/.exec(address.pathname)?.[1]));
+  if (mail) send(response, 200, 'text/html', mailPage(mail));
+  else send(response, 404, 'text/plain', 'There is no such mail.');
+}
+
+function send(response: ServerResponse, status: number, type: string, body: string): void {
+  response.writeHead(status, { ...headers, 'Content-Type': `${type}; charset=utf-8` }).end(body);
+}

@@ -1,0 +1,34 @@
+import { simpleParser, type ParsedMail } from 'mailparser';
+import { SMTPServer } from 'smtp-server';
+import type { Mailbox } from './mailbox.js';
+
+/** Takes every mail for any address and delivers none of them to anybody. */
+export function createSmtpServer(mailbox: Mailbox, clock: () => Date): SMTPServer {
+  return new SMTPServer({
+    authOptional: true,
+    disabledCommands: ['STARTTLS'],
+    disableReverseLookup: true,
+    onAuth: (_credentials, _session, done) => done(null, { user: 'anybody' }),
+    onData(stream, session, done) {
+      const recipients = session.envelope.rcptTo.map((recipient) => recipient.address.toLowerCase());
+      simpleParser(stream).then((mail) => {
+        mailbox.add({
+          from: mail.from?.text ?? '',
+          to: recipients,
+          subject: mail.subject ?? '',
+          text: mail.text ?? '',
+          html: mail.html === false ? null : (mail.html ?? null),
+          headers: headersOf(mail),
+          receivedAt: clock().toISOString(),
+        });
+        done();
+      }, done);
+    },
+  });
+}
+
+function headersOf(mail: ParsedMail): Record<string, string> {
+  return Object.fromEntries(
+    mail.headerLines.map(({ key, line }) => [key, line.slice(line.indexOf(':') + 1).trim()]),
+  );
+}
