@@ -1,0 +1,67 @@
+import type { Knex } from 'knex';
+import type { Photo } from '../../shared/contract/photos.js';
+
+export interface NewPhoto extends Omit<Photo, 'id'> {
+  readonly ownerId: number;
+  readonly createdAt: Date;
+}
+
+interface PhotoRow {
+  id: number;
+  hash: string;
+  owner_id: number;
+  width: number;
+  height: number;
+  widths: string | number[];
+  placeholder: string;
+  alt: string;
+}
+
+const columns = ['id', 'hash', 'owner_id', 'width', 'height', 'widths', 'placeholder', 'alt'];
+
+export type PhotosStore = ReturnType<typeof createPhotosStore>;
+
+export function createPhotosStore(knex: Knex) {
+  return {
+    /** Rows of this content, whoever sent it; the owner's own first. */
+    async findByHash(hash: string, ownerId: number): Promise<{ photo: Photo; ownerId: number }[]> {
+      const rows: PhotoRow[] = await knex('photos').where({ hash }).select(columns).orderBy('id');
+      return rows
+        .map((row) => ({ photo: toPhoto(row), ownerId: row.owner_id }))
+        .sort((one, other) => Number(other.ownerId === ownerId) - Number(one.ownerId === ownerId));
+    },
+
+    /** Adds a row, unless the owner has this photo already; gives the row that is there now. */
+    async add(photo: NewPhoto): Promise<Photo> {
+      await knex('photos')
+        .insert({
+          hash: photo.hash,
+          owner_id: photo.ownerId,
+          width: photo.width,
+          height: photo.height,
+          widths: JSON.stringify(photo.widths),
+          placeholder: photo.placeholder,
+          alt: photo.alt,
+          created_at: photo.createdAt,
+        })
+        .onConflict(['hash', 'owner_id'])
+        .ignore();
+      const row: PhotoRow = await knex('photos')
+        .where({ hash: photo.hash, owner_id: photo.ownerId })
+        .first(columns);
+      return toPhoto(row);
+    },
+
+    async byIds(ids: readonly number[]): Promise<Photo[]> {
+      if (ids.length === 0) return [];
+      const rows: PhotoRow[] = await knex('photos').whereIn('id', ids).select(columns);
+      return rows.map(toPhoto);
+    },
+  };
+}
+
+function toPhoto(row: PhotoRow): Photo {
+  const { id, hash, width, height, placeholder, alt } = row;
+  const widths = typeof row.widths === 'string' ? (JSON.parse(row.widths) as number[]) : row.widths;
+  return { id, hash, width, height, widths, placeholder, alt };
+}
