@@ -1,0 +1,11 @@
+import { RenderMode, type ServerRoute } from '@angular/ssr';
+
+/** Public pages are rendered on the server for each reader; what only its owner sees is drawn by the browser. */
+export const serverRoutes: ServerRoute[] = [
+  { path: 'account/**', renderMode: RenderMode.Client },
+  { path: 'my/**', renderMode: RenderMode.Client },
+  { path: 'drafts/**', renderMode: RenderMode.Client },
+  { path: 'desk/**', renderMode: RenderMode.Client },
+  { path: 'admin/**', renderMode: RenderMode.Client },
+  { path: '**', renderMode: RenderMode.Server },
+];

@@ -1,0 +1,57 @@
+import { DOCUMENT, Injectable, REQUEST, RESPONSE_INIT, inject } from '@angular/core';
+import { Meta, Title } from '@angular/platform-browser';
+import { TitleStrategy, type RouterStateSnapshot } from '@angular/router';
+
+const site = 'Shimlore';
+
+/** Title, description, canonical address and structured data of the page that is shown. */
+@Injectable({ providedIn: 'root' })
+export class ShimloreTitles extends TitleStrategy {
+  private readonly document = inject(DOCUMENT);
+  private readonly title = inject(Title);
+  private readonly meta = inject(Meta);
+  private readonly request = inject(REQUEST, { optional: true });
+  private readonly responseInit = inject(RESPONSE_INIT, { optional: true });
+
+  /** On every navigation: the route's own title; what the last page said of itself goes. */
+  override updateTitle(snapshot: RouterStateSnapshot): void {
+    const title = this.buildTitle(snapshot);
+    this.title.setTitle(title ? `${title} · ${site}` : site);
+    this.meta.removeTag('name="description"');
+    this.document.head.querySelectorAll('link[rel=canonical], script[data-page]').forEach((element) => element.remove());
+  }
+
+  /** What a page says of itself once it knows. `path` is the canonical one, without the query. */
+  describe(page: { title: string; description?: string; path?: string; data?: object }): void {
+    this.title.setTitle(`${page.title} · ${site}`);
+    if (page.description) this.meta.updateTag({ name: 'description', content: page.description });
+    if (page.path) this.link(page.path);
+    if (page.data) this.data(page.data);
+  }
+
+  /** The address of a page as it stands to the outside. */
+  addressOf(path: string): string {
+    return new URL(path, this.request?.url ?? this.document.location.href).href;
+  }
+
+  /** Marks the answer as "not found" (or another status) where the page is rendered on the server. */
+  answerWith(status: number): void {
+    if (this.responseInit) this.responseInit.status = status;
+  }
+
+  private link(path: string): void {
+    const link = this.document.head.querySelector('link[rel=canonical]') ?? this.document.head.appendChild(this.document.createElement('link'));
+    link.setAttribute('rel', 'canonical');
+    link.setAttribute('href', this.addressOf(path));
+  }
+
+  /** JSON-LD is data and is never run; `<` is written as an escape so that no text can end the element. */
+  private data(data: object): void {
+    this.document.head.querySelector('script[data-page]')?.remove();
+    const script = this.document.createElement('script');
+    script.type = 'application/ld+json';
+    script.setAttribute('data-page', '');
+    script.textContent = JSON.stringify(data).replace(/</g, '\\u003c');
+    this.document.head.appendChild(script);
+  }
+}
