@@ -65,7 +65,8 @@ export function shaftDeviation(nominal: number, tolerance: string): Deviations {
 export function holeDeviation(nominal: number, tolerance: string): Deviations {
   const { letter, grade } = parseClass(tolerance, /^([DEFGH])(\d{1,2})$/);
   // Holes D to H mirror the shafts d to h about the zero line (ISO 286-1:2010, 4.3.2.5).
-  const lower = -shaftDeviations[letter.toLowerCase()]![stepOf(nominal, steps)]!;
+  // Subtracted from zero, since the H line is 0 and not −0.
+  const lower = 0 - shaftDeviations[letter.toLowerCase()]![stepOf(nominal, steps)]!;
   return { upper: lower + standardTolerance(nominal, grade), lower };
 }
 
