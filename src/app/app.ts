@@ -5,7 +5,7 @@ import { filter, map } from 'rxjs';
 import { BenchStore } from './bench/bench-store';
 import { Session } from './core/session';
 import { Theme } from './core/theme';
-import { Icon } from './ui/icon';
+import { Icon } from './ui/icon/icon';
 
 @Component({
   selector: 'sl-root',
