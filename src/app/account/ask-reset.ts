@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { RouterLink } from '@angular/router';
 import { formSending } from '../core/form-sending';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { EmailField } from './email-field';
 

@@ -4,7 +4,7 @@ import { RouterLink } from '@angular/router';
 import type { Problem } from '../../../shared/contract/problem';
 import { toApiProblem } from '../core/api-problem';
 import { formSending } from '../core/form-sending';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { EmailField } from './email-field';
 

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
-import { Field, Labelled } from '../ui/labelled';
+import { Field, Labelled } from '../ui/labelled/labelled';
 
 @Component({
   selector: 'sl-email-field',

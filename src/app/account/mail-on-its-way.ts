@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angu
 import { finalize } from 'rxjs';
 import type { Problem } from '../../../shared/contract/problem';
 import { toApiProblem } from '../core/api-problem';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 
 /** Says that the link to confirm an address is on its way, and sends it again. */

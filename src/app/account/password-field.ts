@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, input, signal } from '@angular/core';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
-import { Field, Labelled } from '../ui/labelled';
+import { Field, Labelled } from '../ui/labelled/labelled';
 
 /** A password that can be looked at while it is typed. */
 @Component({

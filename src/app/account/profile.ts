@@ -5,8 +5,8 @@ import type { Problem } from '../../../shared/contract/problem';
 import { toApiProblem } from '../core/api-problem';
 import { formSending } from '../core/form-sending';
 import { Session } from '../core/session';
-import { Field, Labelled } from '../ui/labelled';
-import { ProblemNote } from '../ui/problem-note';
+import { Field, Labelled } from '../ui/labelled/labelled';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 
 @Component({

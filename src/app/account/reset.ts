@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal } f
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { RouterLink } from '@angular/router';
 import { formSending } from '../core/form-sending';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { PasswordField } from './password-field';
 

@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, inject, input, signal } f
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
 import { formSending } from '../core/form-sending';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { EmailField } from './email-field';
 import { MailOnItsWay } from './mail-on-its-way';

@@ -2,8 +2,8 @@ import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/cor
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { RouterLink } from '@angular/router';
 import { formSending } from '../core/form-sending';
-import { Field, Labelled } from '../ui/labelled';
-import { ProblemNote } from '../ui/problem-note';
+import { Field, Labelled } from '../ui/labelled/labelled';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { EmailField } from './email-field';
 import { MailOnItsWay } from './mail-on-its-way';

@@ -3,7 +3,7 @@ import { RouterLink } from '@angular/router';
 import { finalize } from 'rxjs';
 import type { Problem } from '../../../shared/contract/problem';
 import { toApiProblem } from '../core/api-problem';
-import { ProblemNote } from '../ui/problem-note';
+import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 
 /** Where the link at the foot of notice mail leads. A press is asked for, so that a mail scanner that opens links stops nothing. */

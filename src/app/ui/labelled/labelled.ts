@@ -8,9 +8,9 @@ import {
   input,
 } from '@angular/core';
 import type { AbstractControl } from '@angular/forms';
-import { redrawWith } from '../core/redraw-with';
-import { wrongWith } from '../core/told-fields';
-import { Icon } from './icon';
+import { redrawWith } from '../../core/redraw-with';
+import { wrongWith } from '../../core/told-fields';
+import { Icon } from '../icon/icon';
 
 let count = 0;
 
