@@ -23,7 +23,7 @@ export interface RouteBinding {
  */
 export function bind<R extends RouteDefinition>(
   route: R,
-  handle: (context: HandlerContext<R>) => Promise<ResponseOf<R>>,
+  handle: (context: HandlerContext<R>) => Promise<ResponseOf<R> extends undefined ? void : ResponseOf<R>>,
   ...before: RequestHandler[]
 ): RouteBinding {
   return { route, before, handle: handle as RouteBinding['handle'] };
@@ -31,6 +31,7 @@ export function bind<R extends RouteDefinition>(
 
 /** The account of a caller on a route that is closed to visitors. */
 export function memberOf(caller: Caller): MemberCaller {
-  if (caller.role === 'visitor') throw new TypeError('A route that needs an account is open to visitors in the access table.');
+  if (caller.role === 'visitor')
+    throw new TypeError('A route that needs an account is open to visitors in the access table.');
   return caller;
 }
