@@ -1,7 +1,7 @@
 import { execFileSync, spawnSync } from 'node:child_process';
 import { existsSync, mkdirSync, renameSync, rmSync, writeFileSync, chownSync } from 'node:fs';
 import { delimiter, join, resolve } from 'node:path';
-import { startChild, untilReady } from './start/child.mjs';
+import { readyOrStopped, startChild } from './start/child.mjs';
 import { demandFreePort, greets } from './start/ports.mjs';
 import { readSecrets } from './start/secrets.mjs';
 
@@ -27,9 +27,9 @@ export function findProgram(program) {
  * takes connections. The first start makes the files, the database and its user. What was committed survives a crash:
  * the log is flushed with every commit.
  *
- * @param {{ dataDir: string; port: number; logDir?: string }} options
+ * @param {{ dataDir: string; port: number; logDir?: string; onStart?: (child: object) => void }} options
  */
-export async function startMariaDb({ dataDir, port, logDir = join(dataDir, 'logs') }) {
+export async function startMariaDb({ dataDir, port, logDir = join(dataDir, 'logs'), onStart }) {
   await demandFreePort(port, 'MariaDB', 'SHIMLORE_DB_PORT');
   const secrets = readSecrets(dataDir);
   const home = resolve(dataDir, 'mariadb');
@@ -47,12 +47,10 @@ export async function startMariaDb({ dataDir, port, logDir = join(dataDir, 'logs
     command: demandProgram('mariadbd'),
     args: serverArguments({ folders, user, port, introduction }),
     logFile: join(logDir, 'mariadb.log'),
+    onStart,
   });
   try {
-    await untilReady(child, () => greets(port, isMariaDbGreeting));
-  } catch (error) {
-    await child.stop();
-    throw error;
+    await readyOrStopped(child, () => greets(port, isMariaDbGreeting));
   } finally {
     rmSync(introduction, { force: true });
   }

@@ -6,9 +6,10 @@ import { dirname } from 'node:path';
  * A program that runs beside this one, its output in a log file. It has a process group of its own, so that Ctrl-C in
  * the terminal reaches only the launcher, which then ends its children in order.
  *
- * @param {{ name: string; command: string; args: readonly string[]; logFile: string; env?: NodeJS.ProcessEnv; cwd?: string }} what
+ * @param {{ name: string; command: string; args: readonly string[]; logFile: string; env?: NodeJS.ProcessEnv; cwd?: string; onStart?: (child: object) => void }} what
+ *   `onStart` is told of the child at once, long before it is ready
  */
-export function startChild({ name, command, args, logFile, env = process.env, cwd }) {
+export function startChild({ name, command, args, logFile, env = process.env, cwd, onStart }) {
   mkdirSync(dirname(logFile), { recursive: true });
   const log = createWriteStream(logFile, { flags: 'a' });
   log.write(`--- ${new Date().toISOString()} start of ${name}\n`);
@@ -25,7 +26,7 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
     child.once('error', (error) => end(error.message));
     child.once('close', (code, signal) => end(signal ? `signal ${signal}` : `exit code ${code}`));
   });
-  return {
+  const running = {
     name,
     pid: child.pid,
     logFile,
@@ -41,6 +42,8 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
       clearTimeout(hurry);
     },
   };
+  onStart?.(running);
+  return running;
 }
 
 /**
@@ -59,6 +62,16 @@ export async function untilReady(child, isReady, seconds = 60) {
     if (Date.now() > end)
       throw new Error(`${child.name} was not ready within ${seconds} s.\n${lastLines(child.logFile)}`);
     await new Promise((resolve) => setTimeout(resolve, 50));
+  }
+}
+
+/** As untilReady, but leaves nothing running when it fails. */
+export async function readyOrStopped(child, isReady, seconds) {
+  try {
+    await untilReady(child, isReady, seconds);
+  } catch (error) {
+    await child.stop();
+    throw error;
   }
 }
 

@@ -1,6 +1,6 @@
 import { join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
-import { startChild, untilReady } from './child.mjs';
+import { readyOrStopped, startChild } from './child.mjs';
 import { demandFreePort } from './ports.mjs';
 
 /** The folder of the project. */
@@ -18,7 +18,7 @@ export function programArguments(file, compiled) {
 }
 
 /** Starts the local search server and waits until it answers. */
-export async function startSearch({ dataDir, port, key, compiled, logDir = join(dataDir, 'logs') }) {
+export async function startSearch({ dataDir, port, key, compiled, logDir = join(dataDir, 'logs'), onStart }) {
   await demandFreePort(port, 'search', 'SHIMLORE_SEARCH_PORT');
   const url = `http://127.0.0.1:${port}`;
   const child = startChild({
@@ -33,6 +33,7 @@ export async function startSearch({ dataDir, port, key, compiled, logDir = join(
       SEARCH_DATA: resolve(dataDir, 'search'),
     },
     logFile: join(logDir, 'search.log'),
+    onStart,
   });
   await readyOrStopped(child, () => answers(`${url}/health`));
   return { ...child, url, key };
@@ -45,6 +46,7 @@ export async function startMailbox({
   pagePort,
   compiled,
   logDir = join(dataDir, 'logs'),
+  onStart,
 }) {
   await demandFreePort(smtpPort, 'mail', 'SHIMLORE_SMTP_PORT');
   await demandFreePort(pagePort, 'the mailbox page', 'SHIMLORE_MAILBOX_PORT');
@@ -56,19 +58,10 @@ export async function startMailbox({
     cwd: projectDir,
     env: { ...process.env, MAILBOX_SMTP_PORT: String(smtpPort), MAILBOX_PORT: String(pagePort) },
     logFile: join(logDir, 'mailbox.log'),
+    onStart,
   });
   await readyOrStopped(child, () => answers(`${pageUrl}/messages.json`));
   return { ...child, url: `smtp://127.0.0.1:${smtpPort}`, pageUrl };
-}
-
-/** As untilReady, but leaves nothing running when it fails. */
-export async function readyOrStopped(child, isReady, seconds) {
-  try {
-    await untilReady(child, isReady, seconds);
-  } catch (error) {
-    await child.stop();
-    throw error;
-  }
 }
 
 /** Whether `url` answers with a good status. */

@@ -1,0 +1,77 @@
+import { join } from 'node:path';
+import { pathToFileURL } from 'node:url';
+import { ensureBuilt } from './build.mjs';
+import { ensureDependencies } from './dependencies.mjs';
+import { ensurePackages } from './packages.mjs';
+import { claimDataFolder } from './running.mjs';
+import { projectDir } from './services.mjs';
+import { readLaunchSettings } from './settings.mjs';
+import { startStack } from './stack.mjs';
+
+/**
+ * `npm start`: from a fresh checkout to a running app, and down again on Ctrl-C or SIGTERM. Returns the exit code.
+ */
+export async function launch(environment) {
+  const say = (text) => console.log(text);
+  const wish = new AbortController();
+  for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => wish.abort());
+  let claim;
+  let stack;
+  try {
+    const settings = readLaunchSettings(environment);
+    claim = await claimDataFolder(settings.dataDir, settings.publicAddress, say);
+    await prepare(settings, say, wish.signal);
+    stack = await startStack({ settings, say, signal: wish.signal, onChild: claim.noteChild });
+    await greet(settings, stack, say);
+    const end = await Promise.race([stack.broken, wished(wish.signal)]);
+    if (end === undefined) return 0;
+    console.error(`${end}\nStopping the rest.`);
+    return 1;
+  } catch (error) {
+    if (wish.signal.aborted) return 0;
+    console.error(error.message);
+    return 1;
+  } finally {
+    if (stack) {
+      say('Stopping …');
+      await stack.stop();
+      say('Stopped.');
+    }
+    claim?.release();
+  }
+}
+
+async function prepare(settings, say, signal) {
+  const logDir = join(settings.dataDir, 'logs');
+  if (!settings.environment.DATABASE_URL) {
+    const packages = {
+      'mariadb-server': ['mariadbd', 'mariadb-install-db'],
+      'mariadb-client': ['mariadb', 'mariadb-dump'],
+    };
+    await ensurePackages({ packages, logFile: join(logDir, 'packages.log'), say, signal });
+  }
+  await ensureDependencies({ projectDir, logFile: join(logDir, 'npm.log'), say, signal });
+  await ensureBuilt({ projectDir, logDir, say, signal });
+}
+
+async function greet(settings, stack, say) {
+  say(`\nShimlore runs at ${stack.address}`);
+  if (stack.mailboxUrl) say(`Mail that it sends is shown at ${stack.mailboxUrl}`);
+  if (!settings.production) {
+    const { demoAccounts } = await import(
+      pathToFileURL(join(projectDir, 'dist/api/seeds/demo/accounts.js')).href
+    );
+    say('Accounts of the demo:');
+    for (const { role, email, password } of demoAccounts)
+      say(`  ${role.padEnd(14)} ${email.padEnd(34)} ${password}`);
+  }
+  say('Ctrl-C stops everything.\n');
+}
+
+/** Resolves, with undefined, when the wish to stop comes. */
+function wished(signal) {
+  return new Promise((resolve) => {
+    if (signal.aborted) resolve(undefined);
+    signal.addEventListener('abort', () => resolve(undefined), { once: true });
+  });
+}
