@@ -4,15 +4,26 @@ import type { Meilisearch } from 'meilisearch';
 import type { Transporter } from 'nodemailer';
 import type { Logger } from 'pino';
 import { routes } from '../shared/contract/routes.js';
-import type { RouteDefinition } from '../shared/contract/route.js';
+import { createAccounts } from './accounts/accounts.js';
+import { createBench } from './bench/bench.js';
 import type { Settings } from './config.js';
+import { createHardware } from './hardware/hardware.js';
 import type { RouteBinding } from './http/binding.js';
 import { createCsrf } from './http/csrf.js';
 import { mountRoutes } from './http/mount.js';
+import { notStored } from './http/not-stored.js';
 import { nothingHere, problemHandler } from './http/problem-handler.js';
+import { NotFound } from './http/problems.js';
+import { createRateLimits, noRateLimits } from './http/rate-limits.js';
+import { pageProblemHandler } from './http/rendered-pages.js';
 import { requestLog } from './http/request-log.js';
 import { securityHeaders } from './http/security-headers.js';
+import { sessionSweeper } from './http/session-sweeper.js';
 import { createSessions } from './http/session.js';
+import { createMail } from './mail/mail.js';
+import { createPhotos } from './photos/photos.js';
+import { createSystem } from './system/system.js';
+import type { Worker } from './worker.js';
 
 /** All that comes from outside; tests hand in their own. */
 export interface Surroundings {
@@ -25,14 +36,14 @@ export interface Surroundings {
   /** Off in tests that are not about them. */
   readonly rateLimits: boolean;
   /** Serves the built client's files and rendered pages; absent where only the API is wanted. */
-  readonly pages?: RequestHandler[];
+  readonly pages?: PageHandlers;
 }
 
-/** Something that works beside the requests. */
-export interface Worker {
-  start(): void;
-  /** Resolves when the piece of work in hand is done. */
-  stop(): Promise<void>;
+/** What serves everything that is not the API. */
+export interface PageHandlers {
+  /** Files that are the same for everybody; they come before sessions, so that no cookie goes with them. */
+  readonly files: RequestHandler;
+  readonly rendered: RequestHandler;
 }
 
 export interface Composition {
@@ -42,16 +53,78 @@ export interface Composition {
 
 /** Makes every store, service and router, and hands each what it needs. */
 export function createApp(around: Surroundings): Composition {
-  const { settings, knex } = around;
+  const { settings, knex, logger, clock } = around;
   const secure = settings.PUBLIC_ADDRESS.startsWith('https:');
-  const csrf = createCsrf({ secret: settings.SESSION_SECRET, secure });
+  const secret = settings.SESSION_SECRET;
+  const csrf = createCsrf({ secret, secure });
+  const limits = around.rateLimits ? createRateLimits() : noRateLimits;
 
-  const bindings: RouteBinding[] = [];
-  const workers: Worker[] = [];
+  const mail = createMail({
+    knex,
+    transport: around.mailTransport,
+    clock,
+    from: settings.MAIL_FROM,
+    publicAddress: settings.PUBLIC_ADDRESS,
+    logger,
+    secret,
+  });
+  const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf });
+  const sessions = createSessions({
+    knex,
+    secret,
+    secure,
+    strategy: accounts.strategy,
+    findAccount: accounts.findAccount,
+  });
+  const photos = createPhotos({ knex, photoDir: settings.PHOTO_DIR, clock, limits });
+  const hardware = createHardware({ knex });
+  const bench = createBench({ knex, hardware: hardware.service, clock });
+  const system = createSystem({
+    knex,
+    publicAddress: settings.PUBLIC_ADDRESS,
+    declared: routes,
+    checks: { search: async () => ({ ok: true, detail: '' }), mail: mail.health, photos: photos.health },
+  });
+
+  const bindings = [
+    ...system.bindings,
+    ...accounts.bindings,
+    ...mail.bindings,
+    ...photos.bindings,
+    ...hardware.bindings,
+    ...bench.bindings,
+  ];
 
   const app = express();
   app.disable('x-powered-by');
-  app.set('trust proxy', settings.TRUST_PROXY);
-  app.use(requestLog(around.logger), ...securityHeaders({ secure }));
-  return { app, workers };
+  // One proxy in front: the last hop it names is believed, what callers wrote before it is not.
+  app.set('trust proxy', settings.TRUST_PROXY ? 1 : false);
+  app.use(requestLog(logger), ...securityHeaders({ secure }));
+  if (around.pages) app.use(around.pages.files);
+  // Photo files are kept by shared caches, so no session cookie may go with them.
+  app.use([...sessions.handlers, ...csrf.issue].map(unlessPhotoFile));
+  app.use('/api', notStored);
+  mountRoutes(app, routes, [...bindings, ...unanswered(bindings)], {
+    callerOf: sessions.callerOf,
+    csrf: csrf.demand,
+  });
+  app.use(['/api', '/photos'], nothingHere, problemHandler);
+  if (around.pages) app.use(around.pages.rendered, nothingHere, pageProblemHandler);
+  app.use(nothingHere, problemHandler);
+  return { app, workers: [mail.worker, sessionSweeper({ knex, clock, logger })] };
+}
+
+function unlessPhotoFile(handler: RequestHandler): RequestHandler {
+  return (request, response, next) => {
+    if (request.path.startsWith('/photos/')) next();
+    else void handler(request, response, next);
+  };
+}
+
+/** Declared routes whose feature is not composed yet. */
+function unanswered(bindings: readonly RouteBinding[]): RouteBinding[] {
+  const bound = new Set(bindings.map((binding) => binding.route));
+  return Object.values(routes)
+    .filter((route) => !bound.has(route))
+    .map((route) => ({ route, before: [], handle: () => Promise.reject(new NotFound()) }));
 }

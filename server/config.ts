@@ -11,6 +11,11 @@ const Settings = z.object({
   DATABASE_URL: z.url({ protocol: /^(mysql|mariadb)$/, hostname: /.+/ }),
   MEILI_HOST: z.url({ protocol: /^https?$/ }),
   MEILI_KEY: z.string().optional(),
+  /** Name of the index of write-ups; another one for each test, so that they do not meet. */
+  SEARCH_INDEX: z
+    .string()
+    .regex(/^[a-zA-Z0-9_-]{1,100}$/, 'takes letters, digits, hyphens and underscores')
+    .default('write-ups'),
   SMTP_URL: z.url({ protocol: /^smtps?$/, hostname: /.+/ }),
   MAIL_FROM: z.string().default('Shimlore <desk@shimlore.example>'),
   PHOTO_DIR: z.string().default('data/photos'),
@@ -31,5 +36,7 @@ export function readSettings(environment: Record<string, string | undefined>): S
   const parsed = Settings.safeParse(environment);
   if (parsed.success) return parsed.data;
   const lines = parsed.error.issues.map((issue) => `${issue.path.join('.')}: ${issue.message}`);
-  throw new Error(`These settings cannot be used:\n  ${lines.join('\n  ')}\nThe table in README.md says what each takes.`);
+  throw new Error(
+    `These settings cannot be used:\n  ${lines.join('\n  ')}\nThe table in README.md says what each takes.`,
+  );
 }

@@ -57,7 +57,12 @@ function allowOnly(route: RouteDefinition, callerOf: (request: Request) => Calle
 
 const demandJson: RequestHandler = (request, _response, next) => {
   if (request.is('application/json') !== 'application/json') {
-    throw new ProblemError('media-type-not-taken', 415, 'This address takes JSON only.', 'Send the body with Content-Type: application/json.');
+    throw new ProblemError(
+      'media-type-not-taken',
+      415,
+      'This address takes JSON only.',
+      'Send the body with Content-Type: application/json.',
+    );
   }
   next();
 };
@@ -69,7 +74,15 @@ function answer(binding: RouteBinding, callerOf: (request: Request) => Caller): 
     const query = parsePart(route.query, listsIn(route.query, request.query), 'query');
     const body = parsePart(route.body, request.body ?? {}, 'body');
     const version = route.ifMatch ? versionOf(request) : undefined;
-    const result = await binding.handle({ params, query, body, version: version as undefined, caller: callerOf(request), request, response });
+    const result = await binding.handle({
+      params,
+      query,
+      body,
+      version: version as undefined,
+      caller: callerOf(request),
+      request,
+      response,
+    });
     if (response.headersSent) return;
     if (!route.response) {
       response.status(204).end();
@@ -79,16 +92,27 @@ function answer(binding: RouteBinding, callerOf: (request: Request) => Caller): 
   };
 }
 
-function parsePart(schema: z.ZodType | undefined, value: unknown, where: 'address' | 'query' | 'body'): undefined {
+function parsePart(
+  schema: z.ZodType | undefined,
+  value: unknown,
+  where: 'address' | 'query' | 'body',
+): undefined {
   if (!schema) return undefined;
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data as undefined;
-  throw new NotValid(parsed.error.issues.flatMap((issue) => fieldProblemsOf(issue)), `The ${where} has fields that cannot be taken as they are.`);
+  throw new NotValid(
+    parsed.error.issues.flatMap((issue) => fieldProblemsOf(issue)),
+    `The ${where} has fields that cannot be taken as they are.`,
+  );
 }
 
 function fieldProblemsOf(issue: z.core.$ZodIssue): FieldProblem[] {
   if (issue.code === 'unrecognized_keys') {
-    return issue.keys.map((key) => ({ path: [...issue.path, key].join('.'), message: 'is not a field here', remedy: 'Leave it out.' }));
+    return issue.keys.map((key) => ({
+      path: [...issue.path, key].join('.'),
+      message: 'is not a field here',
+      remedy: 'Leave it out.',
+    }));
   }
   return [{ path: issue.path.join('.'), message: issue.message }];
 }
@@ -97,13 +121,18 @@ function fieldProblemsOf(issue: z.core.$ZodIssue): FieldProblem[] {
 function listsIn(schema: z.ZodType | undefined, query: Request['query']): Record<string, unknown> {
   const shape = (schema as { shape?: Record<string, z.ZodType> } | undefined)?.shape ?? {};
   return Object.fromEntries(
-    Object.entries(query).map(([name, value]) => [name, name in shape && takesList(shape[name]) && !Array.isArray(value) ? [value] : value]),
+    Object.entries(query).map(([name, value]) => [
+      name,
+      name in shape && takesList(shape[name]) && !Array.isArray(value) ? [value] : value,
+    ]),
   );
 }
 
 function takesList(schema: z.ZodType | undefined): boolean {
   const definition = schema?.def as { type?: string; innerType?: z.ZodType } | undefined;
-  return definition?.type === 'array' || (definition?.innerType !== undefined && takesList(definition.innerType));
+  return (
+    definition?.type === 'array' || (definition?.innerType !== undefined && takesList(definition.innerType))
+  );
 }
 
 function versionOf(request: Request): number {
@@ -111,7 +140,10 @@ function versionOf(request: Request): number {
   const match = /^"(\d{1,9})"$/.exec(header ?? '');
   if (!match) {
     throw new ProblemError(
-      'precondition-needed', 428, 'The version that was read must be named.', 'Send If-Match with the ETag of the draft as you read it.',
+      'precondition-needed',
+      428,
+      'The version that was read must be named.',
+      'Send If-Match with the ETag of the draft as you read it.',
     );
   }
   return Number(match[1]);

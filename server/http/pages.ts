@@ -14,7 +14,10 @@ export function readCursor<T>(schema: z.ZodType<T>, cursor: string | undefined):
     value = undefined;
   }
   const parsed = schema.safeParse(value);
-  if (!parsed.success) throw new NotValid([{ path: 'cursor', message: 'is not a place in this list', remedy: 'Start from the first page.' }]);
+  if (!parsed.success)
+    throw new NotValid([
+      { path: 'cursor', message: 'is not a place in this list', remedy: 'Start from the first page.' },
+    ]);
   return parsed.data;
 }
 
@@ -23,7 +26,11 @@ export function writeCursor(key: unknown): string {
 }
 
 /** Cuts rows read with `limit + 1` to a page; the extra row only tells that there is a next one. */
-export function toPage<Row>(rows: readonly Row[], limit: number, keyOf: (row: Row) => unknown): { items: Row[]; next: string | null } {
+export function toPage<Row>(
+  rows: readonly Row[],
+  limit: number,
+  keyOf: (row: Row) => unknown,
+): { items: Row[]; next: string | null } {
   const items = rows.slice(0, limit);
   const last = items.at(-1);
   return { items, next: rows.length > limit && last !== undefined ? writeCursor(keyOf(last)) : null };

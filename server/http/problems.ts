@@ -1,4 +1,9 @@
-import { problemTypes, type FieldProblem, type Problem, type ProblemType } from '../../shared/contract/problem.js';
+import {
+  problemTypes,
+  type FieldProblem,
+  type Problem,
+  type ProblemType,
+} from '../../shared/contract/problem.js';
 
 /** An error that knows how it is told to the caller (RFC 9457). */
 export class ProblemError extends Error {
@@ -7,7 +12,9 @@ export class ProblemError extends Error {
     readonly status: number,
     readonly detail: string,
     readonly remedy?: string,
-    readonly extras: Partial<Pick<Problem, 'fields' | 'current' | 'changed'>> & { retryAfterSeconds?: number } = {},
+    readonly extras: Partial<Pick<Problem, 'fields' | 'current' | 'changed'>> & {
+      retryAfterSeconds?: number;
+    } = {},
   ) {
     super(detail);
     this.name = new.target.name;
@@ -66,8 +73,14 @@ export class AlreadyThere extends ProblemError {
 
 export class TooManyRequests extends ProblemError {
   constructor(retryAfterSeconds: number) {
-    super('too-many-requests', 429, 'That was tried too often in a short time.', `Wait ${retryAfterSeconds} seconds and try again.`, {
-      retryAfterSeconds,
-    });
+    super(
+      'too-many-requests',
+      429,
+      'That was tried too often in a short time.',
+      `Wait ${retryAfterSeconds} seconds and try again.`,
+      {
+        retryAfterSeconds,
+      },
+    );
   }
 }

@@ -3,7 +3,7 @@ import type { RequestHandler } from 'express';
 import type { Logger } from 'pino';
 import { pinoHttp } from 'pino-http';
 
-/** One line for each request with an id that problem documents repeat; cookies, tokens and bodies stay out. */
+/** One line for each request with an id that problem documents repeat; cookies, tokens, queries and bodies stay out. */
 export function requestLog(logger: Logger): RequestHandler {
   return pinoHttp({
     logger,
@@ -13,9 +13,15 @@ export function requestLog(logger: Logger): RequestHandler {
       return id;
     },
     autoLogging: { ignore: (request) => request.url === '/api/health' },
-    customLogLevel: (_request, response, error) => (response.statusCode >= 500 || error ? 'error' : response.statusCode >= 400 ? 'info' : 'debug'),
+    customLogLevel: (_request, response) => (response.statusCode >= 400 ? 'info' : 'debug'),
+    // What failed is told by the problem handler, with the error itself; a second one made up here would only repeat it.
+    customErrorObject: (_request, _response, _error, line) => ({ ...(line as object), err: undefined }),
     serializers: {
-      req: (request: { id: string; method: string; url: string }) => ({ id: request.id, method: request.method, path: request.url.split('?')[0] }),
+      req: (request: { id: string; method: string; url: string }) => ({
+        id: request.id,
+        method: request.method,
+        path: request.url.split('?')[0],
+      }),
       res: (response: { statusCode: number }) => ({ status: response.statusCode }),
     },
   }) as RequestHandler;

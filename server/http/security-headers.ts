@@ -23,7 +23,11 @@ export function securityHeaders(options: { secure: boolean }): RequestHandler[] 
           formAction: ["'self'"],
           frameAncestors: ["'none'"],
           objectSrc: ["'none'"],
-          scriptSrc: ["'self'", (_request, response) => `'nonce-${nonceOf((response as unknown as { locals: Record<string, unknown> }).locals)}'`],
+          scriptSrc: [
+            "'self'",
+            (_request, response) =>
+              `'nonce-${nonceOf((response as unknown as { locals: Record<string, unknown> }).locals)}'`,
+          ],
           scriptSrcAttr: ["'none'"],
           styleSrc: ["'self'", "'unsafe-inline'"],
           imgSrc: ["'self'", 'data:', 'blob:'],
@@ -33,6 +37,7 @@ export function securityHeaders(options: { secure: boolean }): RequestHandler[] 
         },
       },
       strictTransportSecurity: options.secure,
+      xFrameOptions: { action: 'deny' },
       crossOriginEmbedderPolicy: false,
       referrerPolicy: { policy: 'strict-origin-when-cross-origin' },
     }),

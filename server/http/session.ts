@@ -1,13 +1,14 @@
-import type { RequestHandler } from 'express';
+import type { Request, RequestHandler, Response } from 'express';
 import expressSession from 'express-session';
-import { ConnectSessionKnexStore } from 'connect-session-knex';
 import type { Knex } from 'knex';
-import { Passport, type Strategy } from 'passport';
-import type { Request } from 'express';
+import passport from 'passport';
+import type { Strategy } from 'passport';
 import type { AccountRole } from '../../shared/contract/vocabulary.js';
 import { visitor, type Caller } from './caller.js';
+import { SessionStore } from './session-store.js';
 
 const fourteenDays = 14 * 24 * 60 * 60 * 1000;
+const cookieName = 'shimlore.sid';
 
 /** The little of an account that every request needs. */
 export interface SessionAccount {
@@ -17,7 +18,6 @@ export interface SessionAccount {
 
 export interface SessionParts {
   readonly handlers: RequestHandler[];
-  readonly store: ConnectSessionKnexStore;
   callerOf(request: Request): Caller;
 }
 
@@ -32,28 +32,64 @@ export function createSessions(options: {
   strategy: Strategy;
   findAccount(id: number): Promise<SessionAccount | undefined>;
 }): SessionParts {
-  const store = new ConnectSessionKnexStore({ knex: options.knex, tableName: 'sessions', createTable: false, cleanupInterval: 15 * 60 * 1000 });
-  const passport = new Passport();
-  passport.use('local', options.strategy);
-  passport.serializeUser((user, done) => done(null, (user as SessionAccount).id));
-  passport.deserializeUser((id: number, done) => {
+  const authenticator = new passport.Passport();
+  authenticator.use('local', options.strategy);
+  authenticator.serializeUser((user, done) => done(null, (user as SessionAccount).id));
+  authenticator.deserializeUser((id: number, done) => {
     options.findAccount(id).then((account) => done(null, account ?? false), done);
   });
   const session = expressSession({
-    name: 'shimlore.sid',
+    name: cookieName,
     secret: options.secret,
-    store,
+    store: new SessionStore(options.knex),
     resave: false,
     saveUninitialized: false,
     rolling: true,
     cookie: { httpOnly: true, sameSite: 'lax', secure: options.secure, maxAge: fourteenDays, path: '/' },
   });
   return {
-    handlers: [session, passport.session()],
-    store,
+    handlers: [session, authenticator.session()],
     callerOf(request) {
       const account = request.user as SessionAccount | undefined;
       return account ? { role: account.role, accountId: account.id } : visitor;
     },
   };
+}
+
+/**
+ * Asks a passport strategy about this request, without starting a session. Resolves to undefined where the strategy
+ * turns the request down; an error of the strategy rejects.
+ */
+export function authenticateWith(
+  strategy: Strategy,
+  request: Request,
+  response: Response,
+): Promise<SessionAccount | undefined> {
+  return new Promise((resolve, reject) => {
+    const handler = passport.authenticate(
+      strategy,
+      { session: false },
+      (error: unknown, account?: Express.User | false | null) => {
+        if (error) reject(error as Error);
+        else resolve(account ? (account as SessionAccount) : undefined);
+      },
+    ) as RequestHandler;
+    void handler(request, response, reject);
+  });
+}
+
+/** Starts a session under a new id for the account. */
+export function startSession(request: Request, account: SessionAccount): Promise<void> {
+  return new Promise((resolve, reject) => {
+    request.logIn(account, (error: unknown) => (error ? reject(error as Error) : resolve()));
+  });
+}
+
+/** Ends the session of this request, in the table and in the browser. */
+export async function endSession(request: Request, response: Response): Promise<void> {
+  await new Promise<void>((resolve, reject) => {
+    request.session.destroy((error: unknown) => (error ? reject(error as Error) : resolve()));
+  });
+  request.user = undefined;
+  response.clearCookie(cookieName, { path: '/' });
 }

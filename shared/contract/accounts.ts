@@ -143,6 +143,16 @@ export const accountRoutes = {
     query: z.object({ token: Token }),
     problems: ['token-not-valid'],
   }),
+  openUnsubscribe: route({
+    method: 'get',
+    path: '/api/mail/unsubscribe',
+    tag,
+    access: anyone,
+    status: 303,
+    summary:
+      'The address of the one-click unsubscribe opened in a browser: leads to the page that asks first and changes nothing',
+    query: z.object({ token: Token }),
+  }),
   listAccounts: route({
     method: 'get',
     path: '/api/admin/accounts',

@@ -23,7 +23,7 @@ export interface RouteDefinition {
   /** Absent: 204 without a body. */
   readonly response?: z.ZodType;
   /** Status of success; 200, or 204 where there is no response. */
-  readonly status?: 200 | 201 | 202 | 204;
+  readonly status?: 200 | 201 | 202 | 204 | 303;
   /** Where the body is multipart/form-data with one `file` beside the fields of `body`. */
   readonly multipart?: true;
   /** Carries an ETag, and `If-Match` is demanded: 428 without it, 412 when it is stale. */

@@ -29,4 +29,12 @@ export const systemRoutes = {
     access: anyone,
     summary: 'This document as a page',
   }),
+  apiPageFile: route({
+    method: 'get',
+    path: '/api/reference/:file',
+    tag: 'system',
+    access: anyone,
+    summary: 'Script and style of that page',
+    params: z.object({ file: z.enum(['page.js', 'swagger-ui-bundle.js', 'swagger-ui.css']) }),
+  }),
 };

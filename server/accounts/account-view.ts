@@ -1,0 +1,27 @@
+import type { Account, AccountRow } from '../../shared/contract/accounts.js';
+import type { StoredAccount } from './accounts.store.js';
+
+/** An account as its owner sees it. */
+export function accountView(account: StoredAccount): Account {
+  return {
+    id: account.id,
+    email: account.email,
+    displayName: account.displayName,
+    role: account.role,
+    noticeMail: account.noticeMail,
+    units: account.units,
+    createdAt: account.createdAt.toISOString(),
+  };
+}
+
+/** An account as an administrator sees it. */
+export function accountRow(account: StoredAccount): AccountRow {
+  return {
+    id: account.id,
+    email: account.email,
+    displayName: account.displayName,
+    role: account.role,
+    confirmed: account.confirmedAt !== null,
+    createdAt: account.createdAt.toISOString(),
+  };
+}

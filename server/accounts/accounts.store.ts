@@ -1,0 +1,154 @@
+import type { Knex } from 'knex';
+import type { AccountRole } from '../../shared/contract/vocabulary.js';
+import type { Account } from '../../shared/contract/accounts.js';
+
+/** An account as the table holds it. */
+export interface StoredAccount {
+  readonly id: number;
+  readonly email: string;
+  readonly displayName: string;
+  readonly role: AccountRole;
+  readonly passwordHash: string;
+  readonly confirmedAt: Date | null;
+  readonly noticeMail: boolean;
+  readonly units: Account['units'];
+  readonly createdAt: Date;
+}
+
+interface AccountRecord {
+  id: number;
+  email: string;
+  display_name: string;
+  role: AccountRole;
+  password_hash: string;
+  confirmed_at: Date | null;
+  notice_mail: number;
+  units: Account['units'];
+  created_at: Date;
+}
+
+const columns = [
+  'id',
+  'email',
+  'display_name',
+  'role',
+  'password_hash',
+  'confirmed_at',
+  'notice_mail',
+  'units',
+  'created_at',
+];
+
+/**
+ * Adds an account that is not confirmed yet, unless the address is taken, whatever its letter case. Either way the
+ * row is held exclusively: an ignored duplicate would hold it shared, and two sign-ups at once would block each other.
+ */
+export async function addAccountUnlessThere(
+  trx: Knex.Transaction,
+  account: { email: string; displayName: string; passwordHash: string; createdAt: Date },
+): Promise<void> {
+  await trx('accounts')
+    .insert({
+      email: account.email,
+      display_name: account.displayName,
+      password_hash: account.passwordHash,
+      created_at: account.createdAt,
+    })
+    .onConflict('email')
+    .merge({ email: trx.ref('email') });
+}
+
+export async function accountByEmail(db: Knex, email: string): Promise<StoredAccount | undefined> {
+  return toStored(await db('accounts').where({ email }).first<AccountRecord | undefined>(columns));
+}
+
+export async function accountById(db: Knex, id: number): Promise<StoredAccount | undefined> {
+  return toStored(await db('accounts').where({ id }).first<AccountRecord | undefined>(columns));
+}
+
+/** The same, held against changes until the transaction ends. */
+export async function lockedAccountById(
+  trx: Knex.Transaction,
+  id: number,
+): Promise<StoredAccount | undefined> {
+  return toStored(await trx('accounts').where({ id }).forUpdate().first<AccountRecord | undefined>(columns));
+}
+
+export async function lockedAccountByEmail(
+  trx: Knex.Transaction,
+  email: string,
+): Promise<StoredAccount | undefined> {
+  return toStored(
+    await trx('accounts').where({ email }).forUpdate().first<AccountRecord | undefined>(columns),
+  );
+}
+
+export interface AccountChange {
+  readonly displayName?: string | undefined;
+  readonly passwordHash?: string | undefined;
+  readonly noticeMail?: boolean | undefined;
+  readonly units?: Account['units'] | undefined;
+  readonly role?: AccountRole | undefined;
+  readonly confirmedAt?: Date | undefined;
+}
+
+/** Changes what is given and leaves what is undefined. */
+export async function changeAccount(trx: Knex, id: number, change: AccountChange): Promise<void> {
+  const fields = {
+    display_name: change.displayName,
+    password_hash: change.passwordHash,
+    notice_mail: change.noticeMail,
+    units: change.units,
+    role: change.role,
+    confirmed_at: change.confirmedAt,
+  };
+  const given = Object.fromEntries(Object.entries(fields).filter(([, value]) => value !== undefined));
+  if (Object.keys(given).length > 0) await trx('accounts').where({ id }).update(given);
+}
+
+export async function addRoleChange(
+  trx: Knex,
+  change: { accountId: number; changedBy: number; from: AccountRole; to: AccountRole; at: Date },
+): Promise<void> {
+  await trx('role_changes').insert({
+    account_id: change.accountId,
+    changed_by: change.changedBy,
+    from_role: change.from,
+    to_role: change.to,
+    created_at: change.at,
+  });
+}
+
+/** Accounts from the newest on, those before `beforeId` only; `words` is looked for in address and name. */
+export async function accountsNewestFirst(
+  db: Knex,
+  wanted: { words: string | undefined; beforeId: number | undefined; limit: number },
+): Promise<StoredAccount[]> {
+  const query = db('accounts').select<AccountRecord[]>(columns).orderBy('id', 'desc').limit(wanted.limit);
+  if (wanted.beforeId !== undefined) void query.where('id', '<', wanted.beforeId);
+  if (wanted.words) {
+    const pattern = `%${wanted.words.replace(/[\\%_]/g, '\\$&')}%`;
+    void query.where((either) =>
+      either.where('email', 'like', pattern).orWhere('display_name', 'like', pattern),
+    );
+  }
+  return (await query).map((record) => toStored(record));
+}
+
+function toStored(record: AccountRecord): StoredAccount;
+function toStored(record: AccountRecord | undefined): StoredAccount | undefined;
+function toStored(record: AccountRecord | undefined): StoredAccount | undefined {
+  return (
+    record && {
+      id: record.id,
+      email: record.email,
+      displayName: record.display_name,
+      role: record.role,
+      passwordHash: record.password_hash,
+      confirmedAt: record.confirmed_at,
+      noticeMail: Boolean(record.notice_mail),
+      units: record.units,
+      createdAt: record.created_at,
+    }
+  );
+}
