@@ -1,6 +1,6 @@
 import { migrateToLatest } from '../migration-source.js';
 import { openDatabase } from '../database.js';
-import { databaseUrl } from './database-url.js';
+import { databaseUrl } from './places.js';
 
 const knex = openDatabase(databaseUrl(process.env));
 try {

@@ -2,14 +2,13 @@ import { hashPassword } from '../accounts/password.js';
 import { openDatabase } from '../database.js';
 import { createPhotos } from '../photos/photos.js';
 import { seedDemo } from '../../seeds/demo.js';
-import { databaseUrl } from './database-url.js';
+import { databaseUrl, photoDirectory } from './places.js';
 
 const knex = openDatabase(databaseUrl(process.env));
 try {
   const filled = (await knex('accounts').select('id').first()) ?? (await knex('parts').select('id').first());
   if (filled === undefined) {
-    const photoDir = process.env['PHOTO_DIR'] ?? `${process.env['SHIMLORE_DATA'] ?? 'data'}/photos`;
-    const photos = createPhotos({ knex, photoDir, clock: () => new Date() });
+    const photos = createPhotos({ knex, photoDir: photoDirectory(process.env), clock: () => new Date() });
     await seedDemo({ knex, storePhoto: photos.service.storePhoto, now: new Date(), hashPassword });
     console.log('The demo is made.');
   } else if (process.argv.includes('--if-empty')) {
