@@ -107,6 +107,8 @@ export const WriteUpDocument = z.object({
   summary: z.string(),
   parts: z.array(z.string()),
   fixTitles: z.array(z.string()),
+  /** Features and readings in words, figures in plain form: "lip diameter 22.5 mm 0.886 in". */
+  measured: z.string(),
   cause: z.string(),
   fixText: z.string(),
   symptomSlugs: z.array(z.string()),
