@@ -23,7 +23,7 @@ import type { Photo } from '../../../../shared/contract/photos';
   `,
   styles: `
     :host, picture { display: block; }
-    img { display: block; inline-size: 100%; block-size: auto; background-size: cover; }
+    img { display: block; inline-size: 100%; block-size: auto; aspect-ratio: var(--sl-photo-ratio, auto); object-fit: cover; background-size: cover; }
   `,
 })
 export class PhotoView {

@@ -1,0 +1,27 @@
+import { Injectable, inject } from '@angular/core';
+import type { Observable } from 'rxjs';
+import { hardwareRoutes, type MakerRef, type PartPage, type PartSummary, type Symptom } from '../../../shared/contract/hardware';
+import type { CallOf } from '../../../shared/contract/route';
+import { Api } from '../core/api';
+
+/** The catalogue: makers, parts, symptoms. Failures are `ApiProblem`s. */
+@Injectable({ providedIn: 'root' })
+export class Hardware {
+  private readonly api = inject(Api);
+
+  parts(query: CallOf<typeof hardwareRoutes.listParts>['query']): Observable<{ items: PartSummary[]; next: string | null }> {
+    return this.api.call(hardwareRoutes.listParts, { query });
+  }
+
+  part(slug: string): Observable<PartPage> {
+    return this.api.call(hardwareRoutes.readPart, { params: { slug } });
+  }
+
+  makers(): Observable<{ items: MakerRef[] }> {
+    return this.api.call(hardwareRoutes.listMakers);
+  }
+
+  symptoms(): Observable<{ items: Symptom[] }> {
+    return this.api.call(hardwareRoutes.listSymptoms);
+  }
+}
