@@ -1,5 +1,6 @@
-import { medianDeviation, medianOf } from './median.js';
-import { derSimonianLaird, type Result } from './random-effects.js';
+import { huberLimit, huberMean } from './huber-mean.js';
+import { madToDeviation, medianDeviation, medianOf } from './median.js';
+import type { Result } from './random-effects.js';
 
 /** How a part is made; sets the spread to expect between parts of one revision where readings do not tell. */
 export type Process = 'machined' | 'printed' | 'cast';
@@ -26,9 +27,8 @@ export interface Consensus {
   readonly converged: boolean;
 }
 
-const huberLimit = 1.5;
-/** Mean square of a standard normal variable cut at ±1.5: 2Φ(k) − 1 − 2kφ(k) + 2k²(1 − Φ(k)). */
-const shareLeftByCut = 0.778465;
+/** A reading further than this many scales from the median is gross: a digit lost, another dimension read. */
+const grossLimit = 10;
 const z95 = 1.959963984540054;
 
 /**
@@ -36,23 +36,25 @@ const z95 = 1.959963984540054;
  *
  * Random-effects mean (DerSimonian–Laird) of readings whose residual beyond 1.5 times its scale √(u² + τ²) is cut to
  * 1.5 times it (Huber's proposal 2 as in RSC Analytical Methods Committee, Technical Brief 6 (2001), "H15"), from the
- * median and the median absolute deviation to a fixed point. A reading off from the median by a factor near 25.4 or
- * 1/25.4 is named a unit slip and has no say. A single reading has the default spread of the process added to its own
- * uncertainty, since it tells of one part only; of two or three the spread between parts is at least that default.
- * Values in mm, uncertainties standard and > 0. Throws RangeError on an empty list. Cost: O(n log n).
+ * median and the median absolute deviation to a fixed point. Before that, readings without a say are left out: unit slips,
+ * off from the median by a factor near 25.4 or 1/25.4, and gross ones, over 10 scales from it (scale² = u² + the larger of
+ * 1.4826 MAD and the usual spread squared); Huber's mean alone would follow one gross reading of four. A single reading has the usual spread between parts added to its own
+ * uncertainty, since it tells of one part only; of two or three the spread is at least `usualSpread` (≥ 0).
+ * Values, spread and uncertainties in one unit; uncertainties standard and > 0. Throws RangeError on an empty list. Cost: O(n log n).
  */
-export function consensusOf(readings: readonly Result[], process: Process): Consensus {
+export function consensusOf(readings: readonly Result[], usualSpread: number): Consensus {
   const unitSlips = findUnitSlips(readings.map((reading) => reading.value));
-  const counted = readings.filter((_, index) => !unitSlips.includes(index));
+  const left = leftOut(readings, unitSlips, usualSpread);
+  const counted = readings.filter((_, index) => !left.has(index));
   if (counted.length === 0) throw new RangeError('At least one reading is needed.');
-  const robust = robustMean(counted);
+  const robust = huberMean(counted);
   const spread =
     counted.length <= 3
-      ? Math.max(Math.sqrt(robust.betweenVariance), defaultSpread[process])
+      ? Math.max(Math.sqrt(robust.betweenVariance), usualSpread)
       : Math.sqrt(robust.betweenVariance);
   const uncertainty =
     counted.length <= 3 ? Math.max(robust.uncertainty, thinUncertainty(counted, spread)) : robust.uncertainty;
-  const weights = [...robust.weights];
+  let taken = 0;
   return {
     count: readings.length,
     mean: robust.mean,
@@ -61,10 +63,28 @@ export function consensusOf(readings: readonly Result[], process: Process): Cons
     predictionSpread: counted.length === 1 ? uncertainty : Math.hypot(uncertainty, spread),
     interval: [robust.mean - z95 * uncertainty, robust.mean + z95 * uncertainty],
     thin: counted.length <= 2,
-    weights: readings.map((_, index) => (unitSlips.includes(index) ? 0 : weights.shift()!)),
+    weights: readings.map((_, index) => (left.has(index) ? 0 : robust.weights[taken++]!)),
     unitSlips,
     converged: robust.converged,
   };
+}
+
+/** Never from fewer than three readings, and always fewer than half: a median of the rest decides. */
+function leftOut(
+  readings: readonly Result[],
+  unitSlips: readonly number[],
+  usualSpread: number,
+): Set<number> {
+  const left = new Set(unitSlips);
+  if (readings.length < 3) return left;
+  const values = readings.map((reading) => reading.value);
+  const middle = medianOf(values);
+  const spread = Math.max(madToDeviation * medianDeviation(values), usualSpread);
+  readings.forEach((reading, index) => {
+    if (Math.abs(reading.value - middle) > grossLimit * Math.hypot(reading.uncertainty, spread))
+      left.add(index);
+  });
+  return left;
 }
 
 function thinUncertainty(readings: readonly Result[], spread: number): number {
@@ -74,46 +94,31 @@ function thinUncertainty(readings: readonly Result[], spread: number): number {
   );
 }
 
-function robustMean(readings: readonly Result[]): {
-  mean: number;
-  uncertainty: number;
-  betweenVariance: number;
-  weights: number[];
-  converged: boolean;
-} {
-  const values = readings.map((reading) => reading.value);
-  let mean = medianOf(values);
-  let between = (1.4826 * medianDeviation(values)) ** 2;
-  for (let round = 1; ; round += 1) {
-    const limits = readings.map((reading) => huberLimit * Math.sqrt(reading.uncertainty ** 2 + between));
-    const cut = readings.map((reading, index) => ({
-      value: mean + Math.min(Math.max(reading.value - mean, -limits[index]!), limits[index]!),
-      uncertainty: reading.uncertainty,
-    }));
-    const anyCut = cut.some((reading, index) => reading.value !== values[index]);
-    const fit = derSimonianLaird(cut, anyCut ? 1 / shareLeftByCut : 1);
-    const converged =
-      Math.abs(fit.mean - mean) <= 1e-12 * Math.max(1, Math.abs(mean)) &&
-      Math.abs(fit.betweenVariance - between) <= 1e-9 * (fit.betweenVariance + 1e-12);
-    mean = fit.mean;
-    between = fit.betweenVariance;
-    if (converged || round === 500) {
-      const weights = values.map((value, index) => {
-        const residual = Math.abs(value - mean);
-        return residual <= limits[index]! ? 1 : limits[index]! / residual;
-      });
-      return { mean, uncertainty: fit.uncertainty, betweenVariance: between, weights, converged };
-    }
-  }
+/**
+ * What one reading's say came down to in a consensus that is known already: 1 within 1.5 times its scale √(u² + spread²),
+ * falling with its distance beyond, 0 for a unit slip.
+ */
+export function sayOf(
+  reading: Result,
+  consensus: { mean: number; uncertainty: number; predictionSpread: number },
+): number {
+  if (isUnitSlip(reading.value, consensus.mean)) return 0;
+  const spread = Math.max(0, consensus.predictionSpread ** 2 - consensus.uncertainty ** 2);
+  const limit = huberLimit * Math.sqrt(reading.uncertainty ** 2 + spread);
+  const residual = Math.abs(reading.value - consensus.mean);
+  return residual <= limit ? 1 : limit / residual;
 }
 
-/** Readings whose ratio to the median is within 4 % of 25.4 or 1/25.4; never a majority, never fewer than three readings. */
+/** Whether a value is off from a middle one by a factor within 4 % of 25.4 or 1/25.4. */
+export function isUnitSlip(value: number, middle: number): boolean {
+  if (middle <= 0) return false;
+  const ratio = value / middle;
+  return Math.abs(ratio / 25.4 - 1) < 0.04 || Math.abs(ratio * 25.4 - 1) < 0.04;
+}
+
+/** Indices of unit slips against the median; of fewer than three readings nobody can tell which one is wrong. */
 function findUnitSlips(values: readonly number[]): number[] {
   if (values.length < 3) return [];
   const median = medianOf(values);
-  if (median <= 0) return [];
-  return values.flatMap((value, index) => {
-    const ratio = value / median;
-    return Math.abs(ratio / 25.4 - 1) < 0.04 || Math.abs(ratio * 25.4 - 1) < 0.04 ? [index] : [];
-  });
+  return values.flatMap((value, index) => (isUnitSlip(value, median) ? [index] : []));
 }

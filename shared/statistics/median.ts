@@ -11,3 +11,6 @@ export function medianDeviation(values: readonly number[]): number {
   const median = medianOf(values);
   return medianOf(values.map((value) => Math.abs(value - median)));
 }
+
+/** Makes a median absolute deviation the standard deviation of a normal distribution: 1/Φ⁻¹(3/4). */
+export const madToDeviation = 1.4826;

@@ -8,7 +8,7 @@ import { jointKindNames, jointKinds } from '../../shared/fit/joint-kinds.js';
 import { featureSpecs } from '../../shared/fit/feature-dimensions.js';
 import { judgeSeat } from '../../shared/fit/seat.js';
 import { judgeThreadPair } from '../../shared/fit/thread-pair.js';
-import { consensusOf } from '../../shared/statistics/consensus.js';
+import { consensusOf, defaultSpread } from '../../shared/statistics/consensus.js';
 import { exact, read } from './dimensions.js';
 
 const size = fc.double({ min: 0.5, max: 200, noNaN: true });
@@ -234,12 +234,12 @@ describe('consensus', () => {
   test('it lies within the readings, knows the order of none, and never gives NaN', () => {
     fc.assert(
       fc.property(readings, (list) => {
-        const consensus = consensusOf(list, 'printed');
+        const consensus = consensusOf(list, defaultSpread.printed);
         const values = list.map((reading) => reading.value);
         expect(consensus.mean).toBeGreaterThanOrEqual(Math.min(...values) - 1e-9);
         expect(consensus.mean).toBeLessThanOrEqual(Math.max(...values) + 1e-9);
         expect(numbersIn(consensus).some(Number.isNaN)).toBe(false);
-        const reversed = consensusOf([...list].reverse(), 'printed');
+        const reversed = consensusOf([...list].reverse(), defaultSpread.printed);
         expect(Math.abs(reversed.mean - consensus.mean)).toBeLessThan(1e-6);
       }),
     );
