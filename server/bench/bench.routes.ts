@@ -9,6 +9,8 @@ export function benchBindings(bench: BenchService): RouteBinding[] {
     bind(routes.changeBenchItem, ({ caller, params, body }) =>
       bench.changeRevision(memberOf(caller).accountId, params.id, body.revisionId),
     ),
-    bind(routes.removeFromBench, ({ caller, params }) => bench.removeFromBench(memberOf(caller).accountId, params.id)),
+    bind(routes.removeFromBench, async ({ caller, params }) => {
+      await bench.removeFromBench(memberOf(caller).accountId, params.id);
+    }),
   ];
 }

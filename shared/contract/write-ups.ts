@@ -112,6 +112,7 @@ export const EditionView = z.object({
 });
 export type EditionView = z.infer<typeof EditionView>;
 
+/** One edition in a list. On the desk `publishedAt` is the day on which it was handed in, since it is not published yet. */
 export const EditionLine = z.object({
   id: Id,
   number: z.number().int(),
@@ -140,6 +141,7 @@ export type WriteUpPage = z.infer<typeof WriteUpPage>;
 
 /** A run of words that both editions share, or only the earlier or the later one has. */
 export const DifferencePiece = z.object({ kind: z.enum(['same', 'removed', 'added']), text: z.string() });
+export type DifferencePiece = z.infer<typeof DifferencePiece>;
 /** One field of the edition, such as "Cause" or "Fix “Coin behind the plate”, step 2". */
 export const FieldDifference = z.object({
   field: z.string(),

@@ -1,0 +1,120 @@
+import type { EditionContent, Fix, JointSide } from '../../shared/contract/edition-content.js';
+import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
+import type { Photo } from '../../shared/contract/photos.js';
+import type { Caution, EditionView, FixView, JointSideView, RichText } from '../../shared/contract/write-ups.js';
+import type { HardwareService } from '../hardware/hardware.js';
+import type { CautionStore } from './caution.store.js';
+import { partIdsOf, photoIdsOf } from './edition-links.js';
+import type { FixRow, FixStore } from './fix.store.js';
+
+/** What write-ups need of the photo store. */
+export interface PhotoLookup {
+  photosByIds(ids: readonly number[]): Promise<Map<number, Photo>>;
+}
+
+export interface ViewParts {
+  readonly hardware: HardwareService;
+  readonly photos: PhotoLookup;
+  readonly renderText: (source: string) => RichText;
+  readonly fixes: FixStore;
+  readonly cautions: CautionStore;
+}
+
+export type EditionViews = ReturnType<typeof createEditionViews>;
+
+/** Draws an edition up as its page shows it: published, as it once was, or as a draft. Six queries side by side. */
+export function createEditionViews({ hardware, photos, renderText, fixes, cautions }: ViewParts) {
+  return {
+    /** Cautions and standings are always those of today. A joint with a part not chosen yet is left out. */
+    async viewOf(content: EditionContent, writeUpId: number): Promise<EditionView> {
+      const partIds = partIdsOf(content);
+      const [parts, revisionsOf, symptoms, pictures, known, placed] = await Promise.all([
+        hardware.partsByIds(partIds),
+        hardware.revisionsByPartIds(partIds),
+        hardware.symptomsBySlugs(content.symptoms),
+        photos.photosByIds(photoIdsOf(content)),
+        fixes.fixesOf(writeUpId),
+        cautions.cautionsOf(writeUpId),
+      ]);
+      const revisions = new Map([...revisionsOf.values()].flat().map((revision) => [revision.id, revision]));
+
+      return {
+        title: content.title,
+        summary: content.summary,
+        joints: content.joints.flatMap((joint) => {
+          const a = sideOf(joint.a, parts, revisionsOf);
+          const b = sideOf(joint.b, parts, revisionsOf);
+          return a && b ? [{ a, b }] : [];
+        }),
+        symptoms: content.symptoms.flatMap((slug) => symptoms.get(slug) ?? []),
+        noticed: renderText(content.noticed),
+        cause: renderText(content.cause),
+        readings: content.readings.map(({ revisionId, ...reading }) => {
+          const revision = revisionId === null ? undefined : revisions.get(revisionId);
+          return { ...reading, revision: revision ?? null, part: partNameOf(revision) };
+        }),
+        fixes: content.fixes.map((fix) => ({
+          ...textOf(fix),
+          ...evidenceOf(known.get(fix.key)),
+          cautions: placed.filter((caution) => caution.fixKey === fix.key),
+        })),
+        photos: content.photos.flatMap(({ photoId, alt, caption }) => {
+          const photo = pictures.get(photoId);
+          return photo ? [{ photo, alt, caption }] : [];
+        }),
+        sources: renderText(content.sources),
+        cautions: placed.filter((caution: Caution) => caution.fixKey === null),
+      };
+
+      function partNameOf(revision: RevisionRef | undefined): string | null {
+        return (revision && parts.get(revision.partId)?.name) ?? null;
+      }
+
+      function textOf(fix: Fix): Omit<FixView, 'cautions' | keyof ReturnType<typeof evidenceOf>> {
+        const { key, title, kind, permanence, tools, materials, afterwards, afterwardsNote, acceptance } = fix;
+        return {
+          key, title, kind, permanence, tools, materials, afterwards, afterwardsNote, acceptance,
+          why: renderText(fix.why),
+          steps: fix.steps.map((step) => ({
+            key: step.key,
+            text: renderText(step.text),
+            photo: (step.photoId === null ? undefined : pictures.get(step.photoId)) ?? null,
+          })),
+          revisions: fix.revisionIds.flatMap((id) => {
+            const revision = revisions.get(id);
+            return revision ? [{ ...revision, partName: partNameOf(revision) ?? '' }] : [];
+          }),
+        };
+      }
+    },
+  };
+}
+
+/** A fix that was never published nor on the desk has nothing behind it yet. */
+function evidenceOf(fix: FixRow | undefined): Pick<FixView, 'standing' | 'madeRightFrom' | 'trialCounts'> {
+  return {
+    standing: fix?.standing ?? 'told',
+    madeRightFrom: fix?.madeRightFrom ?? null,
+    trialCounts: fix?.trialCounts ?? { held: 0, heldForAWhile: 0, didNotHelp: 0 },
+  };
+}
+
+function sideOf(
+  side: JointSide,
+  parts: ReadonlyMap<number, PartRef>,
+  revisionsOf: ReadonlyMap<number, RevisionRef[]>,
+): JointSideView | undefined {
+  const part = side.partId === null ? undefined : parts.get(side.partId);
+  if (!part) return undefined;
+  const holds = new Map(side.revisions.map((mark) => [mark.revisionId, mark.holds]));
+  const all = revisionsOf.get(part.id) ?? [];
+  return {
+    part,
+    feature: side.feature,
+    revisions: all.flatMap((revision) => {
+      const marked = holds.get(revision.id);
+      return marked === undefined ? [] : [{ ...revision, holds: marked }];
+    }),
+    notKnown: all.filter((revision) => !holds.has(revision.id)),
+  };
+}

@@ -1,0 +1,69 @@
+import type { Knex } from 'knex';
+import type { EditionContent } from '../../shared/contract/edition-content.js';
+import { fromJson } from '../rows.js';
+
+export interface WriteUpRow {
+  readonly id: number;
+  readonly slug: string;
+  readonly publishedEditionId: number;
+  readonly firstPublishedAt: Date;
+}
+
+export interface PublishedEditionRow {
+  readonly id: number;
+  readonly number: number;
+  readonly authorId: number;
+  readonly authorName: string;
+  readonly changeNote: string;
+  readonly title: string;
+  readonly publishedAt: Date;
+}
+
+export type PublishedStore = ReturnType<typeof createPublishedStore>;
+
+/** Write-ups that have been published, and their published editions. */
+export function createPublishedStore(knex: Knex) {
+  return {
+    async bySlug(slug: string): Promise<WriteUpRow | undefined> {
+      return knex('write_ups')
+        .where('slug', slug)
+        .whereNotNull('published_edition_id')
+        .first('id', 'slug', { publishedEditionId: 'published_edition_id', firstPublishedAt: 'first_published_at' });
+    },
+
+    /** Every published edition without its text, the newest first. */
+    async editionsOf(writeUpId: number): Promise<PublishedEditionRow[]> {
+      return knex('editions as e')
+        .join('accounts as a', 'a.id', 'e.author_id')
+        .where({ 'e.write_up_id': writeUpId, 'e.state': 'published' })
+        .orderBy('e.number', 'desc')
+        .select('e.id', 'e.number', 'e.title', {
+          authorId: 'e.author_id',
+          authorName: 'a.display_name',
+          changeNote: 'e.change_note',
+          publishedAt: 'e.published_at',
+        });
+    },
+
+    async contents(editionIds: readonly number[]): Promise<Map<number, EditionContent>> {
+      const rows: { id: number; content: unknown }[] = await knex('editions')
+        .whereIn('id', editionIds)
+        .select('id', 'content');
+      return new Map(rows.map((row) => [row.id, fromJson<EditionContent>(row.content)]));
+    },
+
+    /** The text that is published now; undefined while none is. Inside a transaction that holds the write-up it cannot change. */
+    async publishedContent(db: Knex, writeUpId: number): Promise<EditionContent | undefined> {
+      const row = await db('write_ups as w')
+        .join('editions as e', 'e.id', 'w.published_edition_id')
+        .where('w.id', writeUpId)
+        .first('e.content');
+      return row && fromJson<EditionContent>(row.content);
+    },
+
+    /** Accounts that wrote one of the published editions. */
+    async authorIds(db: Knex, writeUpId: number): Promise<number[]> {
+      return db('editions').where({ write_up_id: writeUpId, state: 'published' }).distinct().pluck('author_id');
+    },
+  };
+}

@@ -1,0 +1,62 @@
+import type { Knex } from 'knex';
+import type { RichText } from '../../shared/contract/write-ups.js';
+import type { HardwareService } from '../hardware/hardware.js';
+import type { RouteBinding } from '../http/binding.js';
+import { createCautionStore } from './caution.store.js';
+import { createEditionComparer } from './comparison.js';
+import { createDraftService } from './draft.service.js';
+import { createDraftStore } from './draft.store.js';
+import { createEditionViews, type PhotoLookup } from './edition-view.js';
+import { createFixStore } from './fix.store.js';
+import { createPageService } from './page.service.js';
+import { createPhotoRightsStore } from './photo-rights.store.js';
+import { createPublicationService } from './publication.service.js';
+import { createPublishedStore } from './published.store.js';
+import { createReferenceCheck } from './reference-check.js';
+import { createTrialService, type IndexNotice } from './trial.service.js';
+import { createTrialStore } from './trial.store.js';
+import { writeUpBindings } from './write-ups.routes.js';
+
+export interface WriteUpSurroundings {
+  readonly knex: Knex;
+  readonly clock: () => Date;
+  readonly hardware: HardwareService;
+  readonly photos: PhotoLookup;
+  readonly renderText: (source: string) => RichText;
+  readonly searchOutbox: IndexNotice;
+}
+
+export type WriteUpService = ReturnType<typeof createWriteUpService>;
+
+/** Write-ups with their drafts, editions and trials. */
+export function createWriteUps(around: WriteUpSurroundings): { bindings: RouteBinding[]; service: WriteUpService } {
+  const service = createWriteUpService(around);
+  return { bindings: writeUpBindings(service), service };
+}
+
+function createWriteUpService(around: WriteUpSurroundings) {
+  const { knex, clock, hardware, photos } = around;
+  const drafts = createDraftStore(knex);
+  const published = createPublishedStore(knex);
+  const fixes = createFixStore(knex);
+  const trials = createTrialStore(knex);
+  const cautions = createCautionStore(knex);
+  const views = createEditionViews({ ...around, fixes, cautions });
+  const comparer = createEditionComparer(hardware, photos);
+  const references = createReferenceCheck(hardware, createPhotoRightsStore(knex));
+  const trialService = createTrialService({ ...around, published, fixes, trials });
+  const { judgeStandings } = trialService;
+  return {
+    ...createPageService({ knex, published, drafts, trials, views, comparer }),
+    ...createDraftService({ knex, clock, drafts, published, references, views, photos }),
+    reportTrial: trialService.reportTrial,
+    ...createPublicationService({ drafts, fixes, judgeStandings, searchOutbox: around.searchOutbox }),
+    /** An edition in whatever state, for the desk. */
+    editionById: drafts.edition,
+    publishedContent: published.publishedContent,
+    cautionsOf: cautions.cautionsOf,
+    cautionsOfMany: cautions.cautionsOfMany,
+    viewOf: views.viewOf,
+    compare: comparer.compare,
+  };
+}
