@@ -138,8 +138,6 @@ export function createDraftService({ knex, clock, drafts, published, references,
       const items = rows.map((row) => ({ ...row, updatedAt: row.updatedAt.toISOString() }));
       return toPage(items, query.limit, (row) => ({ at: row.updatedAt, id: row.editionId }));
     },
-
-    missingFrom,
   };
 
   async function ownEdition(caller: MemberCaller, id: number): Promise<EditionRow> {

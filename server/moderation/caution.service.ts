@@ -1,0 +1,113 @@
+import type { Knex } from 'knex';
+import type { LibraryCaution, PlaceCaution } from '../../shared/contract/moderation.js';
+import type { Caution } from '../../shared/contract/write-ups.js';
+import { FieldNotValid, NotFound } from '../http/problems.js';
+import type { WriteUpService } from '../write-ups/write-ups.js';
+import { CautionMissing, openHazards } from './caution-missing.js';
+import { noSuchEdition } from './desk.service.js';
+import type { DeskStore } from './desk.store.js';
+import type { CautionWords, PlacedCautionStore } from './placed-caution.store.js';
+
+export interface CautionParts {
+  readonly knex: Knex;
+  readonly clock: () => Date;
+  readonly writeUps: WriteUpService;
+  readonly desk: DeskStore;
+  readonly placed: PlacedCautionStore;
+}
+
+export type CautionService = ReturnType<typeof createCautionService>;
+
+/**
+ * Cautions hang on a write-up or on one of its fixes, not on an edition: whatever an author writes next, they stay until a
+ * moderator takes them off.
+ */
+export function createCautionService({ knex, clock, writeUps, desk, placed }: CautionParts) {
+  return {
+    listLibraryCautions(): Promise<LibraryCaution[]> {
+      return placed.library();
+    },
+
+    async placeCaution(moderatorId: number, { editionId, fixKey, libraryId, ...words }: PlaceCaution): Promise<Caution> {
+      const edition = await writeUps.editionById(editionId);
+      if (!edition || edition.state === 'draft' || edition.discardedAt !== null) throw noSuchEdition();
+      const { writeUpId } = edition;
+      if (fixKey !== null && !edition.content.fixes.some((fix) => fix.key === fixKey)) {
+        throw new FieldNotValid('fixKey', 'is not a fix of this edition', 'Choose one of its fixes, or the whole write-up.');
+      }
+      if (libraryId !== null && !(await placed.isInLibrary(libraryId))) {
+        throw new FieldNotValid('libraryId', 'is not in the library', 'Choose an entry of the library, or none.');
+      }
+      const at = clock();
+      const id = await knex.transaction(async (trx) => {
+        await writeUps.holdWriteUp(trx, writeUpId);
+        const fixId = fixKey === null ? null : await writeUps.fixIdOf(trx, writeUpId, fixKey);
+        const caution = await placed.place(trx, { writeUpId, fixId, libraryId, words, placedBy: moderatorId, at });
+        await desk.noteDecision(trx, { editionId, moderatorId, decision: 'caution-placed', reason: words.hazard, at });
+        return caution;
+      });
+      return { id, fixKey, ...words };
+    },
+
+    /** Refused where the new words no longer list a hazard for which the published edition needs it. */
+    async changeCaution(moderatorId: number, id: number, words: CautionWords): Promise<Caution> {
+      const before = await withHeldCaution(id, async (trx, writeUpId, caution, others) => {
+        await demandAnswered(trx, writeUpId, [...others, caution], [...others, { ...caution, ...words }]);
+        await placed.reword(trx, id, words);
+        await note(trx, writeUpId, moderatorId, 'caution-changed', `${caution.hazard} → ${words.hazard}`);
+        return caution;
+      });
+      return { ...before, ...words };
+    },
+
+    /** Refused where the published edition names a hazard that only this caution answers. */
+    async removeCaution(moderatorId: number, id: number): Promise<void> {
+      await withHeldCaution(id, async (trx, writeUpId, caution, others) => {
+        await demandAnswered(trx, writeUpId, [...others, caution], others);
+        await placed.takeOff(trx, id, clock());
+        await note(trx, writeUpId, moderatorId, 'caution-removed', caution.hazard);
+      });
+    },
+  };
+
+  async function withHeldCaution<T>(
+    id: number,
+    change: (trx: Knex, writeUpId: number, caution: Caution, others: Caution[]) => Promise<T>,
+  ): Promise<T> {
+    const writeUpId = await placed.writeUpOf(id);
+    if (writeUpId === undefined) throw noSuchCaution();
+    return knex.transaction(async (trx) => {
+      await writeUps.holdWriteUp(trx, writeUpId);
+      const standing = await writeUps.cautionsOf(writeUpId, trx);
+      const caution = standing.find((each) => each.id === id);
+      if (!caution) throw noSuchCaution();
+      return change(trx, writeUpId, caution, standing.filter((each) => each.id !== id));
+    });
+  }
+
+  /** What the published edition already lacked before does not stand in the way of a change that makes it no worse. */
+  async function demandAnswered(trx: Knex, writeUpId: number, before: Caution[], after: Caution[]): Promise<void> {
+    const content = await writeUps.publishedContent(trx, writeUpId);
+    if (!content) return;
+    const openBefore = openHazards(content, before).map((open) => `${open.hazard} ${open.fixKey}`);
+    const opened = openHazards(content, after).filter((open) => !openBefore.includes(`${open.hazard} ${open.fixKey}`));
+    if (opened.length === 0) return;
+    const remedy = 'Place another caution for these hazards first, or return an edition that no longer names them.';
+    throw new CautionMissing('The published edition needs this caution.', remedy, content, opened);
+  }
+
+  async function note(
+    trx: Knex,
+    writeUpId: number,
+    moderatorId: number,
+    decision: 'caution-changed' | 'caution-removed',
+    reason: string,
+  ): Promise<void> {
+    const editionId = await desk.editionForNotes(trx, writeUpId);
+    await desk.noteDecision(trx, { editionId, moderatorId, decision, reason, at: clock() });
+  }
+}
+
+function noSuchCaution(): NotFound {
+  return new NotFound('There is no such caution, or it was taken off.', 'Read the edition again.');
+}

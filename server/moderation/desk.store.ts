@@ -1,0 +1,105 @@
+import type { Knex } from 'knex';
+import type { EditionContent } from '../../shared/contract/edition-content.js';
+import type { EditionLine } from '../../shared/contract/write-ups.js';
+import { fromJson } from '../rows.js';
+
+export interface WaitingRow {
+  readonly editionId: number;
+  readonly writeUpId: number;
+  readonly number: number;
+  readonly title: string;
+  readonly authorId: number;
+  readonly authorName: string;
+  readonly submittedAt: Date;
+  readonly changeNote: string;
+  readonly content: EditionContent;
+}
+
+export type Decision = 'published' | 'returned' | 'caution-placed' | 'caution-changed' | 'caution-removed';
+
+export type DeskStore = ReturnType<typeof createDeskStore>;
+
+export function createDeskStore(knex: Knex) {
+  return {
+    /** Editions that wait, the longest wait first. */
+    async waiting(options: { after?: { at: Date; id: number } | undefined; rows: number }): Promise<WaitingRow[]> {
+      const query = knex('editions as e')
+        .join('accounts as a', 'a.id', 'e.author_id')
+        .where('e.state', 'submitted')
+        .orderBy(['e.submitted_at', 'e.id'])
+        .limit(options.rows)
+        .select('e.number', 'e.title', 'e.content', {
+          editionId: 'e.id',
+          writeUpId: 'e.write_up_id',
+          authorId: 'a.id',
+          authorName: 'a.display_name',
+          submittedAt: 'e.submitted_at',
+          changeNote: 'e.change_note',
+        });
+      const { after } = options;
+      if (after) {
+        void query
+          .where('e.submitted_at', '>=', after.at)
+          .where((either) => either.where('e.submitted_at', '>', after.at).orWhere('e.id', '>', after.id));
+      }
+      const rows: (Omit<WaitingRow, 'content'> & { content: unknown })[] = await query;
+      return rows.map((row) => ({ ...row, content: fromJson<EditionContent>(row.content) }));
+    },
+
+    /** The edition that is published now, with its text. */
+    async publishedEdition(writeUpId: number): Promise<{ line: EditionLine; content: EditionContent } | undefined> {
+      const row = await knex('write_ups as w')
+        .join('editions as e', 'e.id', 'w.published_edition_id')
+        .join('accounts as a', 'a.id', 'e.author_id')
+        .where('w.id', writeUpId)
+        .first('e.id', 'e.number', 'e.title', 'e.content', {
+          authorId: 'a.id',
+          authorName: 'a.display_name',
+          changeNote: 'e.change_note',
+          publishedAt: 'e.published_at',
+        });
+      return (
+        row && {
+          line: {
+            id: row.id,
+            number: row.number,
+            author: { id: row.authorId, displayName: row.authorName },
+            changeNote: row.changeNote,
+            publishedAt: (row.publishedAt as Date).toISOString(),
+            title: row.title,
+          },
+          content: fromJson<EditionContent>(row.content),
+        }
+      );
+    },
+
+    /** The edition that a decision on a write-up is noted under: the one on the desk, else the published one, else the newest. */
+    async editionForNotes(trx: Knex, writeUpId: number): Promise<number> {
+      const row = await trx('editions as e')
+        .join('write_ups as w', 'w.id', 'e.write_up_id')
+        .where('e.write_up_id', writeUpId)
+        .orderByRaw("e.state = 'submitted' DESC, e.id = w.published_edition_id DESC, e.id DESC")
+        .first('e.id');
+      return row.id;
+    },
+
+    async noteDecision(
+      trx: Knex,
+      decision: { editionId: number; moderatorId: number; decision: Decision; reason: string; at: Date },
+    ): Promise<void> {
+      await trx('desk_decisions').insert({
+        edition_id: decision.editionId,
+        moderator_id: decision.moderatorId,
+        decision: decision.decision,
+        reason: decision.reason,
+        created_at: decision.at,
+      });
+    },
+
+    async markReturned(trx: Knex, editionId: number, reason: string, at: Date): Promise<void> {
+      await trx('editions')
+        .where('id', editionId)
+        .update({ state: 'returned', return_reason: reason, updated_at: at, version: trx.raw('version + 1') });
+    },
+  };
+}

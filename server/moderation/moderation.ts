@@ -1,0 +1,34 @@
+import type { Knex } from 'knex';
+import type { RouteBinding } from '../http/binding.js';
+import type { IndexNotice } from '../write-ups/trial.service.js';
+import type { WriteUpService } from '../write-ups/write-ups.js';
+import { createCautionService } from './caution.service.js';
+import { createDecisionService, type DeskMail } from './decision.service.js';
+import { createDeskService } from './desk.service.js';
+import { createDeskStore } from './desk.store.js';
+import { createPlacedCautionStore } from './placed-caution.store.js';
+import { moderationBindings } from './moderation.routes.js';
+
+export interface ModerationSurroundings {
+  readonly knex: Knex;
+  readonly clock: () => Date;
+  readonly writeUps: WriteUpService;
+  readonly mail: DeskMail;
+  readonly searchOutbox: IndexNotice;
+}
+
+/** The moderators' desk: queue, cautions, decisions. */
+export function createModeration(around: ModerationSurroundings): { bindings: RouteBinding[] } {
+  const parts = {
+    ...around,
+    desk: createDeskStore(around.knex),
+    placed: createPlacedCautionStore(around.knex),
+  };
+  return {
+    bindings: moderationBindings({
+      ...createDeskService(parts),
+      ...createCautionService(parts),
+      ...createDecisionService(parts),
+    }),
+  };
+}
