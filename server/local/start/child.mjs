@@ -17,9 +17,13 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
   child.stdout.pipe(log, { end: false });
   child.stderr.pipe(log, { end: false });
   let over = false;
+  // Its own process group keeps it from Ctrl-C, so it would outlive a launcher that exits in a hurry.
+  const endAlong = () => child.kill('SIGTERM');
+  process.once('exit', endAlong);
   const exited = new Promise((resolve) => {
     const end = (how) => {
       over = true;
+      process.removeListener('exit', endAlong);
       log.end();
       resolve(how);
     };

@@ -32,6 +32,7 @@ function readKept(file) {
     if (error.code === 'ENOENT') return {};
     throw new Error(
       `${file} cannot be read (${error.message}): mend it, or remove the data folder to start afresh.`,
+      { cause: error },
     );
   }
 }

@@ -1,0 +1,2 @@
+import type { LaunchSettings } from './stack.mjs';
+export function readLaunchSettings(environment: Record<string, string | undefined>): LaunchSettings;
