@@ -4,6 +4,15 @@ import { TitleStrategy, type RouterStateSnapshot } from '@angular/router';
 
 const site = 'Shimlore';
 
+export interface PageFacts {
+  readonly title: string;
+  readonly description?: string;
+  /** Canonical address, without the query. */
+  readonly path?: string;
+  /** JSON-LD. */
+  readonly data?: object;
+}
+
 /** Title, description, canonical address and structured data of the page that is shown. */
 @Injectable({ providedIn: 'root' })
 export class ShimloreTitles extends TitleStrategy {
@@ -13,16 +22,21 @@ export class ShimloreTitles extends TitleStrategy {
   private readonly request = inject(REQUEST, { optional: true });
   private readonly responseInit = inject(RESPONSE_INIT, { optional: true });
 
-  /** On every navigation: the route's own title; what the last page said of itself goes. */
+  private lastPath: string | null = null;
+
+  /** On the way to another page: the route's own title; what the last page said of itself goes. */
   override updateTitle(snapshot: RouterStateSnapshot): void {
+    const [path = ''] = snapshot.url.split(/[?#]/);
+    if (path === this.lastPath) return;
+    this.lastPath = path;
     const title = this.buildTitle(snapshot);
     this.title.setTitle(title ? `${title} · ${site}` : site);
     this.meta.removeTag('name="description"');
     this.document.head.querySelectorAll('link[rel=canonical], script[data-page]').forEach((element) => element.remove());
   }
 
-  /** What a page says of itself once it knows. `path` is the canonical one, without the query. */
-  describe(page: { title: string; description?: string; path?: string; data?: object }): void {
+  /** What a page says of itself once it knows; call it from an effect, since a navigation ends after its page is made. */
+  describe(page: PageFacts): void {
     this.title.setTitle(`${page.title} · ${site}`);
     if (page.description) this.meta.updateTag({ name: 'description', content: page.description });
     if (page.path) this.link(page.path);

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
 import { toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { Router, RouterLink } from '@angular/router';
 import { Subject, combineLatest, debounceTime, distinctUntilChanged, map, of, skip, startWith, switchMap } from 'rxjs';
@@ -47,12 +47,15 @@ export class HomePage {
   protected readonly examples = ['bracket rocks on a raised lip', '22.5 lip 19.5 recess', 'belt slips when cold', 'gear grinds at one spot'];
 
   constructor() {
-    inject(ShimloreTitles).describe({
-      title: 'It fits, for your revisions',
-      description:
-        'Fit problems between imaging telescopes and the parts bolted to them: symptoms, causes and fixes, each for the revisions it holds for.',
-      path: '/',
-    });
+    const titles = inject(ShimloreTitles);
+    effect(() =>
+      titles.describe({
+        title: 'It fits, for your revisions',
+        description:
+          'Fit problems between imaging telescopes and the parts bolted to them: symptoms, causes and fixes, each for the revisions it holds for.',
+        path: '/',
+      }),
+    );
   }
 
   protected openAll(): void {

@@ -1,4 +1,4 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, ElementRef, computed, inject, linkedSignal, viewChild } from '@angular/core';
+import { ChangeDetectionStrategy, Component, DestroyRef, ElementRef, computed, effect, inject, linkedSignal, viewChild } from '@angular/core';
 import { takeUntilDestroyed, toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router } from '@angular/router';
 import { Subject, combineLatest, debounceTime, distinctUntilChanged, map, skip, startWith, switchMap } from 'rxjs';
@@ -64,11 +64,14 @@ export class SearchPage {
     this.typing
       .pipe(debounceTime(pauseInTyping), distinctUntilChanged(), takeUntilDestroyed(inject(DestroyRef)))
       .subscribe((q) => this.go({ ...this.asking(), q }, true));
-    inject(ShimloreTitles).describe({
-      title: 'Search',
-      description: 'Search fit problems by symptom, part, revision and fix.',
-      path: '/search',
-    });
+    const titles = inject(ShimloreTitles);
+    effect(() =>
+      titles.describe({
+        title: 'Search',
+        description: 'Search fit problems by symptom, part, revision and fix.',
+        path: '/search',
+      }),
+    );
   }
 
   protected type(words: string): void {

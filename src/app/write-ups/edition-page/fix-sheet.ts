@@ -1,0 +1,41 @@
+import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
+import { afterwardsWords, fixKindWords } from '../../../../shared/contract/vocabulary';
+import type { FixView } from '../../../../shared/contract/write-ups';
+import { CautionBox } from '../../ui/caution-box/caution-box';
+import { PermanenceLabel } from '../../ui/permanence-label/permanence-label';
+import { PhotoView } from '../../ui/photo/photo';
+import { RichTextView } from '../../ui/rich-text/rich-text';
+import { StandingLabel } from '../../ui/standing-label/standing-label';
+import { acceptanceText } from '../figures';
+
+/** One remedy: its facts, its cautions, then why, what is needed, the steps, and how to know that it worked. */
+@Component({
+  selector: 'sl-fix-sheet',
+  imports: [CautionBox, PermanenceLabel, PhotoView, RichTextView, StandingLabel],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './fix-sheet.html',
+  styleUrl: './fix-sheet.scss',
+})
+export class FixSheet {
+  readonly fix = input.required<FixView>();
+  readonly position = input.required<number>();
+
+  protected readonly kind = computed(() => {
+    const { kind } = this.fix();
+    return kind ? fixKindWords[kind] : null;
+  });
+  protected readonly acceptance = computed(() => {
+    const { acceptance } = this.fix();
+    return acceptance ? acceptanceText(acceptance) : null;
+  });
+  protected readonly afterwards = computed(() => this.fix().afterwards.map((item) => afterwardsWords[item]).join(', '));
+  protected readonly trials = computed(() => {
+    const { held, heldForAWhile, didNotHelp } = this.fix().trialCounts;
+    const parts = [
+      held > 0 ? `held for ${held}` : '',
+      heldForAWhile > 0 ? `held for a while for ${heldForAWhile}` : '',
+      didNotHelp > 0 ? `did not help ${didNotHelp}` : '',
+    ].filter((part) => part !== '');
+    return parts.length > 0 ? parts.join(', ') : 'no trial yet';
+  });
+}

@@ -1,0 +1,61 @@
+import { DOCUMENT } from '@angular/common';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, linkedSignal } from '@angular/core';
+import { ActivatedRoute, RouterLink } from '@angular/router';
+import { map } from 'rxjs';
+import type { Trial } from '../../../shared/contract/write-ups';
+import { loadEach } from '../core/load';
+import { Session } from '../core/session';
+import { ShimloreTitles } from '../core/titles';
+import { Icon } from '../ui/icon/icon';
+import { LoadStateView } from '../ui/load-state/load-state';
+import { EditionPage } from './edition-page/edition-page';
+import { writeUpData } from './structured-data';
+import { TitleBlock } from './title-block';
+import { TrialForm } from './trial-form';
+import { TrialList } from './trial-list';
+import { Verdict } from './verdict';
+import { WriteUps } from './write-ups';
+
+/** A write-up: the verdict for the reader's bench first, then the edition, then what others found. */
+@Component({
+  selector: 'sl-write-up-page',
+  imports: [EditionPage, Icon, LoadStateView, RouterLink, TitleBlock, TrialForm, TrialList, Verdict],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './write-up-page.html',
+  styleUrl: './write-up-page.scss',
+})
+export class WriteUpPageView {
+  private readonly titles = inject(ShimloreTitles);
+  private readonly writeUps = inject(WriteUps);
+  private readonly window = inject(DOCUMENT).defaultView;
+  protected readonly session = inject(Session);
+
+  protected readonly loaded = loadEach(inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')), (slug) => this.writeUps.read(slug));
+  protected readonly page = computed(() => {
+    const now = this.loaded();
+    return now.state === 'ready' ? now.value : null;
+  });
+  protected readonly trials = linkedSignal<readonly Trial[]>(() => this.page()?.trials ?? []);
+  protected readonly fixTitles = computed(() => this.page()?.view.fixes.map(({ key, title }) => ({ key, title })) ?? []);
+
+  constructor() {
+    effect(() => {
+      const now = this.loaded();
+      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'ready') {
+        const path = `/write-ups/${now.value.slug}`;
+        const { title, summary } = now.value.view;
+        this.titles.describe({ title, description: summary, path, data: writeUpData(now.value, this.titles.addressOf(path)) });
+      }
+    });
+  }
+
+  /** One person has one trial of a fix: theirs replaces the one before. */
+  protected take(trial: Trial): void {
+    this.trials.update((trials) => [trial, ...trials.filter((other) => other.id !== trial.id && !(other.person.id === trial.person.id && other.fixKey === trial.fixKey))]);
+  }
+
+  protected print(): void {
+    this.window?.print();
+  }
+}
