@@ -8,7 +8,10 @@ import type { PhotoStore } from './photo-store.js';
  * written beside, forced to the disk and then renamed, so that nobody ever reads half of one.
  */
 export function createLocalPhotoStore(folder: string): PhotoStore {
-  const placeOf = (name: string): string => path.join(folder, name.slice(0, 2), path.basename(name));
+  const placeOf = (name: string): string => {
+    const file = path.basename(name);
+    return path.join(folder, file.slice(0, 2), file);
+  };
   const beside = path.join(folder, 'incoming');
 
   async function put(name: string, bytes: Buffer): Promise<void> {
@@ -61,7 +64,7 @@ export function createLocalPhotoStore(folder: string): PhotoStore {
         detail: `photo folder cannot be written: ${(error as NodeJS.ErrnoException).code ?? 'unknown'}`,
       };
     } finally {
-      await rm(probe, { force: true });
+      await rm(probe, { force: true }).catch(() => undefined);
     }
   }
 
