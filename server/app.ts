@@ -22,8 +22,11 @@ import { sessionSweeper } from './http/session-sweeper.js';
 import { createSessions } from './http/session.js';
 import { createMail } from './mail/mail.js';
 import { createPhotos } from './photos/photos.js';
+import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
+import { renderText } from './text/render-text.js';
 import type { Worker } from './worker.js';
+import { createWriteUps } from './write-ups/write-ups.js';
 
 /** All that comes from outside; tests hand in their own. */
 export interface Surroundings {
@@ -69,21 +72,31 @@ export function createApp(around: Surroundings): Composition {
     secret,
   });
   const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf });
-  const sessions = createSessions({
-    knex,
-    secret,
-    secure,
-    strategy: accounts.strategy,
-    findAccount: accounts.findAccount,
-  });
+  const sessions = createSessions({ knex, secret, secure, authenticator: accounts.authenticator });
   const photos = createPhotos({ knex, photoDir: settings.PHOTO_DIR, clock, limits });
   const hardware = createHardware({ knex });
   const bench = createBench({ knex, hardware: hardware.service, clock });
+  const search = createSearch({
+    knex,
+    search: around.search,
+    clock,
+    logger,
+    benchOf: (accountId) => bench.service.benchOf(accountId),
+    indexUid: settings.SEARCH_INDEX,
+  });
+  const writeUps = createWriteUps({
+    knex,
+    clock,
+    hardware: hardware.service,
+    photos: photos.service,
+    renderText,
+    searchOutbox: search.outbox,
+  });
   const system = createSystem({
     knex,
     publicAddress: settings.PUBLIC_ADDRESS,
     declared: routes,
-    checks: { search: async () => ({ ok: true, detail: '' }), mail: mail.health, photos: photos.health },
+    checks: { search: search.health, mail: mail.health, photos: photos.health },
   });
 
   const bindings = [
@@ -93,6 +106,8 @@ export function createApp(around: Surroundings): Composition {
     ...photos.bindings,
     ...hardware.bindings,
     ...bench.bindings,
+    ...search.bindings,
+    ...writeUps.bindings,
   ];
 
   const app = express();
@@ -111,7 +126,7 @@ export function createApp(around: Surroundings): Composition {
   app.use(['/api', '/photos'], nothingHere, problemHandler);
   if (around.pages) app.use(around.pages.rendered, nothingHere, pageProblemHandler);
   app.use(nothingHere, problemHandler);
-  return { app, workers: [mail.worker, sessionSweeper({ knex, clock, logger })] };
+  return { app, workers: [mail.worker, search.worker, sessionSweeper({ knex, clock, logger })] };
 }
 
 function unlessPhotoFile(handler: RequestHandler): RequestHandler {

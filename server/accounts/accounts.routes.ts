@@ -1,9 +1,14 @@
 import type { Request, Response } from 'express';
-import type { Strategy } from 'passport';
 import { accountRoutes } from '../../shared/contract/accounts.js';
 import { bind, memberOf, type RouteBinding } from '../http/binding.js';
 import type { Csrf } from '../http/csrf.js';
-import { authenticateWith, endSession, startSession, type SessionAccount } from '../http/session.js';
+import {
+  authenticate,
+  endSession,
+  startSession,
+  type Authenticator,
+  type SessionAccount,
+} from '../http/session.js';
 import { SignInRefused } from './account-problems.js';
 import type { EntryService } from './entry.service.js';
 import type { PeopleService } from './people.service.js';
@@ -14,10 +19,10 @@ const mailed = { mailed: true } as const;
 export function bindAccountRoutes(parts: {
   entry: EntryService;
   people: PeopleService;
-  strategy: Strategy;
+  authenticator: Authenticator;
   csrf: Csrf;
 }): RouteBinding[] {
-  const { entry, people, strategy, csrf } = parts;
+  const { entry, people, authenticator, csrf } = parts;
 
   const signInAs = async (account: SessionAccount, request: Request, response: Response) => {
     await startSession(request, account);
@@ -43,7 +48,7 @@ export function bindAccountRoutes(parts: {
     }),
     bind(accountRoutes.signIn, async ({ body, request, response }) => {
       request.body = body;
-      const account = await authenticateWith(strategy, request, response);
+      const account = await authenticate(authenticator, request, response);
       if (!account) throw new SignInRefused();
       return signInAs(account, request, response);
     }),

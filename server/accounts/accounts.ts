@@ -1,7 +1,6 @@
-import type { Strategy } from 'passport';
 import type { RouteBinding } from '../http/binding.js';
 import type { Csrf } from '../http/csrf.js';
-import type { SessionAccount } from '../http/session.js';
+import { createAuthenticator, type Authenticator } from '../http/session.js';
 import { bindAccountRoutes } from './accounts.routes.js';
 import { createEntryService, type EntryDependencies } from './entry.service.js';
 import { createLocalStrategy } from './local-strategy.js';
@@ -9,17 +8,16 @@ import { createPeopleService } from './people.service.js';
 
 export interface Accounts {
   readonly bindings: RouteBinding[];
-  readonly strategy: Strategy;
-  findAccount(id: number): Promise<SessionAccount | undefined>;
+  /** Knows who a request comes from; sessions are built on it. */
+  readonly authenticator: Authenticator;
 }
 
 export function createAccounts(needs: EntryDependencies & { csrf: Csrf }): Accounts {
   const entry = createEntryService(needs);
   const people = createPeopleService(needs);
-  const strategy = createLocalStrategy(entry);
-  return {
-    bindings: bindAccountRoutes({ entry, people, strategy, csrf: needs.csrf }),
-    strategy,
+  const authenticator = createAuthenticator({
+    strategy: createLocalStrategy(entry),
     findAccount: (id) => people.findAccount(id),
-  };
+  });
+  return { bindings: bindAccountRoutes({ entry, people, authenticator, csrf: needs.csrf }), authenticator };
 }

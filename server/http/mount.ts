@@ -1,10 +1,10 @@
 import express, { type Express, type Request, type RequestHandler } from 'express';
 import type { z } from 'zod';
-import type { FieldProblem } from '../../shared/contract/problem.js';
 import type { RouteDefinition } from '../../shared/contract/route.js';
 import type { RouteBinding } from './binding.js';
 import type { Caller } from './caller.js';
-import { NotAllowed, NotSignedIn, NotValid, ProblemError } from './problems.js';
+import { fieldProblems } from './field-problems.js';
+import { NotAllowed, NotFound, NotSignedIn, NotValid, ProblemError } from './problems.js';
 
 const jsonBody = express.json({ limit: '3mb', type: 'application/json' });
 
@@ -100,21 +100,9 @@ function parsePart(
   if (!schema) return undefined;
   const parsed = schema.safeParse(value);
   if (parsed.success) return parsed.data as undefined;
-  throw new NotValid(
-    parsed.error.issues.flatMap((issue) => fieldProblemsOf(issue)),
-    `The ${where} has fields that cannot be taken as they are.`,
-  );
-}
-
-function fieldProblemsOf(issue: z.core.$ZodIssue): FieldProblem[] {
-  if (issue.code === 'unrecognized_keys') {
-    return issue.keys.map((key) => ({
-      path: [...issue.path, key].join('.'),
-      message: 'is not a field here',
-      remedy: 'Leave it out.',
-    }));
-  }
-  return [{ path: issue.path.join('.'), message: issue.message }];
+  const fields = fieldProblems(parsed.error.issues);
+  if (where === 'address') throw new NotFound(undefined, undefined, fields);
+  throw new NotValid(fields, `The ${where} has fields that cannot be taken as they are.`);
 }
 
 /** A query that names a list field once (`?part=a`) means a list of one. */

@@ -60,7 +60,7 @@ function bodyProblem(error: unknown): ProblemError | undefined {
     );
   }
   if (
-    /^(Multipart:|Malformed part header|Unexpected end of form|Missing Content-Type|Unsupported content type)/.test(
+    /^(?:Multipart:|Malformed (?:part header|content type)|Unexpected end of (?:form|file)|Missing Content-Type|Unsupported content type)/.test(
       error.message,
     )
   ) {

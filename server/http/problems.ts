@@ -48,8 +48,13 @@ export class FieldNotValid extends NotValid {
 }
 
 export class NotFound extends ProblemError {
-  constructor(what = 'There is nothing at this address.', remedy = 'Check the address, or search for it.') {
-    super('not-found', 404, what, remedy);
+  /** `fields`: what in the address cannot name anything. */
+  constructor(
+    what = 'There is nothing at this address.',
+    remedy = 'Check the address, or search for it.',
+    fields?: FieldProblem[],
+  ) {
+    super('not-found', 404, what, remedy, fields ? { fields } : {});
   }
 }
 

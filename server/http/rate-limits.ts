@@ -14,6 +14,8 @@ const limits = {
   token: { points: 60, duration: 15 * 60 },
   /** Photos stored by one account. */
   photo: { points: 120, duration: 60 * 60 },
+  /** Readings recorded by one account. */
+  measurement: { points: 300, duration: 60 * 60 },
 } as const;
 export type LimitName = keyof typeof limits;
 

@@ -1,14 +1,15 @@
 import type { Request, RequestHandler, Response } from 'express';
 import expressSession from 'express-session';
 import type { Knex } from 'knex';
-import passport from 'passport';
-import type { Strategy } from 'passport';
+import passport, { type Strategy } from 'passport';
 import type { AccountRole } from '../../shared/contract/vocabulary.js';
 import { visitor, type Caller } from './caller.js';
 import { SessionStore } from './session-store.js';
 
 const fourteenDays = 14 * 24 * 60 * 60 * 1000;
 const cookieName = 'shimlore.sid';
+
+export type Authenticator = InstanceType<typeof passport.Passport>;
 
 /** The little of an account that every request needs. */
 export interface SessionAccount {
@@ -22,22 +23,32 @@ export interface SessionParts {
 }
 
 /**
- * Sessions in MariaDB behind a cookie that scripts cannot read. A session is only made by signing in, so visitors carry
- * none; `findAccount` is asked on every request of a member, so that a changed role or a removed account acts at once.
+ * Passport with the strategy people sign in by. `findAccount` is asked on every request of a member, so that a changed
+ * role or a removed account acts at once.
  */
-export function createSessions(options: {
-  knex: Knex;
-  secret: string;
-  secure: boolean;
+export function createAuthenticator(options: {
   strategy: Strategy;
   findAccount(id: number): Promise<SessionAccount | undefined>;
-}): SessionParts {
+}): Authenticator {
   const authenticator = new passport.Passport();
   authenticator.use('local', options.strategy);
   authenticator.serializeUser((user, done) => done(null, (user as SessionAccount).id));
   authenticator.deserializeUser((id: number, done) => {
     options.findAccount(id).then((account) => done(null, account ?? false), done);
   });
+  return authenticator;
+}
+
+/**
+ * Sessions in MariaDB behind a cookie that scripts cannot read. A session is only made by signing in, so visitors carry
+ * none.
+ */
+export function createSessions(options: {
+  knex: Knex;
+  secret: string;
+  secure: boolean;
+  authenticator: Authenticator;
+}): SessionParts {
   const session = expressSession({
     name: cookieName,
     secret: options.secret,
@@ -48,7 +59,7 @@ export function createSessions(options: {
     cookie: { httpOnly: true, sameSite: 'lax', secure: options.secure, maxAge: fourteenDays, path: '/' },
   });
   return {
-    handlers: [session, authenticator.session()],
+    handlers: [session, options.authenticator.session()],
     callerOf(request) {
       const account = request.user as SessionAccount | undefined;
       return account ? { role: account.role, accountId: account.id } : visitor;
@@ -57,17 +68,17 @@ export function createSessions(options: {
 }
 
 /**
- * Asks a passport strategy about this request, without starting a session. Resolves to undefined where the strategy
- * turns the request down; an error of the strategy rejects.
+ * Asks the strategy about this request, without starting a session. Resolves to undefined where it turns the request
+ * down; an error of the strategy rejects.
  */
-export function authenticateWith(
-  strategy: Strategy,
+export function authenticate(
+  authenticator: Authenticator,
   request: Request,
   response: Response,
 ): Promise<SessionAccount | undefined> {
   return new Promise((resolve, reject) => {
-    const handler = passport.authenticate(
-      strategy,
+    const handler = authenticator.authenticate(
+      'local',
       { session: false },
       (error: unknown, account?: Express.User | false | null) => {
         if (error) reject(error as Error);

@@ -7,7 +7,7 @@ import type { Express } from 'express';
 import type { Knex } from 'knex';
 import { Meilisearch } from 'meilisearch';
 import { createTransport } from 'nodemailer';
-import { pino } from 'pino';
+import { pino, type Logger } from 'pino';
 import { createApp } from '../../../server/app.js';
 import { readSettings } from '../../../server/config.js';
 import { ensureSearchIndex } from '../../../server/search/index-settings.js';
@@ -43,7 +43,7 @@ export interface TestApp {
  * second one empties the tables of the first. `search` makes an empty search index and starts the workers that fill it.
  */
 export async function startTestApp(
-  options: { rateLimits?: boolean; search?: boolean; clock?: () => Date } = {},
+  options: { rateLimits?: boolean; search?: boolean; clock?: () => Date; logger?: Logger } = {},
 ): Promise<TestApp> {
   const clock = options.clock ?? (() => new Date());
   const { knex, url: databaseUrl } = await openEmptyDatabase();
@@ -74,7 +74,7 @@ export async function startTestApp(
     search,
     mailTransport,
     clock,
-    logger: pino({ level: settings.LOG_LEVEL }),
+    logger: options.logger ?? pino({ level: settings.LOG_LEVEL }),
     rateLimits: options.rateLimits ?? false,
   });
   server.on('request', composition.app);
