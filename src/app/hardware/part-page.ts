@@ -1,4 +1,86 @@
-import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
+import { ActivatedRoute, RouterLink } from '@angular/router';
+import { map } from 'rxjs';
+import type { PartPage as Part, PartSummary } from '../../../shared/contract/hardware';
+import type { Problem } from '../../../shared/contract/problem';
+import { partKindWords } from '../../../shared/contract/vocabulary';
+import { BenchStore } from '../bench/bench-store';
+import { toApiProblem } from '../core/api-problem';
+import { loadEach } from '../core/load';
+import { ShimloreTitles } from '../core/titles';
+import { Icon } from '../ui/icon/icon';
+import { LoadStateView } from '../ui/load-state/load-state';
+import { PhotoView } from '../ui/photo/photo';
+import { ProblemNote } from '../ui/problem-note/problem-note';
+import { Undo } from '../ui/undo/undo';
+import { Hardware } from './hardware';
+import { RevisionTimeLine } from './revision-time-line';
 
-@Component({ selector: 'sl-part-page', changeDetection: ChangeDetectionStrategy.OnPush, template: '' })
-export class PartPage {}
+/** A part: its revisions on a time line, how to tell which one is on the bench, what changed, and what is written about it. */
+@Component({
+  selector: 'sl-part-page',
+  imports: [Icon, LoadStateView, PhotoView, ProblemNote, RevisionTimeLine, RouterLink],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './part-page.html',
+  styleUrl: './part-page.scss',
+})
+export class PartPage {
+  private readonly hardware = inject(Hardware);
+  private readonly titles = inject(ShimloreTitles);
+  private readonly undo = inject(Undo);
+  protected readonly bench = inject(BenchStore);
+
+  protected readonly kinds = partKindWords;
+  protected readonly now = new Date();
+  protected readonly problem = signal<Problem | null>(null);
+  protected readonly loaded = loadEach(inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')), (slug) => this.hardware.part(slug));
+  protected readonly part = computed(() => {
+    const now = this.loaded();
+    return now.state === 'ready' ? now.value : null;
+  });
+  /** Newest first: what is sold today is what most people hold in hand. */
+  protected readonly newestFirst = computed(() => [...(this.part()?.revisions ?? [])].reverse());
+
+  constructor() {
+    effect(() => {
+      const now = this.loaded();
+      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'ready') this.describe(now.value);
+    });
+  }
+
+  protected async own(part: Part, revisionId: number | null): Promise<void> {
+    try {
+      this.problem.set(null);
+      await this.bench.add(summaryOf(part), revisionId);
+      const entry = this.bench.items().find((item) => item.part.id === part.id && (item.revision?.id ?? null) === revisionId);
+      if (entry) this.undo.offer(`${part.name} is on your bench.`, () => void this.bench.remove(entry));
+    } catch (error) {
+      this.problem.set(toApiProblem(error).problem);
+    }
+  }
+
+  private describe(part: Part): void {
+    const path = `/parts/${part.slug}`;
+    this.titles.describe({
+      title: `${part.name} by ${part.maker.name}`,
+      description: part.about || `Revisions of the ${part.name} and how to tell which one you have.`,
+      path,
+      data: {
+        '@context': 'https://schema.org',
+        '@type': 'Product',
+        name: part.name,
+        description: part.about,
+        category: partKindWords[part.kind],
+        url: this.titles.addressOf(path),
+        manufacturer: { '@type': 'Organization', name: part.maker.name },
+        hasVariant: part.revisions.map((revision) => ({ '@type': 'ProductModel', name: `${part.name} ${revision.label}`, releaseDate: revision.soldFrom ?? undefined })),
+      },
+    });
+  }
+}
+
+function summaryOf(part: Part): PartSummary {
+  const { id, slug, name, kind, maker, about, revisions, writeUps } = part;
+  return { id, slug, name, kind, maker, about, revisions: revisions.map(({ id: revisionId, partId, label }) => ({ id: revisionId, partId, label })), writeUps: writeUps.length };
+}
