@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import { missingFromContent } from '../../shared/contract/edition-completeness.js';
 import { NotComplete } from '../write-ups/edition-problems.js';
+import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { CautionMissing, openHazards } from './caution-missing.js';
 import { noSuchEdition } from './desk.service.js';
@@ -24,12 +25,13 @@ export interface DecisionParts {
   readonly writeUps: WriteUpService;
   readonly desk: DeskStore;
   readonly mail: DeskMail;
+  readonly searchOutbox: IndexNotice;
 }
 
 export type DecisionService = ReturnType<typeof createDecisionService>;
 
 /** A moderator's word on an edition. Each is one transaction: of two at once, the second finds the edition decided. */
-export function createDecisionService({ knex, clock, writeUps, desk, mail }: DecisionParts) {
+export function createDecisionService({ knex, clock, writeUps, desk, mail, searchOutbox }: DecisionParts) {
   return {
     /** NotComplete, CautionMissing or WrongState say what stands in the way; nothing is changed then. */
     async publishEdition(moderatorId: number, editionId: number, note: string): Promise<{ slug: string; number: number }> {
@@ -47,6 +49,7 @@ export function createDecisionService({ knex, clock, writeUps, desk, mail }: Dec
         const at = clock();
         const { slug, number } = await writeUps.publishHeld(trx, held, at);
         await desk.noteDecision(trx, { editionId, moderatorId, decision: 'published', reason: note, at });
+        await searchOutbox.add(trx, writeUpId);
         await mail.queueEditionPublished(trx, { authorId, editionId, number, title: content.title, slug });
         return { slug, number };
       });

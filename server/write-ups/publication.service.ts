@@ -1,19 +1,18 @@
 import type { Knex } from 'knex';
 import type { EditionContent } from '../../shared/contract/edition-content.js';
+import { NotFound } from '../http/problems.js';
 import type { DraftStore, EditionRow } from './draft.store.js';
 import { editionLinks } from './edition-links.js';
 import { wrongState } from './edition-problems.js';
 import type { FixStore } from './fix.store.js';
 import { publicationStore } from './publication.store.js';
 import { freeSlug, slugFrom } from './slug.js';
-import type { IndexNotice, TrialService } from './trial.service.js';
-import { NotFound } from '../http/problems.js';
+import type { TrialService } from './trial.service.js';
 
 export interface PublicationParts {
   readonly drafts: DraftStore;
   readonly fixes: FixStore;
   readonly judgeStandings: TrialService['judgeStandings'];
-  readonly searchOutbox: IndexNotice;
 }
 
 /** An edition held fast by the transaction, with what is published while it is held. */
@@ -23,7 +22,7 @@ export interface HeldEdition {
 }
 
 /** How an edition becomes the published one. Everything runs in the transaction of the desk's command. */
-export function createPublicationService({ drafts, fixes, judgeStandings, searchOutbox }: PublicationParts) {
+export function createPublicationService({ drafts, fixes, judgeStandings }: PublicationParts) {
   return {
     /** Holds write-up and edition, in that order; WrongState unless the edition waits on the desk. */
     async holdSubmitted(trx: Knex, writeUpId: number, editionId: number): Promise<HeldEdition> {
@@ -52,7 +51,6 @@ export function createPublicationService({ drafts, fixes, judgeStandings, search
       await writeLinks(trx, writeUpId, id, content);
       await publicationStore.markPublished(trx, writeUpId, id, at);
       await judgeStandings(trx, writeUpId, content);
-      await searchOutbox.add(trx, writeUpId);
       return { slug, number };
     },
   };

@@ -50,7 +50,7 @@ function createWriteUpService(around: WriteUpSurroundings) {
     ...createPageService({ knex, published, drafts, trials, views, comparer }),
     ...createDraftService({ knex, clock, drafts, published, references, views, photos }),
     reportTrial: trialService.reportTrial,
-    ...createPublicationService({ drafts, fixes, judgeStandings, searchOutbox: around.searchOutbox }),
+    ...createPublicationService({ drafts, fixes, judgeStandings }),
     /** An edition in whatever state, for the desk. */
     editionById: drafts.edition,
     publishedContent: published.publishedContent,
