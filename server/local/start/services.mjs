@@ -29,7 +29,7 @@ export async function startSearch({ dataDir, port, key, compiled, logDir = join(
     env: {
       ...process.env,
       SEARCH_PORT: String(port),
-      SEARCH_KEY: key,
+      SEARCH_MASTER_KEY: key,
       SEARCH_DATA: resolve(dataDir, 'search'),
     },
     logFile: join(logDir, 'search.log'),
