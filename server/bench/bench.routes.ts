@@ -4,7 +4,9 @@ import type { BenchService } from './bench.service.js';
 
 export function benchBindings(bench: BenchService): RouteBinding[] {
   return [
-    bind(routes.readBench, async ({ caller }) => ({ items: await bench.readBench(memberOf(caller).accountId) })),
+    bind(routes.readBench, async ({ caller }) => ({
+      items: await bench.readBench(memberOf(caller).accountId),
+    })),
     bind(routes.addToBench, ({ caller, body }) => bench.addToBench(memberOf(caller).accountId, body)),
     bind(routes.changeBenchItem, ({ caller, params, body }) =>
       bench.changeRevision(memberOf(caller).accountId, params.id, body.revisionId),

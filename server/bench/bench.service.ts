@@ -23,9 +23,13 @@ export function createBenchService(store: BenchStore, hardware: HardwareService,
     },
 
     /** FieldNotValid where part or revision is not there; AlreadyThere where the same revision stands on the bench. */
-    async addToBench(accountId: number, wanted: { partId: number; revisionId: number | null }): Promise<BenchItem> {
+    async addToBench(
+      accountId: number,
+      wanted: { partId: number; revisionId: number | null },
+    ): Promise<BenchItem> {
       const part = (await hardware.summariesByIds([wanted.partId])).get(wanted.partId);
-      if (!part) throw new FieldNotValid('partId', 'is not a part of the catalogue', 'Choose the part from the list.');
+      if (!part)
+        throw new FieldNotValid('partId', 'is not a part of the catalogue', 'Choose the part from the list.');
       demandOwnRevision(part, wanted.revisionId);
       const id = await store.addItem(accountId, wanted, clock());
       if (id === 'already-there') throw sameTwice(part);
@@ -58,11 +62,18 @@ function revisionOf(part: PartSummary, revisionId: number | null): RevisionRef |
 
 function demandOwnRevision(part: PartSummary, revisionId: number | null): void {
   if (revisionId === null || revisionOf(part, revisionId)) return;
-  throw new FieldNotValid('revisionId', `is not a revision of ${part.name}`, 'Choose one of its revisions, or none.');
+  throw new FieldNotValid(
+    'revisionId',
+    `is not a revision of ${part.name}`,
+    'Choose one of its revisions, or none.',
+  );
 }
 
 function sameTwice(part: PartSummary): AlreadyThere {
-  return new AlreadyThere(`${part.name} stands on your bench in that revision.`, 'Change the entry that is there.');
+  return new AlreadyThere(
+    `${part.name} stands on your bench in that revision.`,
+    'Change the entry that is there.',
+  );
 }
 
 function notOnBench(): NotFound {

@@ -36,7 +36,11 @@ export function createBenchStore(knex: Knex) {
       });
     },
 
-    async setRevision(accountId: number, id: number, revisionId: number | null): Promise<number | 'already-there'> {
+    async setRevision(
+      accountId: number,
+      id: number,
+      revisionId: number | null,
+    ): Promise<number | 'already-there'> {
       return unlessThere(() =>
         knex('bench_items').where({ account_id: accountId, id }).update({ revision_id: revisionId }),
       );

@@ -1,5 +1,12 @@
 import { z } from 'zod';
-import type { MakerRef, PartPage, PartRef, PartSummary, RevisionRef, Symptom } from '../../shared/contract/hardware.js';
+import type {
+  MakerRef,
+  PartPage,
+  PartRef,
+  PartSummary,
+  RevisionRef,
+  Symptom,
+} from '../../shared/contract/hardware.js';
 import type { PartKind } from '../../shared/contract/vocabulary.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { NotFound } from '../http/problems.js';
@@ -33,7 +40,13 @@ export function createHardwareService(store: HardwareStore, pages: PartPageStore
     async listParts(query: PartQuery): Promise<{ items: PartSummary[]; next: string | null }> {
       const after = readCursor(PlaceInParts, query.cursor);
       const words = (query.q ?? '').split(/\s+/).filter((word) => word !== '');
-      const parts = await store.parts({ words, kind: query.kind, maker: query.maker, after, rows: query.limit + 1 });
+      const parts = await store.parts({
+        words,
+        kind: query.kind,
+        maker: query.maker,
+        after,
+        rows: query.limit + 1,
+      });
       const page = toPage(parts, query.limit, (part) => ({ name: part.name, id: part.id }));
       return { items: await summariesOf(page.items), next: page.next };
     },

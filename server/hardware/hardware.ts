@@ -8,7 +8,10 @@ import type { RouteBinding } from '../http/binding.js';
 export type { HardwareService };
 
 /** The catalogue of makers, parts and revisions, and the list of symptoms. */
-export function createHardware({ knex }: { knex: Knex }): { bindings: RouteBinding[]; service: HardwareService } {
+export function createHardware({ knex }: { knex: Knex }): {
+  bindings: RouteBinding[];
+  service: HardwareService;
+} {
   const service = createHardwareService(createHardwareStore(knex), createPartPageStore(knex));
   return { bindings: hardwareBindings(service), service };
 }

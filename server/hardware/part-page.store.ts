@@ -55,12 +55,17 @@ async function revisionsOf(knex: Knex, partId: number): Promise<Revision[]> {
 }
 
 async function featuresOf(knex: Knex, partId: number): Promise<Feature[]> {
-  return knex('features').select('id', 'slug', 'name', 'kind').where('part_id', partId).orderBy(['name', 'id']);
+  return knex('features')
+    .select('id', 'slug', 'name', 'kind')
+    .where('part_id', partId)
+    .orderBy(['name', 'id']);
 }
 
 /** Published write-ups with a joint on the part, the newest first, and for which of its revisions they hold. */
 async function writeUpsOn(knex: Knex, partId: number): Promise<PartPage['writeUps']> {
-  const rows: { slug: string; title: string; label: string | null; holds: number | null }[] = await knex('edition_sides as s')
+  const rows: { slug: string; title: string; label: string | null; holds: number | null }[] = await knex(
+    'edition_sides as s',
+  )
     .join('write_ups as w', 'w.published_edition_id', 's.edition_id')
     .join('editions as e', 'e.id', 's.edition_id')
     .leftJoin(

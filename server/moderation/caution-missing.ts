@@ -14,7 +14,9 @@ export class CautionMissing extends ProblemError {
 
 /** Hazards that a text names and no caution answers. */
 export function openHazards(content: EditionContent, cautions: readonly Caution[]): NamedHazard[] {
-  return answerHazards(findHazards(content), cautions).flatMap(({ answered, ...named }) => (answered ? [] : [named]));
+  return answerHazards(findHazards(content), cautions).flatMap(({ answered, ...named }) =>
+    answered ? [] : [named],
+  );
 }
 
 function fieldOf(content: EditionContent, { hazard, fixKey, fixTitle, words }: NamedHazard): FieldProblem {

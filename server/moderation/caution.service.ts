@@ -28,22 +28,46 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
       return placed.library();
     },
 
-    async placeCaution(moderatorId: number, { editionId, fixKey, libraryId, ...words }: PlaceCaution): Promise<Caution> {
+    async placeCaution(
+      moderatorId: number,
+      { editionId, fixKey, libraryId, ...words }: PlaceCaution,
+    ): Promise<Caution> {
       const edition = await writeUps.editionById(editionId);
       if (!edition || edition.state === 'draft' || edition.discardedAt !== null) throw noSuchEdition();
       const { writeUpId } = edition;
       if (fixKey !== null && !edition.content.fixes.some((fix) => fix.key === fixKey)) {
-        throw new FieldNotValid('fixKey', 'is not a fix of this edition', 'Choose one of its fixes, or the whole write-up.');
+        throw new FieldNotValid(
+          'fixKey',
+          'is not a fix of this edition',
+          'Choose one of its fixes, or the whole write-up.',
+        );
       }
       if (libraryId !== null && !(await placed.isInLibrary(libraryId))) {
-        throw new FieldNotValid('libraryId', 'is not in the library', 'Choose an entry of the library, or none.');
+        throw new FieldNotValid(
+          'libraryId',
+          'is not in the library',
+          'Choose an entry of the library, or none.',
+        );
       }
       const at = clock();
       const id = await knex.transaction(async (trx) => {
         await writeUps.holdWriteUp(trx, writeUpId);
         const fixId = fixKey === null ? null : await writeUps.fixIdOf(trx, writeUpId, fixKey);
-        const caution = await placed.place(trx, { writeUpId, fixId, libraryId, words, placedBy: moderatorId, at });
-        await desk.noteDecision(trx, { editionId, moderatorId, decision: 'caution-placed', reason: words.hazard, at });
+        const caution = await placed.place(trx, {
+          writeUpId,
+          fixId,
+          libraryId,
+          words,
+          placedBy: moderatorId,
+          at,
+        });
+        await desk.noteDecision(trx, {
+          editionId,
+          moderatorId,
+          decision: 'caution-placed',
+          reason: words.hazard,
+          at,
+        });
         return caution;
       });
       return { id, fixKey, ...words };
@@ -81,18 +105,31 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
       const standing = await writeUps.cautionsOf(writeUpId, trx);
       const caution = standing.find((each) => each.id === id);
       if (!caution) throw noSuchCaution();
-      return change(trx, writeUpId, caution, standing.filter((each) => each.id !== id));
+      return change(
+        trx,
+        writeUpId,
+        caution,
+        standing.filter((each) => each.id !== id),
+      );
     });
   }
 
   /** What the published edition already lacked before does not stand in the way of a change that makes it no worse. */
-  async function demandAnswered(trx: Knex, writeUpId: number, before: Caution[], after: Caution[]): Promise<void> {
+  async function demandAnswered(
+    trx: Knex,
+    writeUpId: number,
+    before: Caution[],
+    after: Caution[],
+  ): Promise<void> {
     const content = await writeUps.publishedContent(trx, writeUpId);
     if (!content) return;
     const openBefore = openHazards(content, before).map((open) => `${open.hazard} ${open.fixKey}`);
-    const opened = openHazards(content, after).filter((open) => !openBefore.includes(`${open.hazard} ${open.fixKey}`));
+    const opened = openHazards(content, after).filter(
+      (open) => !openBefore.includes(`${open.hazard} ${open.fixKey}`),
+    );
     if (opened.length === 0) return;
-    const remedy = 'Place another caution for these hazards first, or return an edition that no longer names them.';
+    const remedy =
+      'Place another caution for these hazards first, or return an edition that no longer names them.';
     throw new CautionMissing('The published edition needs this caution.', remedy, content, opened);
   }
 

@@ -34,7 +34,11 @@ export type DecisionService = ReturnType<typeof createDecisionService>;
 export function createDecisionService({ knex, clock, writeUps, desk, mail, searchOutbox }: DecisionParts) {
   return {
     /** NotComplete, CautionMissing or WrongState say what stands in the way; nothing is changed then. */
-    async publishEdition(moderatorId: number, editionId: number, note: string): Promise<{ slug: string; number: number }> {
+    async publishEdition(
+      moderatorId: number,
+      editionId: number,
+      note: string,
+    ): Promise<{ slug: string; number: number }> {
       const writeUpId = await writeUpOf(editionId);
       return knex.transaction(async (trx) => {
         const held = await writeUps.holdSubmitted(trx, writeUpId, editionId);
@@ -44,7 +48,12 @@ export function createDecisionService({ knex, clock, writeUps, desk, mail, searc
         const open = openHazards(content, await writeUps.cautionsOf(writeUpId, trx));
         if (open.length > 0) {
           const remedy = 'Place a caution for each hazard named, or return the edition.';
-          throw new CautionMissing('The edition names hazards that no caution answers.', remedy, content, open);
+          throw new CautionMissing(
+            'The edition names hazards that no caution answers.',
+            remedy,
+            content,
+            open,
+          );
         }
         const at = clock();
         const { slug, number } = await writeUps.publishHeld(trx, held, at);

@@ -15,11 +15,17 @@ export type DeskService = ReturnType<typeof createDeskService>;
 /** What moderators read. */
 export function createDeskService({ writeUps, desk }: { writeUps: WriteUpService; desk: DeskStore }) {
   return {
-    async readDesk(query: { cursor?: string | undefined; limit: number }): Promise<{ items: DeskLine[]; next: string | null }> {
+    async readDesk(query: {
+      cursor?: string | undefined;
+      limit: number;
+    }): Promise<{ items: DeskLine[]; next: string | null }> {
       const place = readCursor(PlaceInQueue, query.cursor);
       const after = place && { at: new Date(place.at), id: place.id };
       const rows = await desk.waiting({ after, rows: query.limit + 1 });
-      const page = toPage(rows, query.limit, (row) => ({ at: row.submittedAt.toISOString(), id: row.editionId }));
+      const page = toPage(rows, query.limit, (row) => ({
+        at: row.submittedAt.toISOString(),
+        id: row.editionId,
+      }));
       const cautions = await writeUps.cautionsOfMany([...new Set(page.items.map((row) => row.writeUpId))]);
       const cautionsOf = groupBy(cautions, (caution) => caution.writeUpId);
       const items = page.items.map((row) => ({
@@ -57,7 +63,8 @@ export function createDeskService({ writeUps, desk }: { writeUps: WriteUpService
         submittedAt: edition.submittedAt?.toISOString() ?? null,
         changeNote,
         view,
-        comparison: published && published.line.id !== id ? await writeUps.compare(published, { line, content }) : null,
+        comparison:
+          published && published.line.id !== id ? await writeUps.compare(published, { line, content }) : null,
         hazards: answerHazards(findHazards(content), cautions),
         cautions,
       };

@@ -22,7 +22,10 @@ export type DeskStore = ReturnType<typeof createDeskStore>;
 export function createDeskStore(knex: Knex) {
   return {
     /** Editions that wait, the longest wait first. */
-    async waiting(options: { after?: { at: Date; id: number } | undefined; rows: number }): Promise<WaitingRow[]> {
+    async waiting(options: {
+      after?: { at: Date; id: number } | undefined;
+      rows: number;
+    }): Promise<WaitingRow[]> {
       const query = knex('editions as e')
         .join('accounts as a', 'a.id', 'e.author_id')
         .where('e.state', 'submitted')
@@ -47,7 +50,9 @@ export function createDeskStore(knex: Knex) {
     },
 
     /** The edition that is published now, with its text. */
-    async publishedEdition(writeUpId: number): Promise<{ line: EditionLine; content: EditionContent } | undefined> {
+    async publishedEdition(
+      writeUpId: number,
+    ): Promise<{ line: EditionLine; content: EditionContent } | undefined> {
       const row = await knex('write_ups as w')
         .join('editions as e', 'e.id', 'w.published_edition_id')
         .join('accounts as a', 'a.id', 'e.author_id')
@@ -99,7 +104,12 @@ export function createDeskStore(knex: Knex) {
     async markReturned(trx: Knex, editionId: number, reason: string, at: Date): Promise<void> {
       await trx('editions')
         .where('id', editionId)
-        .update({ state: 'returned', return_reason: reason, updated_at: at, version: trx.raw('version + 1') });
+        .update({
+          state: 'returned',
+          return_reason: reason,
+          updated_at: at,
+          version: trx.raw('version + 1'),
+        });
     },
   };
 }

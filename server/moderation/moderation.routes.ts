@@ -13,7 +13,9 @@ export function moderationBindings(desk: DeskService & CautionService & Decision
     bind(routes.changeCaution, ({ caller, params, body }) =>
       desk.changeCaution(memberOf(caller).accountId, params.id, body),
     ),
-    bind(routes.removeCaution, ({ caller, params }) => desk.removeCaution(memberOf(caller).accountId, params.id)),
+    bind(routes.removeCaution, ({ caller, params }) =>
+      desk.removeCaution(memberOf(caller).accountId, params.id),
+    ),
     bind(routes.publishEdition, ({ caller, params, body }) =>
       desk.publishEdition(memberOf(caller).accountId, params.id, body.note),
     ),

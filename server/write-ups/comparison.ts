@@ -19,7 +19,11 @@ export function createEditionComparer(hardware: HardwareService, photos: PhotoLo
     /** `from` null: everything in `to` is new. */
     async compare(from: ComparedEdition | null, to: ComparedEdition): Promise<EditionComparison> {
       const names = await namesIn([...(from ? [from.content] : []), to.content]);
-      return { from: from?.line ?? null, to: to.line, ...editionDifference(from?.content ?? null, to.content, names) };
+      return {
+        from: from?.line ?? null,
+        to: to.line,
+        ...editionDifference(from?.content ?? null, to.content, names),
+      };
     },
   };
 

@@ -11,7 +11,14 @@ import { readCursor, toPage } from '../http/pages.js';
 import { NotAllowed, NotValid } from '../http/problems.js';
 import type { DraftStore, EditionRow, SavedText } from './draft.store.js';
 import { photoIdsOf } from './edition-links.js';
-import { EditionMovedOn, NoSuchDraft, NoSuchWriteUp, NotComplete, WrongState, wrongState } from './edition-problems.js';
+import {
+  EditionMovedOn,
+  NoSuchDraft,
+  NoSuchWriteUp,
+  NotComplete,
+  WrongState,
+  wrongState,
+} from './edition-problems.js';
 import type { EditionViews, PhotoLookup } from './edition-view.js';
 import { publicationStore } from './publication.store.js';
 import type { PublishedStore } from './published.store.js';
@@ -32,7 +39,15 @@ export interface DraftParts {
 export type DraftService = ReturnType<typeof createDraftService>;
 
 /** An author's way from the empty form to the desk. Drafts of others are not there, as far as a caller can tell. */
-export function createDraftService({ knex, clock, drafts, published, references, views, photos }: DraftParts) {
+export function createDraftService({
+  knex,
+  clock,
+  drafts,
+  published,
+  references,
+  views,
+  photos,
+}: DraftParts) {
   return {
     async startWriteUp(caller: MemberCaller, title: string): Promise<Draft> {
       const at = clock();
@@ -62,7 +77,13 @@ export function createDraftService({ knex, clock, drafts, published, references,
         const content = await published.publishedContent(trx, writeUp.id);
         if (!content) throw new NoSuchWriteUp();
         const number = await drafts.nextNumber(trx, writeUp.id);
-        return drafts.addDraft(trx, { writeUpId: writeUp.id, number, authorId: caller.accountId, content, at: clock() });
+        return drafts.addDraft(trx, {
+          writeUpId: writeUp.id,
+          number,
+          authorId: caller.accountId,
+          content,
+          at: clock(),
+        });
       });
       return readOwn(caller, id);
     },
@@ -79,9 +100,14 @@ export function createDraftService({ knex, clock, drafts, published, references,
       const edition = await ownEdition(caller, id);
       demandWorkable(edition);
       if (edition.version !== version) throw await movedOn(edition, text);
-      const broken = await references.findBroken(text.content, { accountId: caller.accountId, writeUpId: edition.writeUpId });
-      if (broken.length > 0) throw new NotValid(broken.map((field) => ({ ...field, path: `content.${field.path}` })));
-      if (!(await drafts.save(id, caller.accountId, version, text, clock()))) throw await whyNot(caller, id, text);
+      const broken = await references.findBroken(text.content, {
+        accountId: caller.accountId,
+        writeUpId: edition.writeUpId,
+      });
+      if (broken.length > 0)
+        throw new NotValid(broken.map((field) => ({ ...field, path: `content.${field.path}` })));
+      if (!(await drafts.save(id, caller.accountId, version, text, clock())))
+        throw await whyNot(caller, id, text);
       return readOwn(caller, id);
     },
 
@@ -105,7 +131,8 @@ export function createDraftService({ knex, clock, drafts, published, references,
 
     async discardDraft(caller: MemberCaller, id: number): Promise<void> {
       const edition = await ownEdition(caller, id);
-      if (!(await drafts.discard(id, caller.accountId, clock()))) throw wrongState(edition, 'a draft or a returned edition');
+      if (!(await drafts.discard(id, caller.accountId, clock())))
+        throw wrongState(edition, 'a draft or a returned edition');
     },
 
     /** WrongState where it was not thrown away, or where another edition of the same write-up is under way. */
@@ -116,7 +143,10 @@ export function createDraftService({ knex, clock, drafts, published, references,
         await publicationStore.lockWriteUp(trx, edition.writeUpId);
         const open = await drafts.openEditionOf(trx, edition.writeUpId, caller.accountId);
         if (open !== undefined && open !== id) {
-          throw new WrongState('Another edition of this write-up is under way.', 'Finish it or throw it away first.');
+          throw new WrongState(
+            'Another edition of this write-up is under way.',
+            'Finish it or throw it away first.',
+          );
         }
         if (!(await drafts.restore(trx, id, caller.accountId, clock()))) {
           throw new WrongState('It was not thrown away.', 'Go on with it as it is.');
@@ -171,7 +201,9 @@ export function createDraftService({ knex, clock, drafts, published, references,
 
   /** What an edition lacks before the desk can take it. */
   async function missingFrom(edition: EditionRow): Promise<FieldProblem[]> {
-    const missing = missingFromContent(edition.content).concat(await references.findStrayRevisions(edition.content));
+    const missing = missingFromContent(edition.content).concat(
+      await references.findStrayRevisions(edition.content),
+    );
     if (edition.slug !== null && edition.changeNote.trim().length < 5) {
       missing.push({
         path: 'changeNote',
@@ -189,7 +221,9 @@ export function createDraftService({ knex, clock, drafts, published, references,
   /** The compare-and-set found another row than the check before it: somebody was quicker. */
   async function whyNot(caller: MemberCaller, id: number, sent?: SavedText): Promise<Error> {
     const edition = await ownEdition(caller, id);
-    return isWorkable(edition) ? movedOn(edition, sent) : wrongState(edition, 'a draft or a returned edition');
+    return isWorkable(edition)
+      ? movedOn(edition, sent)
+      : wrongState(edition, 'a draft or a returned edition');
   }
 }
 
@@ -204,6 +238,8 @@ function demandWorkable(edition: EditionRow): void {
 /** Top-level fields in which what is there differs from what was sent. */
 function changedFields(current: SavedText, sent: SavedText): string[] {
   const fields = Object.keys(sent.content) as (keyof EditionContent)[];
-  const changed: string[] = fields.filter((field) => !isDeepStrictEqual(current.content[field], sent.content[field]));
+  const changed: string[] = fields.filter(
+    (field) => !isDeepStrictEqual(current.content[field], sent.content[field]),
+  );
   return current.changeNote === sent.changeNote ? changed : [...changed, 'changeNote'];
 }

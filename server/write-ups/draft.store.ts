@@ -142,7 +142,11 @@ export function createDraftStore(knex: Knex) {
     /** Editions of an author, the last touched first; those thrown away are left out. */
     async mine(
       authorId: number,
-      options: { state?: EditionState | undefined; after?: { at: Date; id: number } | undefined; rows: number },
+      options: {
+        state?: EditionState | undefined;
+        after?: { at: Date; id: number } | undefined;
+        rows: number;
+      },
     ): Promise<MyWriteUpRow[]> {
       const query = knex('editions as e')
         .join('write_ups as w', 'w.id', 'e.write_up_id')
@@ -179,6 +183,8 @@ function workable(db: Knex, id: number, authorId: number): Knex.QueryBuilder {
     .whereNull('discarded_at');
 }
 
-function toEdition(row: (Omit<EditionRow, 'content'> & { content: unknown }) | undefined): EditionRow | undefined {
+function toEdition(
+  row: (Omit<EditionRow, 'content'> & { content: unknown }) | undefined,
+): EditionRow | undefined {
   return row && { ...row, content: fromJson<EditionContent>(row.content) };
 }

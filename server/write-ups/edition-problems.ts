@@ -23,7 +23,10 @@ export class WrongState extends ProblemError {
 }
 
 /** The edition stands elsewhere on its way than the command needs; says where, and what to do from there. */
-export function wrongState(edition: { state: EditionState; discardedAt: Date | null }, needed: string): WrongState {
+export function wrongState(
+  edition: { state: EditionState; discardedAt: Date | null },
+  needed: string,
+): WrongState {
   if (edition.discardedAt !== null) {
     return new WrongState(`It was thrown away; only ${needed} can be used for this.`, 'Bring it back first.');
   }

@@ -1,7 +1,13 @@
 import type { EditionContent, Fix, JointSide } from '../../shared/contract/edition-content.js';
 import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type { Photo } from '../../shared/contract/photos.js';
-import type { Caution, EditionView, FixView, JointSideView, RichText } from '../../shared/contract/write-ups.js';
+import type {
+  Caution,
+  EditionView,
+  FixView,
+  JointSideView,
+  RichText,
+} from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { CautionStore } from './caution.store.js';
 import { partIdsOf, photoIdsOf } from './edition-links.js';
@@ -71,9 +77,18 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
       }
 
       function textOf(fix: Fix): Omit<FixView, 'cautions' | keyof ReturnType<typeof evidenceOf>> {
-        const { key, title, kind, permanence, tools, materials, afterwards, afterwardsNote, acceptance } = fix;
+        const { key, title, kind, permanence, tools, materials, afterwards, afterwardsNote, acceptance } =
+          fix;
         return {
-          key, title, kind, permanence, tools, materials, afterwards, afterwardsNote, acceptance,
+          key,
+          title,
+          kind,
+          permanence,
+          tools,
+          materials,
+          afterwards,
+          afterwardsNote,
+          acceptance,
           why: renderText(fix.why),
           steps: fix.steps.map((step) => ({
             key: step.key,

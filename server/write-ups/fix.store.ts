@@ -94,7 +94,8 @@ function toFix(row: FixRecord): FixRow {
     id: row.id,
     key: row.key,
     standing: row.standing,
-    madeRightFrom: row.revisionId === null ? null : { id: row.revisionId, partId: row.partId, label: row.label },
+    madeRightFrom:
+      row.revisionId === null ? null : { id: row.revisionId, partId: row.partId, label: row.label },
     trialCounts: {
       held: Number(row.held ?? 0),
       heldForAWhile: Number(row['held-for-a-while'] ?? 0),

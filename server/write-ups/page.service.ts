@@ -1,5 +1,11 @@
 import type { EditionContent } from '../../shared/contract/edition-content.js';
-import type { EditionComparison, EditionLine, EditionView, PersonRef, WriteUpPage } from '../../shared/contract/write-ups.js';
+import type {
+  EditionComparison,
+  EditionLine,
+  EditionView,
+  PersonRef,
+  WriteUpPage,
+} from '../../shared/contract/write-ups.js';
 import { isModerator, type Caller } from '../http/caller.js';
 import { NotFound } from '../http/problems.js';
 import type { EditionComparer } from './comparison.js';
@@ -97,7 +103,8 @@ function textIn(contents: ReadonlyMap<number, EditionContent>, editionId: number
 
 function editionNumbered(editions: readonly PublishedEditionRow[], number: number): PublishedEditionRow {
   const edition = editions.find((each) => each.number === number);
-  if (!edition) throw new NotFound(`There is no published edition ${number}.`, 'Choose one from the list of editions.');
+  if (!edition)
+    throw new NotFound(`There is no published edition ${number}.`, 'Choose one from the list of editions.');
   return edition;
 }
 

@@ -44,7 +44,11 @@ export function createPublicationService({ drafts, fixes, judgeStandings }: Publ
     },
 
     /** Makes a held edition the published one. A first edition gets the write-up its slug, from the title. */
-    async publishHeld(trx: Knex, { edition }: HeldEdition, at: Date): Promise<{ slug: string; number: number }> {
+    async publishHeld(
+      trx: Knex,
+      { edition }: HeldEdition,
+      at: Date,
+    ): Promise<{ slug: string; number: number }> {
       const { id, writeUpId, content } = edition;
       const slug = edition.slug ?? (await giveSlug(trx, writeUpId, content.title));
       const number = await publicationStore.giveNumber(trx, writeUpId, id);
@@ -55,9 +59,18 @@ export function createPublicationService({ drafts, fixes, judgeStandings }: Publ
     },
   };
 
-  async function writeLinks(trx: Knex, writeUpId: number, editionId: number, content: EditionContent): Promise<void> {
+  async function writeLinks(
+    trx: Knex,
+    writeUpId: number,
+    editionId: number,
+    content: EditionContent,
+  ): Promise<void> {
     const links = editionLinks(content);
-    const fixIds = await fixes.addMissing(trx, writeUpId, links.fixes.map((fix) => fix.key));
+    const fixIds = await fixes.addMissing(
+      trx,
+      writeUpId,
+      links.fixes.map((fix) => fix.key),
+    );
     await publicationStore.writeLinks(trx, editionId, links, fixIds);
   }
 

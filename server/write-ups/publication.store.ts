@@ -43,12 +43,15 @@ export const publicationStore = {
       .where('write_up_id', writeUpId)
       .select('id', 'number', 'state')
       .forUpdate();
-    const next = 1 + Math.max(0, ...editions.filter((row) => row.state === 'published').map((row) => row.number));
+    const next =
+      1 + Math.max(0, ...editions.filter((row) => row.state === 'published').map((row) => row.number));
     const holder = editions.find((row) => row.number === next);
     if (holder?.id === editionId) return next;
     if (holder) {
       const last = Math.max(...editions.map((row) => row.number));
-      await trx('editions').where('id', holder.id).update({ number: last + 1 });
+      await trx('editions')
+        .where('id', holder.id)
+        .update({ number: last + 1 });
     }
     await trx('editions').where('id', editionId).update({ number: next });
     return next;
@@ -66,10 +69,24 @@ export const publicationStore = {
       });
   },
 
-  async writeLinks(trx: Knex, editionId: number, links: EditionLinks, fixIds: ReadonlyMap<string, number>): Promise<void> {
+  async writeLinks(
+    trx: Knex,
+    editionId: number,
+    links: EditionLinks,
+    fixIds: ReadonlyMap<string, number>,
+  ): Promise<void> {
     const edition_id = editionId;
-    const sides = links.sides.map(({ joint, side, partId }) => ({ edition_id, joint, side, part_id: partId }));
-    const revisions = links.revisions.map(({ revisionId, holds }) => ({ edition_id, revision_id: revisionId, holds }));
+    const sides = links.sides.map(({ joint, side, partId }) => ({
+      edition_id,
+      joint,
+      side,
+      part_id: partId,
+    }));
+    const revisions = links.revisions.map(({ revisionId, holds }) => ({
+      edition_id,
+      revision_id: revisionId,
+      holds,
+    }));
     const photos = links.photoIds.map((photo_id) => ({ edition_id, photo_id }));
     const fixes = links.fixes.map(({ key, position }) => ({ edition_id, fix_id: fixIds.get(key), position }));
     const fixRevisions = links.fixes.flatMap(({ key, revisionIds }) =>
@@ -81,7 +98,9 @@ export const publicationStore = {
     await insertAll(trx, 'edition_fixes', fixes);
     await insertAll(trx, 'edition_fix_revisions', fixRevisions);
     if (links.symptomSlugs.length > 0) {
-      const symptoms = trx('symptoms').whereIn('slug', links.symptomSlugs).select(trx.raw('?', [editionId]), 'id');
+      const symptoms = trx('symptoms')
+        .whereIn('slug', links.symptomSlugs)
+        .select(trx.raw('?', [editionId]), 'id');
       await trx(trx.raw('?? (??, ??)', ['edition_symptoms', 'edition_id', 'symptom_id'])).insert(symptoms);
     }
   },

@@ -28,7 +28,10 @@ export function createPublishedStore(knex: Knex) {
       return knex('write_ups')
         .where('slug', slug)
         .whereNotNull('published_edition_id')
-        .first('id', 'slug', { publishedEditionId: 'published_edition_id', firstPublishedAt: 'first_published_at' });
+        .first('id', 'slug', {
+          publishedEditionId: 'published_edition_id',
+          firstPublishedAt: 'first_published_at',
+        });
     },
 
     /** Every published edition without its text, the newest first. */
@@ -63,7 +66,10 @@ export function createPublishedStore(knex: Knex) {
 
     /** Accounts that wrote one of the published editions. */
     async authorIds(db: Knex, writeUpId: number): Promise<number[]> {
-      return db('editions').where({ write_up_id: writeUpId, state: 'published' }).distinct().pluck('author_id');
+      return db('editions')
+        .where({ write_up_id: writeUpId, state: 'published' })
+        .distinct()
+        .pluck('author_id');
     },
   };
 }

@@ -12,7 +12,10 @@ export type ReferenceCheck = ReturnType<typeof createReferenceCheck>;
  */
 export function createReferenceCheck(hardware: HardwareService, rights: PhotoRightsStore) {
   return {
-    async findBroken(content: EditionContent, author: { accountId: number; writeUpId: number }): Promise<FieldProblem[]> {
+    async findBroken(
+      content: EditionContent,
+      author: { accountId: number; writeUpId: number },
+    ): Promise<FieldProblem[]> {
       const [parts, revisions, symptoms, photos] = await Promise.all([
         hardware.partsByIds(partIdsOf(content)),
         hardware.revisionsByIds(revisionIdsOf(content)),
@@ -31,7 +34,11 @@ export function createReferenceCheck(hardware: HardwareService, rights: PhotoRig
           side.partId !== null && revisions.get(revisionId)?.partId === side.partId;
         side.revisions.forEach((mark, index) => {
           if (!belongs(mark)) {
-            refuse(`${path}.revisions.${index}`, 'is not a revision of this part', 'Mark revisions of the chosen part only.');
+            refuse(
+              `${path}.revisions.${index}`,
+              'is not a revision of this part',
+              'Mark revisions of the chosen part only.',
+            );
           }
         });
         for (const index of repeated(side.revisions.map((mark) => mark.revisionId))) {
@@ -59,9 +66,12 @@ export function createReferenceCheck(hardware: HardwareService, rights: PhotoRig
         checkSide(joint.b, `joints.${index}.b`);
       });
       content.symptoms.forEach((slug, index) => {
-        if (!symptoms.has(slug)) refuse(`symptoms.${index}`, 'is not on the list of symptoms', 'Pick it from the list.');
+        if (!symptoms.has(slug))
+          refuse(`symptoms.${index}`, 'is not on the list of symptoms', 'Pick it from the list.');
       });
-      content.readings.forEach((reading, index) => checkRevision(reading.revisionId, `readings.${index}.revisionId`));
+      content.readings.forEach((reading, index) =>
+        checkRevision(reading.revisionId, `readings.${index}.revisionId`),
+      );
       content.fixes.forEach((fix, index) => {
         fix.revisionIds.forEach((id, at) => checkRevision(id, `fixes.${index}.revisionIds.${at}`));
         fix.steps.forEach((step, at) => checkPhoto(step.photoId, `fixes.${index}.steps.${at}.photoId`));
@@ -88,7 +98,9 @@ export function createReferenceCheck(hardware: HardwareService, rights: PhotoRig
           stray(reading.revisionId) ? [problem(`readings.${index}.revisionId`)] : [],
         ),
         ...content.fixes.flatMap((fix, index) =>
-          fix.revisionIds.flatMap((id, at) => (stray(id) ? [problem(`fixes.${index}.revisionIds.${at}`)] : [])),
+          fix.revisionIds.flatMap((id, at) =>
+            stray(id) ? [problem(`fixes.${index}.revisionIds.${at}`)] : [],
+          ),
         ),
       ];
     },

@@ -1,5 +1,17 @@
 const longest = 100;
 
+/** Letters that are no base letter with an accent. */
+const spelled: Record<string, string> = {
+  ß: 'ss',
+  æ: 'ae',
+  œ: 'oe',
+  ø: 'o',
+  ł: 'l',
+  đ: 'd',
+  þ: 'th',
+  ð: 'd',
+};
+
 /**
  * Words of a title as they stand in an address: lower-case Latin letters without accents, digits and hyphens, at most 100
  * characters, cut between words. A title without any of these gives `write-up`.
@@ -9,6 +21,7 @@ export function slugFrom(title: string): string {
     .normalize('NFKD')
     .replace(/\p{M}/gu, '')
     .toLowerCase()
+    .replace(/[ßæœøłđþð]/g, (letter) => spelled[letter] ?? '')
     .split(/[^a-z0-9]+/)
     .filter((word) => word !== '');
   let slug = '';

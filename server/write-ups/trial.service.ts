@@ -41,7 +41,15 @@ export interface TrialParts {
 
 export type TrialService = ReturnType<typeof createTrialService>;
 
-export function createTrialService({ knex, clock, hardware, published, fixes, trials, searchOutbox }: TrialParts) {
+export function createTrialService({
+  knex,
+  clock,
+  hardware,
+  published,
+  fixes,
+  trials,
+  searchOutbox,
+}: TrialParts) {
   return {
     /** NotValid where fix, revisions or figure do not belong to the published edition. */
     async reportTrial(caller: MemberCaller, slug: string, report: TrialReport): Promise<Trial> {
@@ -81,7 +89,10 @@ export function createTrialService({ knex, clock, hardware, published, fixes, tr
     for (const { key, acceptance } of content.fixes) {
       const fix = known.get(key);
       if (!fix) continue;
-      const reported = (evidence.get(fix.id) ?? []).map((trial) => ({ ...trial, byAuthor: authors.has(trial.accountId) }));
+      const reported = (evidence.get(fix.id) ?? []).map((trial) => ({
+        ...trial,
+        byAuthor: authors.has(trial.accountId),
+      }));
       const standing = standingOf(reported, acceptance, fix.madeRightFrom !== null);
       if (standing !== fix.standing) changed.set(fix.id, standing);
     }
@@ -105,11 +116,21 @@ function problemsOf(
     const revision = revisions.get(id);
     return revision && parts.has(revision.partId)
       ? []
-      : [{ path: `revisionIds.${index}`, message: 'is not a revision of one of the parts', remedy: 'Choose from the parts of the joint.' }];
+      : [
+          {
+            path: `revisionIds.${index}`,
+            message: 'is not a revision of one of the parts',
+            remedy: 'Choose from the parts of the joint.',
+          },
+        ];
   });
   if (report.figure === null || fix.acceptance) return stray;
   return [
     ...stray,
-    { path: 'figure', message: 'has nothing to be held against: the fix names no acceptance figure', remedy: 'Leave it out and tell it in the note.' },
+    {
+      path: 'figure',
+      message: 'has nothing to be held against: the fix names no acceptance figure',
+      remedy: 'Leave it out and tell it in the note.',
+    },
   ];
 }

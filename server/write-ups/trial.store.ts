@@ -23,7 +23,10 @@ export function createTrialStore(knex: Knex) {
         .join('fixes as f', 'f.id', 't.fix_id')
         .join('accounts as a', 'a.id', 't.account_id')
         .where('f.write_up_id', writeUpId)
-        .orderBy([{ column: 't.created_at', order: 'desc' }, { column: 't.id', order: 'desc' }])
+        .orderBy([
+          { column: 't.created_at', order: 'desc' },
+          { column: 't.id', order: 'desc' },
+        ])
         .select('t.id', 't.outcome', 't.note', 't.figure', {
           fixKey: 'f.fix_key',
           personId: 'a.id',
@@ -60,14 +63,23 @@ export function createTrialStore(knex: Knex) {
     async putTrial(trx: Knex, trial: NewTrial): Promise<number> {
       const { outcome, note, figure } = trial;
       await trx('trials')
-        .insert({ fix_id: trial.fixId, account_id: trial.accountId, outcome, note, figure, created_at: trial.createdAt })
+        .insert({
+          fix_id: trial.fixId,
+          account_id: trial.accountId,
+          outcome,
+          note,
+          figure,
+          created_at: trial.createdAt,
+        })
         .onConflict(['fix_id', 'account_id'])
         .merge();
       const row = await trx('trials').where({ fix_id: trial.fixId, account_id: trial.accountId }).first('id');
       const trial_id: number = row.id;
       await trx('trial_revisions').where({ trial_id }).delete();
       if (trial.revisionIds.length > 0) {
-        await trx('trial_revisions').insert(trial.revisionIds.map((revision_id) => ({ trial_id, revision_id })));
+        await trx('trial_revisions').insert(
+          trial.revisionIds.map((revision_id) => ({ trial_id, revision_id })),
+        );
       }
       return trial_id;
     },

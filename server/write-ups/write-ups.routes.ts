@@ -36,7 +36,9 @@ export function writeUpBindings(writeUps: WriteUpService): RouteBinding[] {
     bind(routes.recallDraft, async ({ caller, params, response }) =>
       tagged(response, await writeUps.recallDraft(memberOf(caller), params.id)),
     ),
-    bind(routes.reportTrial, ({ caller, params, body }) => writeUps.reportTrial(memberOf(caller), params.slug, body)),
+    bind(routes.reportTrial, ({ caller, params, body }) =>
+      writeUps.reportTrial(memberOf(caller), params.slug, body),
+    ),
   ];
 }
 

@@ -29,7 +29,10 @@ export interface WriteUpSurroundings {
 export type WriteUpService = ReturnType<typeof createWriteUpService>;
 
 /** Write-ups with their drafts, editions and trials. */
-export function createWriteUps(around: WriteUpSurroundings): { bindings: RouteBinding[]; service: WriteUpService } {
+export function createWriteUps(around: WriteUpSurroundings): {
+  bindings: RouteBinding[];
+  service: WriteUpService;
+} {
   const service = createWriteUpService(around);
   return { bindings: writeUpBindings(service), service };
 }

@@ -24,7 +24,12 @@ const rules = hazardRules.map((rule) => ({
  * and title, why, tools, materials, steps and notes of each fix; sources are not. O(text × rules).
  */
 export function findHazards(content: EditionContent): NamedHazard[] {
-  const own = find(ownPieces(content)).map(([hazard, words]) => ({ hazard, fixKey: null, fixTitle: null, words }));
+  const own = find(ownPieces(content)).map(([hazard, words]) => ({
+    hazard,
+    fixKey: null,
+    fixTitle: null,
+    words,
+  }));
   const ofFixes = content.fixes.flatMap((fix) =>
     find(fixPieces(fix)).map(([hazard, words]) => ({ hazard, fixKey: fix.key, fixTitle: fix.title, words })),
   );
@@ -43,7 +48,8 @@ export function answerHazards(
     ...named,
     answered: cautions.some(
       (caution) =>
-        caution.hazards.includes(named.hazard) && (caution.fixKey === null || caution.fixKey === named.fixKey),
+        caution.hazards.includes(named.hazard) &&
+        (caution.fixKey === null || caution.fixKey === named.fixKey),
     ),
   }));
 }

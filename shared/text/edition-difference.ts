@@ -14,7 +14,11 @@ export interface EditionDifference {
  * What changed from one edition to another, thing by thing and word by word. Fixes, steps and readings are known by their
  * keys and photos by their identity, so that one which only moved is told as moved. `from` null: all of `to` is new.
  */
-export function editionDifference(from: EditionContent | null, to: EditionContent, names: ContentNames): EditionDifference {
+export function editionDifference(
+  from: EditionContent | null,
+  to: EditionContent,
+  names: ContentNames,
+): EditionDifference {
   const before = new Map((from ? fieldsOf(from, names) : []).map((field) => [field.field, field]));
   const after = new Map(fieldsOf(to, names).map((field) => [field.field, field]));
   const changed: FieldDifference[] = [];
@@ -29,14 +33,20 @@ export function editionDifference(from: EditionContent | null, to: EditionConten
 }
 
 /** The later edition's fields, with those that are gone put in behind the field they followed. */
-function inPageOrder(before: readonly EditionField[], after: ReadonlyMap<string, EditionField>): EditionField[] {
+function inPageOrder(
+  before: readonly EditionField[],
+  after: ReadonlyMap<string, EditionField>,
+): EditionField[] {
   const gone = new Map<string, EditionField[]>();
   let previous = '';
   for (const field of before) {
     if (after.has(field.field)) previous = field.field;
     else gone.set(previous, [...(gone.get(previous) ?? []), field]);
   }
-  return [...(gone.get('') ?? []), ...[...after.values()].flatMap((field) => [field, ...(gone.get(field.field) ?? [])])];
+  return [
+    ...(gone.get('') ?? []),
+    ...[...after.values()].flatMap((field) => [field, ...(gone.get(field.field) ?? [])]),
+  ];
 }
 
 interface Item {
@@ -46,13 +56,20 @@ interface Item {
 
 function moves(from: EditionContent, to: EditionContent, names: ContentNames): FieldDifference[] {
   const stepsOf = (content: EditionContent, fixKey: string): Item[] =>
-    content.fixes.find((fix) => fix.key === fixKey)?.steps.map((step) => ({ key: step.key, name: firstWords(step.text) })) ?? [];
+    content.fixes
+      .find((fix) => fix.key === fixKey)
+      ?.steps.map((step) => ({ key: step.key, name: firstWords(step.text) })) ?? [];
   return [
     ...moved('symptoms.order', 'Order of the symptoms', symptomItems(from, names), symptomItems(to, names)),
     ...moved('readings.order', 'Order of the readings', readingItems(from), readingItems(to)),
     ...moved('fixes.order', 'Order of the fixes', fixItems(from), fixItems(to)),
     ...to.fixes.flatMap((fix) =>
-      moved(`fixes.${fix.key}.steps.order`, `Fix “${fix.title}”, order of the steps`, stepsOf(from, fix.key), stepsOf(to, fix.key)),
+      moved(
+        `fixes.${fix.key}.steps.order`,
+        `Fix “${fix.title}”, order of the steps`,
+        stepsOf(from, fix.key),
+        stepsOf(to, fix.key),
+      ),
     ),
     ...moved('photos.order', 'Order of the photos', photoItems(from), photoItems(to)),
   ];
@@ -62,12 +79,18 @@ const symptomItems = (content: EditionContent, names: ContentNames): Item[] =>
   content.symptoms.map((slug) => ({ key: slug, name: names.symptom(slug) }));
 const readingItems = (content: EditionContent): Item[] =>
   content.readings.map(({ key, dimension }) => ({ key, name: dimension }));
-const fixItems = (content: EditionContent): Item[] => content.fixes.map(({ key, title }) => ({ key, name: title }));
+const fixItems = (content: EditionContent): Item[] =>
+  content.fixes.map(({ key, title }) => ({ key, name: title }));
 const photoItems = (content: EditionContent): Item[] =>
   content.photos.map(({ photoId, alt }) => ({ key: String(photoId), name: alt }));
 
 /** Told only where things that both editions have stand in another order; what is new or gone moves nothing. */
-function moved(field: string, label: string, before: readonly Item[], after: readonly Item[]): FieldDifference[] {
+function moved(
+  field: string,
+  label: string,
+  before: readonly Item[],
+  after: readonly Item[],
+): FieldDifference[] {
   const shared = (items: readonly Item[], others: readonly Item[]): Item[] =>
     items.filter((item) => others.some((other) => other.key === item.key));
   const earlier = shared(before, after);

@@ -32,9 +32,17 @@ export function fieldsOf(content: EditionContent, names: ContentNames): EditionF
     { field: 'summary', label: 'Summary', text: content.summary },
     ...content.joints.flatMap((joint, index) => [
       { field: `joints.${index}.a`, label: `Joint ${index + 1}, first side`, text: sideText(joint.a, names) },
-      { field: `joints.${index}.b`, label: `Joint ${index + 1}, second side`, text: sideText(joint.b, names) },
+      {
+        field: `joints.${index}.b`,
+        label: `Joint ${index + 1}, second side`,
+        text: sideText(joint.b, names),
+      },
     ]),
-    { field: 'symptoms', label: 'Symptoms', text: content.symptoms.map((slug) => names.symptom(slug)).join('\n') },
+    {
+      field: 'symptoms',
+      label: 'Symptoms',
+      text: content.symptoms.map((slug) => names.symptom(slug)).join('\n'),
+    },
     { field: 'noticed', label: 'What is noticed', text: content.noticed },
     { field: 'cause', label: 'Cause', text: content.cause },
     ...content.readings.map((reading) => ({
@@ -70,7 +78,11 @@ function fixFields(fix: Fix, names: ContentNames): EditionField[] {
       ),
     ),
     of('revisions', 'revisions', fix.revisionIds.map((id) => names.revision(id)).join('\n')),
-    of('afterwards', 'afterwards', [...afterwards, fix.afterwardsNote].filter((line) => line !== '').join('\n')),
+    of(
+      'afterwards',
+      'afterwards',
+      [...afterwards, fix.afterwardsNote].filter((line) => line !== '').join('\n'),
+    ),
     of('acceptance', 'acceptance figure', fix.acceptance ? acceptanceText(fix.acceptance) : ''),
   ];
 }
@@ -100,7 +112,8 @@ function sideText(side: JointSide, names: ContentNames): string {
 
 function readingText(reading: Reading, names: ContentNames): string {
   const value = reading.value === null ? 'no value' : withUnit(reading.value, reading.unit);
-  const uncertainty = reading.uncertainty === null ? '' : `, uncertainty ${withUnit(reading.uncertainty, reading.unit)}`;
+  const uncertainty =
+    reading.uncertainty === null ? '' : `, uncertainty ${withUnit(reading.uncertainty, reading.unit)}`;
   const revision = reading.revisionId === null ? '' : `, ${names.revision(reading.revisionId)}`;
   return `${reading.dimension}: ${value}${uncertainty}, ${instrumentWords[reading.instrument]}${revision}`;
 }
