@@ -1,0 +1,51 @@
+import { Injectable, inject } from '@angular/core';
+import { map, type Observable } from 'rxjs';
+import type { z } from 'zod';
+import {
+  deskRoutes,
+  type DeskEdition,
+  type LibraryCaution,
+  type PlaceCaution,
+} from '../../../shared/contract/moderation';
+import type { Caution } from '../../../shared/contract/write-ups';
+import { Api } from '../core/api';
+
+export type CautionWords = z.input<typeof deskRoutes.changeCaution.body>;
+
+/** What moderators read and do. */
+@Injectable({ providedIn: 'root' })
+export class Desk {
+  private readonly api = inject(Api);
+
+  queue(cursor?: string) {
+    return this.api.call(deskRoutes.readDesk, { query: { cursor } });
+  }
+
+  edition(id: number): Observable<DeskEdition> {
+    return this.api.call(deskRoutes.readDeskEdition, { params: { id } });
+  }
+
+  library(): Observable<LibraryCaution[]> {
+    return this.api.call(deskRoutes.listLibraryCautions).pipe(map((list) => list.items));
+  }
+
+  place(body: PlaceCaution): Observable<Caution> {
+    return this.api.call(deskRoutes.placeCaution, { body });
+  }
+
+  reword(id: number, body: CautionWords): Observable<Caution> {
+    return this.api.call(deskRoutes.changeCaution, { params: { id }, body });
+  }
+
+  remove(id: number): Observable<unknown> {
+    return this.api.call(deskRoutes.removeCaution, { params: { id } });
+  }
+
+  publish(id: number, note: string): Observable<{ slug: string; number: number }> {
+    return this.api.call(deskRoutes.publishEdition, { params: { id }, body: { note } });
+  }
+
+  giveBack(id: number, reason: string): Observable<unknown> {
+    return this.api.call(deskRoutes.returnEdition, { params: { id }, body: { reason } });
+  }
+}

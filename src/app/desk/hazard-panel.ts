@@ -1,0 +1,70 @@
+import { ChangeDetectionStrategy, Component, computed, inject, input, output, signal } from '@angular/core';
+import { tap, type Observable } from 'rxjs';
+import type { DeskEdition, FoundHazard, LibraryCaution } from '../../../shared/contract/moderation';
+import { hazardKindWords } from '../../../shared/contract/vocabulary';
+import type { Caution } from '../../../shared/contract/write-ups';
+import { Icon } from '../ui/icon/icon';
+import { CautionForm } from './caution-form';
+import { Desk, type CautionWords } from './desk';
+
+interface Opened {
+  hazard: FoundHazard;
+  libraryId: number | null;
+  words: CautionWords;
+}
+
+/** The hazards that were found in the texts, the words that name them, and the cautions of the library that answer each. */
+@Component({
+  selector: 'sl-hazard-panel',
+  imports: [CautionForm, Icon],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './hazard-panel.html',
+  styleUrl: './hazard-panel.scss',
+})
+export class HazardPanel {
+  readonly edition = input.required<DeskEdition>();
+  readonly library = input.required<readonly LibraryCaution[]>();
+  readonly placed = output<Caution>();
+  private readonly desk = inject(Desk);
+  protected readonly kinds = hazardKindWords;
+  protected readonly opened = signal<Opened | null>(null);
+
+  protected readonly found = computed(() =>
+    this.edition().hazards.map((hazard) => ({
+      hazard,
+      id: `hazard-${hazard.hazard}-${hazard.fixKey ?? 'write-up'}`,
+      fitting: this.library().filter((entry) => entry.hazards.includes(hazard.hazard)),
+    })),
+  );
+  protected readonly send = (words: CautionWords): Observable<Caution> => {
+    const { hazard, libraryId } = this.opened()!;
+    return this.desk
+      .place({ editionId: this.edition().editionId, fixKey: hazard.fixKey, libraryId, ...words })
+      .pipe(tap(() => this.opened.set(null)));
+  };
+
+  protected isOpened(hazard: FoundHazard): boolean {
+    const opened = this.opened()?.hazard;
+    return opened?.hazard === hazard.hazard && opened.fixKey === hazard.fixKey;
+  }
+
+  protected take(hazard: FoundHazard, entry: LibraryCaution): void {
+    const { id, signalWord, hazards, hazard: named, consequence, avoidance } = entry;
+    this.opened.set({
+      hazard,
+      libraryId: id,
+      words: { signalWord, hazards, hazard: named, consequence, avoidance },
+    });
+  }
+
+  protected wordOwn(hazard: FoundHazard): void {
+    const words: CautionWords = {
+      signalWord: 'caution',
+      hazards: [hazard.hazard],
+      hazard: '',
+      consequence: '',
+      avoidance: '',
+    };
+    this.opened.set({ hazard, libraryId: null, words });
+  }
+}
