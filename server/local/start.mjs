@@ -6,4 +6,4 @@ if (major < 20 || (major === 20 && minor < 19)) {
   process.exit(1);
 }
 const { launch } = await import('./start/launch.mjs');
-process.exitCode = await launch(process.env);
+process.exitCode = await launch(process.env, { compiled: true });

@@ -18,7 +18,15 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
   child.stderr.pipe(log, { end: false });
   let over = false;
   // Its own process group keeps it from Ctrl-C, so it would outlive a launcher that exits in a hurry.
-  const endAlong = () => child.kill('SIGTERM');
+  const send = (signal) => {
+    try {
+      // The whole group: a watcher has a child of its own.
+      if (child.pid !== undefined) process.kill(-child.pid, signal);
+    } catch (error) {
+      if (error.code !== 'ESRCH') throw error;
+    }
+  };
+  const endAlong = () => send('SIGTERM');
   process.once('exit', endAlong);
   const exited = new Promise((resolve) => {
     const end = (how) => {
@@ -40,8 +48,8 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
     /** Asks it to end; after `patience` milliseconds it is ended without asking. */
     async stop(patience = 15_000) {
       if (over) return;
-      child.kill('SIGTERM');
-      const hurry = setTimeout(() => child.kill('SIGKILL'), patience);
+      send('SIGTERM');
+      const hurry = setTimeout(() => send('SIGKILL'), patience);
       await exited;
       clearTimeout(hurry);
     },

@@ -9,20 +9,23 @@ import { readLaunchSettings } from './settings.mjs';
 import { startStack } from './stack.mjs';
 
 /**
- * `npm start`: from a fresh checkout to a running app, and down again on Ctrl-C or SIGTERM. Returns the exit code.
+ * From a fresh checkout to a running app, and down again on Ctrl-C or SIGTERM. Returns the exit code.
+ *
+ * @param {NodeJS.ProcessEnv} environment
+ * @param {{ compiled: boolean }} how `npm start` builds and runs what was built; `npm run dev` runs the TypeScript
  */
-export async function launch(environment) {
+export async function launch(environment, { compiled }) {
   const say = (text) => console.log(text);
   const wish = new AbortController();
   for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP']) process.on(signal, () => wish.abort());
   let claim;
   let stack;
   try {
-    const settings = readLaunchSettings(environment);
+    const settings = readLaunchSettings(environment, { compiled });
     claim = await claimDataFolder(settings.dataDir, settings.publicAddress, say);
-    await prepare(settings, say, wish.signal);
-    stack = await startStack({ settings, say, signal: wish.signal, onChild: claim.noteChild });
-    await greet(settings, stack, say);
+    await prepare({ settings, compiled, say, signal: wish.signal });
+    stack = await startStack({ settings, compiled, say, signal: wish.signal, onChild: claim.noteChild });
+    await greet({ settings, stack, compiled, say });
     const end = await Promise.race([stack.broken, wished(wish.signal)]);
     if (end === undefined) return 0;
     console.error(`${end}\nStopping the rest.`);
@@ -41,7 +44,7 @@ export async function launch(environment) {
   }
 }
 
-async function prepare(settings, say, signal) {
+async function prepare({ settings, compiled, say, signal }) {
   const logDir = join(settings.dataDir, 'logs');
   if (!settings.environment.DATABASE_URL) {
     const packages = {
@@ -51,21 +54,27 @@ async function prepare(settings, say, signal) {
     await ensurePackages({ packages, logFile: join(logDir, 'packages.log'), say, signal });
   }
   await ensureDependencies({ projectDir, logFile: join(logDir, 'npm.log'), say, signal });
-  await ensureBuilt({ projectDir, logDir, say, signal });
+  if (compiled) await ensureBuilt({ projectDir, logDir, say, signal });
 }
 
-async function greet(settings, stack, say) {
+async function greet({ settings, stack, compiled, say }) {
   say(`\nShimlore runs at ${stack.address}`);
   if (stack.mailboxUrl) say(`Mail that it sends is shown at ${stack.mailboxUrl}`);
   if (!settings.production) {
-    const { demoAccounts } = await import(
-      pathToFileURL(join(projectDir, 'dist/api/seeds/demo/accounts.js')).href
-    );
+    const demoAccounts = await readDemoAccounts(compiled);
     say('Accounts of the demo:');
     for (const { role, email, password } of demoAccounts)
       say(`  ${role.padEnd(14)} ${email.padEnd(34)} ${password}`);
   }
   say('Ctrl-C stops everything.\n');
+}
+
+async function readDemoAccounts(compiled) {
+  if (compiled)
+    return (await import(pathToFileURL(join(projectDir, 'dist/api/seeds/demo/accounts.js')).href))
+      .demoAccounts;
+  const { tsImport } = await import('tsx/esm/api');
+  return (await tsImport(join(projectDir, 'seeds/demo/accounts.ts'), import.meta.url)).demoAccounts;
 }
 
 /** Resolves, with undefined, when the wish to stop comes. */

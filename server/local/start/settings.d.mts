@@ -1,2 +1,5 @@
 import type { LaunchSettings } from './stack.mjs';
-export function readLaunchSettings(environment: Record<string, string | undefined>): LaunchSettings;
+export function readLaunchSettings(
+  environment: Record<string, string | undefined>,
+  options?: { compiled?: boolean },
+): LaunchSettings;

@@ -3,11 +3,13 @@ import { projectDir } from './services.mjs';
 
 /**
  * Where everything listens and keeps its data, from the environment. What is set to run elsewhere (DATABASE_URL,
- * MEILI_HOST, SMTP_URL) is not started here.
+ * MEILI_HOST, SMTP_URL) is not started here. Where the app is not compiled, the dev server has the address of its own
+ * that people use.
  */
-export function readLaunchSettings(environment) {
+export function readLaunchSettings(environment, { compiled = true } = {}) {
   const production = environment.NODE_ENV === 'production';
   const port = portOf(environment, 'PORT', 4310);
+  const pages = portOf(environment, 'SHIMLORE_PAGES_PORT', 4200);
   return {
     production,
     dataDir: resolve(projectDir, environment.SHIMLORE_DATA || 'data'),
@@ -17,8 +19,9 @@ export function readLaunchSettings(environment) {
       search: portOf(environment, 'SHIMLORE_SEARCH_PORT', 4312),
       smtp: portOf(environment, 'SHIMLORE_SMTP_PORT', 4313),
       mailbox: portOf(environment, 'SHIMLORE_MAILBOX_PORT', 4314),
+      pages,
     },
-    publicAddress: environment.PUBLIC_ADDRESS || `http://localhost:${port}`,
+    publicAddress: environment.PUBLIC_ADDRESS || `http://localhost:${compiled ? port : pages}`,
     environment,
   };
 }

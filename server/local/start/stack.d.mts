@@ -1,7 +1,7 @@
 export interface LaunchSettings {
   readonly production: boolean;
   readonly dataDir: string;
-  readonly ports: Record<'app' | 'database' | 'search' | 'smtp' | 'mailbox', number>;
+  readonly ports: Record<'app' | 'database' | 'search' | 'smtp' | 'mailbox' | 'pages', number>;
   readonly publicAddress: string;
   readonly environment: Record<string, string | undefined>;
 }
@@ -15,6 +15,7 @@ export interface RunningStack {
 }
 export function startStack(options: {
   settings: LaunchSettings;
+  compiled?: boolean;
   say(text: string): void;
   onChild?(child: { name: string; pid: number }): void;
   signal?: AbortSignal;

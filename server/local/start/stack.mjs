@@ -9,24 +9,28 @@ import { readSecrets } from './secrets.mjs';
 import { answers, programArguments, projectDir, startMailbox, startSearch } from './services.mjs';
 
 /**
- * Starts the built app and all it leans on: database, search and mailbox (unless the environment names others), schema,
- * demo where the database is empty, search index, app. When any of it fails, what has been started is stopped again.
+ * Starts the app and all it leans on: database, search and mailbox (unless the environment names others), schema, demo
+ * where the database is empty, search index, app. When any of it fails, what has been started is stopped again.
  *
  * @param {object} options
  * @param {ReturnType<import('./settings.mjs').readLaunchSettings>} options.settings
+ * @param {boolean} [options.compiled] runs what was built; otherwise the TypeScript, started anew on every change
  * @param {(text: string) => void} options.say
  * @param {(child: { name: string; pid: number }) => void} [options.onChild]
  * @param {AbortSignal} [options.signal] breaks the start off
  */
-export async function startStack({ settings, say, onChild = () => undefined, signal }) {
+export async function startStack({ settings, compiled = true, say, onChild = () => undefined, signal }) {
   const crew = createCrew(onChild);
   const breakOff = () => crew.stop();
   signal?.addEventListener('abort', breakOff);
   try {
     await demandFreePort(settings.ports.app, 'the app', 'PORT');
-    const environment = await startSurroundings({ settings, crew, say, signal });
-    await prepareData({ settings, environment, say, signal });
-    await startApp({ settings, environment, crew, say, signal });
+    if (!compiled) await demandFreePort(settings.ports.pages, 'the dev server', 'SHIMLORE_PAGES_PORT');
+    const step = { settings, crew, compiled, say, signal };
+    const environment = await startSurroundings(step);
+    await prepareData({ ...step, environment });
+    await startApp({ ...step, environment });
+    if (!compiled) await startDevServer({ ...step, environment });
     return {
       address: settings.publicAddress,
       mailboxUrl: environment.MAILBOX_URL,
@@ -43,11 +47,11 @@ export async function startStack({ settings, say, onChild = () => undefined, sig
 }
 
 /** Starts what the environment does not name, and returns the environment that the app is to have. */
-async function startSurroundings({ settings, crew, say, signal }) {
+async function startSurroundings({ settings, crew, compiled, say, signal }) {
   const { dataDir, ports } = settings;
   const secrets = readSecrets(dataDir);
   const environment = appEnvironment(settings, secrets);
-  const common = { dataDir, compiled: true, onStart: crew.add };
+  const common = { dataDir, compiled, onStart: crew.add };
   mkdirSync(environment.PHOTO_DIR, { recursive: true });
   if (!environment.DATABASE_URL) {
     signal?.throwIfAborted();
@@ -81,12 +85,12 @@ function appEnvironment(settings, secrets) {
   };
 }
 
-async function prepareData({ settings, environment, say, signal }) {
+async function prepareData({ settings, environment, compiled, say, signal }) {
   const run = (name, file, ...args) =>
     runToEnd({
       name,
       command: process.execPath,
-      args: [...programArguments(file, true), ...args],
+      args: [...programArguments(file, compiled), ...args],
       env: environment,
       cwd: projectDir,
       logFile: join(settings.dataDir, 'logs/preparation.log'),
@@ -99,21 +103,51 @@ async function prepareData({ settings, environment, say, signal }) {
     await run('Making the demo', 'server/local/seed', '--if-empty');
   }
   say('Looking after the search index …');
-  await run('Making the search index', 'server/local/rebuild-search', '--if-empty');
+  await run('Making the search index', 'server/local/rebuild-search', '--if-needed');
 }
 
-async function startApp({ settings, environment, crew, say, signal }) {
+async function startApp({ settings, environment, crew, compiled, say, signal }) {
   signal?.throwIfAborted();
   say('Starting the app …');
   const app = startChild({
     name: 'app',
     command: process.execPath,
-    args: programArguments('server/main', true),
+    args: [
+      ...(compiled ? [] : ['--watch', '--watch-preserve-output']),
+      ...programArguments('server/main', compiled),
+    ],
     env: environment,
     cwd: projectDir,
     logFile: join(settings.dataDir, 'logs/app.log'),
     onStart: crew.add,
   });
-  const inside = `http://${environment.HOST || '127.0.0.1'}:${settings.ports.app}`;
-  await untilReady(app, () => answers(`${inside}/api/health`));
+  await untilReady(app, () => answers(`${insideAddress(settings, environment)}/api/health`));
+}
+
+async function startDevServer({ settings, environment, crew, say, signal }) {
+  signal?.throwIfAborted();
+  say('Starting the dev server (up to a minute) …');
+  const server = startChild({
+    name: 'dev server',
+    command: process.execPath,
+    args: [
+      join(projectDir, 'node_modules/@angular/cli/bin/ng.js'),
+      'serve',
+      '--port',
+      String(settings.ports.pages),
+    ],
+    env: {
+      ...environment,
+      NG_CLI_ANALYTICS: 'false',
+      SHIMLORE_INTERNAL_ADDRESS: insideAddress(settings, environment),
+    },
+    cwd: projectDir,
+    logFile: join(settings.dataDir, 'logs/dev-server.log'),
+    onStart: crew.add,
+  });
+  await untilReady(server, () => answers(`http://localhost:${settings.ports.pages}/`), 180);
+}
+
+function insideAddress(settings, environment) {
+  return `http://${environment.HOST || '127.0.0.1'}:${settings.ports.app}`;
 }
