@@ -1,0 +1,28 @@
+import type { Knex } from 'knex';
+import type { RouteBinding } from '../http/binding.js';
+import type { MeasurementService } from '../measurements/measurements.js';
+import type { WriteUpService } from '../write-ups/write-ups.js';
+import { createJointWriteUpStore } from './joint-write-ups.store.js';
+import { createJointStore } from './joint.store.js';
+import { jointBindings } from './joints.routes.js';
+import { createJointService } from './joints.service.js';
+
+/** Joints of features, the fit table of their revisions, the fit check and the comparison. */
+export function createJoints(around: {
+  knex: Knex;
+  clock: () => Date;
+  measurements: MeasurementService;
+  writeUps: WriteUpService;
+}): {
+  bindings: RouteBinding[];
+} {
+  const { knex, clock, measurements, writeUps } = around;
+  const service = createJointService({
+    clock,
+    store: createJointStore(knex),
+    pairs: createJointWriteUpStore(knex),
+    measurements,
+    writeUps,
+  });
+  return { bindings: jointBindings(service) };
+}
