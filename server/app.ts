@@ -21,6 +21,7 @@ import { securityHeaders } from './http/security-headers.js';
 import { sessionSweeper } from './http/session-sweeper.js';
 import { createSessions } from './http/session.js';
 import { createMail } from './mail/mail.js';
+import { createModeration } from './moderation/moderation.js';
 import { createPhotos } from './photos/photos.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
@@ -92,6 +93,13 @@ export function createApp(around: Surroundings): Composition {
     renderText,
     searchOutbox: search.outbox,
   });
+  const moderation = createModeration({
+    knex,
+    clock,
+    writeUps: writeUps.service,
+    mail: mail.queue,
+    searchOutbox: search.outbox,
+  });
   const system = createSystem({
     knex,
     publicAddress: settings.PUBLIC_ADDRESS,
@@ -108,6 +116,7 @@ export function createApp(around: Surroundings): Composition {
     ...bench.bindings,
     ...search.bindings,
     ...writeUps.bindings,
+    ...moderation.bindings,
   ];
 
   const app = express();

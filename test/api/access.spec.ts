@@ -1,0 +1,133 @@
+import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { routes } from '../../shared/contract/routes.js';
+import type { RouteDefinition } from '../../shared/contract/route.js';
+import { roles, type Role } from '../../shared/contract/vocabulary.js';
+import { startTestApp, type Agent, type TestApp } from './support/app.js';
+
+/** Who may call what, said a second time on purpose: opening a route by accident has to fail here. */
+const mayCall: Record<keyof typeof routes, readonly Role[]> = accessTable();
+
+let app: TestApp;
+let agents: Record<Role, Agent>;
+
+beforeAll(async () => {
+  app = await startTestApp({ search: true });
+  agents = {
+    visitor: app.visitor(),
+    member: await app.as('member'),
+    maker: await app.as('maker'),
+    moderator: await app.as('moderator'),
+    administrator: await app.as('administrator'),
+  };
+});
+afterAll(() => app.close());
+
+const declared = Object.entries(routes) as [keyof typeof routes, RouteDefinition][];
+// Signing out comes last, for it ends the session the others need.
+const inOrder = [...declared].sort(([a], [b]) => Number(a === 'signOut') - Number(b === 'signOut'));
+
+const standIns: Record<string, string> = { slug: 'no-such-thing', number: '1', file: 'page.js' };
+const address = (route: RouteDefinition): string =>
+  route.path.replace(/:([a-zA-Z]+)/g, (_, name: string) => standIns[name] ?? '999999999');
+
+describe.each(inOrder)('%s', (name, route) => {
+  it.each(roles)('is open to a %s exactly if the table says so', async (role) => {
+    const answer = await agents[role][route.method](address(route)).redirects(0);
+    const type = String(answer.body?.type ?? '');
+    if (mayCall[name].includes(role)) {
+      expect(type).not.toBe('/problems/not-signed-in');
+      expect(type).not.toBe('/problems/not-allowed');
+      expect([401, 403]).not.toContain(answer.status);
+      expect(answer.status).toBeLessThan(500);
+    } else if (role === 'visitor') {
+      expect([answer.status, type]).toEqual([401, '/problems/not-signed-in']);
+    } else {
+      expect([answer.status, type]).toEqual([403, '/problems/not-allowed']);
+    }
+  });
+});
+
+describe('what the server answers to', () => {
+  interface Layer {
+    readonly route?: { readonly path: string; readonly stack: readonly { readonly method: string }[] };
+    readonly handle: { readonly stack?: unknown };
+  }
+  const layers = (): readonly Layer[] =>
+    (app.app as unknown as { router: { stack: readonly Layer[] } }).router.stack;
+
+  it('is what is declared, no route more and none less', () => {
+    const served = layers().flatMap(({ route }) =>
+      route ? [...new Set(route.stack.map(({ method }) => `${method} ${route.path}`))] : [],
+    );
+    expect(served.sort()).toEqual(declared.map(([, route]) => `${route.method} ${route.path}`).sort());
+  });
+
+  it('hides no further routes in a router of its own', () => {
+    expect(layers().filter((layer) => !layer.route && layer.handle.stack !== undefined)).toEqual([]);
+  });
+
+  it('is nothing at an address below /api that is not declared', async () => {
+    const answer = await agents.administrator.get('/api/admin');
+    expect([answer.status, answer.body.type]).toEqual([404, '/problems/not-found']);
+  });
+});
+
+function accessTable(): Record<keyof typeof routes, readonly Role[]> {
+  const everybody: readonly Role[] = ['visitor', 'member', 'maker', 'moderator', 'administrator'];
+  const accounts: readonly Role[] = ['member', 'maker', 'moderator', 'administrator'];
+  const desk: readonly Role[] = ['moderator', 'administrator'];
+  const office: readonly Role[] = ['administrator'];
+  return {
+    health: everybody,
+    openApi: everybody,
+    apiPage: everybody,
+    apiPageFile: everybody,
+    session: everybody,
+    signUp: everybody,
+    confirmEmail: everybody,
+    resendConfirmation: everybody,
+    signIn: everybody,
+    signOut: everybody,
+    requestPasswordReset: everybody,
+    resetPassword: everybody,
+    changeProfile: accounts,
+    unsubscribe: everybody,
+    openUnsubscribe: everybody,
+    listAccounts: office,
+    changeRole: office,
+    listMakers: everybody,
+    listParts: everybody,
+    readPart: everybody,
+    listSymptoms: everybody,
+    readBench: accounts,
+    addToBench: accounts,
+    changeBenchItem: accounts,
+    removeFromBench: accounts,
+    search: everybody,
+    readWriteUp: everybody,
+    listEditions: everybody,
+    readEdition: everybody,
+    compareEditions: everybody,
+    listMine: accounts,
+    startWriteUp: accounts,
+    startEdition: accounts,
+    readDraft: accounts,
+    saveDraft: accounts,
+    discardDraft: accounts,
+    restoreDraft: accounts,
+    previewDraft: accounts,
+    submitDraft: accounts,
+    recallDraft: accounts,
+    reportTrial: accounts,
+    addPhoto: accounts,
+    servePhoto: everybody,
+    readDesk: desk,
+    readDeskEdition: desk,
+    listLibraryCautions: desk,
+    placeCaution: desk,
+    changeCaution: desk,
+    removeCaution: desk,
+    publishEdition: desk,
+    returnEdition: desk,
+  };
+}
