@@ -1,0 +1,1 @@
+export function fingerprint(root: string, paths: readonly string[]): string;

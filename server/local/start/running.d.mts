@@ -1,0 +1,5 @@
+export function claimDataFolder(
+  dataDir: string,
+  address: string,
+  say: (text: string) => void,
+): Promise<{ noteChild(child: { name: string; pid: number }): void; release(): void }>;

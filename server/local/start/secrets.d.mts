@@ -1,0 +1,3 @@
+export function readSecrets(
+  dataDir: string,
+): Record<'database' | 'databaseRoot' | 'search' | 'session', string>;
