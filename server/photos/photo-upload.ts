@@ -38,7 +38,12 @@ export function acceptOnePhoto(folder: string): RequestHandler[] {
     demandForm,
     (request, response, next) => {
       response.once('close', () => {
-        if (request.file) void rm(request.file.path, { force: true });
+        // The receiver takes the path off a file that it has removed itself.
+        const place: string | undefined = request.file?.path;
+        if (place)
+          rm(place, { force: true }).catch((error: unknown) =>
+            request.log.warn({ err: error }, 'upload left behind'),
+          );
       });
       receive(request, response, (error: unknown) => next(brokeOff(error) ?? error));
     },

@@ -1,22 +1,23 @@
 import { createHash } from 'node:crypto';
+import type { Knex } from 'knex';
 import type { Meilisearch } from 'meilisearch';
+import type { Logger } from 'pino';
 import type { WriteUpDocument } from '../../shared/contract/search.js';
 import { ensureSearchIndex } from './index-settings.js';
-import { createSearchIndex } from './search-index.js';
-import type { SearchOutboxStore } from './search-outbox.store.js';
-import type { WriteUpDocumentStore } from './write-up-document.store.js';
+import { createSearchIndex, type SearchIndex } from './search-index.js';
+import { createSearchOutboxStore, type SearchOutboxStore } from './search-outbox.store.js';
+import { workBatch } from './search-worker.js';
+import { createWriteUpDocumentStore, type WriteUpDocumentStore } from './write-up-document.store.js';
 
 const batchSize = 200;
 const taskPatience = { timeout: 60_000 };
 
 export interface RebuildParts {
+  readonly knex: Knex;
   readonly engine: Meilisearch;
   readonly indexUid: string;
-  readonly documents: WriteUpDocumentStore;
-  readonly outbox: SearchOutboxStore;
   readonly clock: () => Date;
-  /** Works the outbox once; gives how many notes there were. */
-  readonly workBatch: () => Promise<number>;
+  readonly logger: Logger;
   readonly say: (line: string) => void;
 }
 
@@ -31,13 +32,15 @@ export interface RebuildParts {
 export async function rebuildSearch(
   parts: RebuildParts,
 ): Promise<{ written: number; changedMeanwhile: number }> {
-  const { engine, indexUid, say } = parts;
+  const { knex, engine, indexUid, clock, logger, say } = parts;
+  const documents = createWriteUpDocumentStore(knex);
+  const outbox = createSearchOutboxStore(knex);
   const besideUid = `${indexUid}-next`;
   await removeIndex(engine, besideUid);
   await ensureSearchIndex(engine, indexUid);
   await ensureSearchIndex(engine, besideUid);
 
-  const written = await fill(parts, besideUid);
+  const written = await fill(documents, createSearchIndex(engine, besideUid));
   say(`${written.size} write-ups are written beside.`);
 
   const swapped = await engine
@@ -47,16 +50,16 @@ export async function rebuildSearch(
     throw new Error(`The indexes could not be swapped: ${swapped.error?.message ?? swapped.status}`);
   say('The new index answers.');
 
-  const changedMeanwhile = await noteChanges(parts, written);
-  while ((await parts.workBatch()) > 0);
+  const changedMeanwhile = await noteChanges(documents, outbox, clock(), written);
+  const index = createSearchIndex(engine, indexUid);
+  while ((await workBatch({ outbox, documents, index, clock, logger })) > 0);
   await removeIndex(engine, besideUid);
   say(`${changedMeanwhile} write-ups had changed meanwhile; the old index is gone.`);
   return { written: written.size, changedMeanwhile };
 }
 
 /** Writes every published write-up; gives a fingerprint of each document. */
-async function fill({ engine, documents }: RebuildParts, uid: string): Promise<Map<number, string>> {
-  const index = createSearchIndex(engine, uid);
+async function fill(documents: WriteUpDocumentStore, index: SearchIndex): Promise<Map<number, string>> {
   const fingerprints = new Map<number, string>();
   for await (const { found } of batchesOf(documents)) {
     await index.put([...found.values()]);
@@ -67,8 +70,10 @@ async function fill({ engine, documents }: RebuildParts, uid: string): Promise<M
 
 /** Notes every write-up whose document is no longer the one that was written. */
 async function noteChanges(
-  { documents, outbox, clock }: RebuildParts,
-  written: Map<number, string>,
+  documents: WriteUpDocumentStore,
+  outbox: SearchOutboxStore,
+  now: Date,
+  written: ReadonlyMap<number, string>,
 ): Promise<number> {
   let changes = 0;
   const unseen = new Set(written.keys());
@@ -77,11 +82,11 @@ async function noteChanges(
       const document = found.get(id);
       return written.get(id) !== (document && fingerprintOf(document));
     });
-    await outbox.addAll(changed, clock());
+    await outbox.addAll(changed, now);
     for (const id of ids) unseen.delete(id);
     changes += changed.length;
   }
-  await outbox.addAll([...unseen], clock());
+  await outbox.addAll([...unseen], now);
   return changes + unseen.size;
 }
 

@@ -11,8 +11,8 @@ import {
   pageAsHtml,
   picture,
   pngBomb,
-} from '../../test/fixtures/photos.js';
-import { hashOfPhoto, processPhoto, widthsFor } from './photo-processing.js';
+} from '../fixtures/photos.js';
+import { hashOfPhoto, processPhoto, widthsFor } from '../../server/photos/photo-processing.js';
 
 async function colourAt(bytes: Buffer, across: number, down: number): Promise<number[]> {
   const { data, info } = await sharp(bytes).removeAlpha().raw().toBuffer({ resolveWithObject: true });
