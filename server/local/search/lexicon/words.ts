@@ -10,14 +10,19 @@ export interface Word {
 
 const chunk = /[\p{L}\p{N}\p{M}]+(?:['’.\-×][\p{L}\p{N}\p{M}]+)*/gu;
 const plainWord = /[\p{L}\p{M}\p{N}]+(?:['’][\p{L}\p{M}]+)*/gu;
-const numberWithUnit = /^(\d+(?:\.\d+)?)([^\d.\-]+)$/;
+const numberWithUnit = /^(\d+(?:\.\d+)?)([^\d.-]+)$/;
+
+const plainLetters = /^[a-z]+$/;
 
 /** Words of a text in order. Numbers with decimals and names such as "608-2RS" stay whole. */
 export function wordsOf(text: string): Word[] {
   const words: Word[] = [];
   for (const match of text.matchAll(chunk)) {
     const [raw] = match;
-    if (/\d/.test(raw)) words.push(...numberWords(raw, match.index));
+    const lower = raw.toLowerCase();
+    if (plainLetters.test(lower))
+      words.push({ start: match.index, end: match.index + raw.length, word: lower, parts: [] });
+    else if (/\d/.test(raw)) words.push(...numberWords(raw, match.index));
     else words.push(...plainWords(raw, match.index));
   }
   return words;

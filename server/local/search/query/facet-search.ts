@@ -32,10 +32,9 @@ export function searchFacet(
     );
   }
   findHits(catalogue, index, request, extraFilter, { offset: 0, limit: 0 });
-  const hits = catalogue.reader.first<{ n: number }>('SELECT count(*) AS n FROM hits')?.n ?? 0;
   const { maxValuesPerFacet, sortFacetValuesBy } = settings.faceting;
   const order = sortFacetValuesBy[facet.name] ?? sortFacetValuesBy['*'] ?? 'alpha';
-  const values = facetValues(catalogue.reader, index, facet.name, { hits, order, most: mostRead });
+  const values = facetValues(catalogue.reader, index, facet.name, { order, most: mostRead });
   const typed = wordsOf(facet.query ?? '').map(({ word }) => word);
   const { oneTypo } = settings.typoTolerance.minWordSizeForTypos;
   const typoFrom = settings.typoTolerance.enabled ? oneTypo : Infinity;

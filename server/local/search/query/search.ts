@@ -123,7 +123,7 @@ function keepDistinct(
     `DELETE FROM hits WHERE doc IN (
        SELECT doc FROM (
          SELECT h.doc AS doc, row_number() OVER (PARTITION BY v.folded ORDER BY ${order.text}) AS place
-         FROM hits h JOIN facts_${index.id} v ON v.doc = h.doc AND v.field = ? AND v.folded IS NOT NULL)
+         FROM hits h JOIN facts_${index.id} v ON v.doc = h.doc AND v.field = ? AND v.shown IS NOT NULL)
        WHERE place > 1)`,
     [...order.values, attribute],
   );

@@ -130,13 +130,13 @@ export class DocumentWriter {
       if (!keepsFacts(this.index.settings, path)) continue;
       const shown = value === null ? null : String(value);
       const number = typeof value === 'number' && Number.isFinite(value) ? value : null;
-      rows.push([num, path, kind, shown === null ? null : folded(shown), shown, number]);
+      rows.push([num, path, shown === null ? '' : folded(shown), kind, shown, number]);
     }
     const most = 100;
     for (let at = 0; at < rows.length; at += most) {
       const part = rows.slice(at, at + most);
       const marks = part.map(() => '(?, ?, ?, ?, ?, ?)').join(', ');
-      this.connection.run(`INSERT INTO facts_${this.index.id} VALUES ${marks}`, part.flat());
+      this.connection.run(`INSERT OR IGNORE INTO facts_${this.index.id} VALUES ${marks}`, part.flat());
     }
   }
 }

@@ -9,10 +9,10 @@ export function createIndexTables(connection: Connection, id: number, columns: n
   connection.exec(`
     CREATE TABLE documents_${id} (num INTEGER PRIMARY KEY, doc_id TEXT NOT NULL UNIQUE, body TEXT NOT NULL);
     CREATE TABLE facts_${id} (
-      doc INTEGER NOT NULL, field TEXT NOT NULL, kind TEXT NOT NULL, folded TEXT, shown TEXT, number REAL);
+      doc INTEGER NOT NULL, field TEXT NOT NULL, folded TEXT NOT NULL, kind TEXT NOT NULL, shown TEXT, number REAL,
+      PRIMARY KEY (doc, field, folded, kind)) WITHOUT ROWID;
     CREATE INDEX facts_text_${id} ON facts_${id} (field, folded, doc);
-    CREATE INDEX facts_number_${id} ON facts_${id} (field, number, doc);
-    CREATE INDEX facts_doc_${id} ON facts_${id} (doc, field);
+    CREATE INDEX facts_number_${id} ON facts_${id} (field, number) WHERE number IS NOT NULL;
     CREATE TABLE lexicon_${id} (word TEXT PRIMARY KEY, documents INTEGER NOT NULL) WITHOUT ROWID;
   `);
   createWordTable(connection, id, columns);

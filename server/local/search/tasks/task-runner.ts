@@ -15,6 +15,9 @@ export interface Done {
   readonly afterCommit?: AfterCommit;
 }
 
+/** Outcomes stay this long, since closing a task in the queue's own file may reach the disk later. */
+const keptOutcomes = 1000;
+
 /**
  * Does tasks one after another. A task's effect and its outcome are one transaction in the indexes' file; a task
  * that a crash left open is closed with that outcome, or done from the start if there is none.
@@ -81,7 +84,7 @@ export class TaskRunner {
         const around = { catalogue: this.catalogue, uid: task.indexUid ?? '', now: this.now() };
         const done = (await performDocumentWork(work, around)) ?? (await performIndexWork(work, around));
         if (!done) throw new Error(`Nobody does ${work.kind}`);
-        writer.run('DELETE FROM outcomes WHERE task < ?', [task.uid]);
+        writer.run('DELETE FROM outcomes WHERE task < ?', [task.uid - keptOutcomes]);
         writer.run('INSERT INTO outcomes VALUES (?, ?)', [task.uid, JSON.stringify(done.outcome)]);
         return done;
       });
