@@ -35,7 +35,7 @@ export function createHardwareStore(knex: Knex) {
       if (maker !== undefined) void query.where('m.slug', maker);
       for (const word of words) {
         const pattern = `%${word.replace(/[\\%_]/g, '\\$&')}%`;
-        void query.where((either) => either.whereLike('p.name', pattern).orWhereLike('m.name', pattern));
+        void query.where((either) => either.where('p.name', 'like', pattern).orWhere('m.name', 'like', pattern));
       }
       if (after) {
         void query

@@ -20,7 +20,7 @@ export const publicationStore = {
 
   /** Slugs in use that begin like `base`. */
   async slugsLike(trx: Knex, base: string): Promise<Set<string>> {
-    return new Set(await trx('write_ups').whereLike('slug', `${base}%`).pluck('slug'));
+    return new Set(await trx('write_ups').where('slug', 'like', `${base}%`).pluck('slug'));
   },
 
   /** False where another write-up took that slug in the meantime. */
