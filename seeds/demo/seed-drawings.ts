@@ -1,8 +1,12 @@
 import type { Photo } from '../../shared/contract/photos.js';
 import { renderSheet } from '../drawing/render.js';
+import { sheetSize } from '../drawing/sheet.js';
 import { demoParts } from './parts.js';
 import { known } from './seed-catalogue.js';
 import { demoWriteUps } from './write-ups.js';
+
+/** Outlines of parts are shown small. */
+const partWidth = 720;
 
 type StorePhoto = (bytes: Buffer, alt: string, ownerId: number) => Promise<Photo>;
 
@@ -15,7 +19,7 @@ export async function storeWriteUpDrawings(storePhoto: StorePhoto, accounts: Rea
       content = later.change(content);
       all.push(...content.drawings);
     }
-    return all.map((item) => ({ key: item.svg, svg: item.svg, alt: item.alt, owner: known(accounts, writeUp.by) }));
+    return all.map((item) => ({ key: item.svg, svg: item.svg, alt: item.alt, owner: known(accounts, writeUp.by), width: sheetSize.width }));
   });
   return storeAll(storePhoto, drawings);
 }
@@ -23,16 +27,16 @@ export async function storeWriteUpDrawings(storePhoto: StorePhoto, accounts: Rea
 /** Renders and stores the drawing of every part; gives photo ids by the part's slug. The first administrator owns them. */
 export function storePartDrawings(storePhoto: StorePhoto, accounts: ReadonlyMap<string, number>): Promise<Map<string, number>> {
   const owner = known(accounts, 'administrator');
-  const drawings = demoParts.map((part) => ({ key: part.slug, svg: part.drawing, alt: `Outline drawing of ${part.name}: ${part.about}`.slice(0, 300), owner }));
+  const drawings = demoParts.map((part) => ({ key: part.slug, svg: part.drawing, alt: `Outline drawing of ${part.name}: ${part.about}`.slice(0, 300), owner, width: partWidth }));
   return storeAll(storePhoto, drawings);
 }
 
 async function storeAll(
-  storePhoto: StorePhoto, drawings: readonly { key: string; svg: string; alt: string; owner: number }[],
+  storePhoto: StorePhoto, drawings: readonly { key: string; svg: string; alt: string; owner: number; width: number }[],
 ): Promise<Map<string, number>> {
   const distinct = [...new Map(drawings.map((item) => [item.key, item])).values()];
   const stored = await Promise.all(
-    distinct.map(async ({ key, svg, alt, owner }) => [key, (await storePhoto(await renderSheet(svg), alt, owner)).id] as const),
+    distinct.map(async ({ key, svg, alt, owner, width }) => [key, (await storePhoto(await renderSheet(svg, width), alt, owner)).id] as const),
   );
   return new Map(stored);
 }

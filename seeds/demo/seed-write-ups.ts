@@ -2,8 +2,8 @@ import type { Knex } from 'knex';
 import type { EditionContent } from '../../shared/contract/edition-content.js';
 import { editionLinks } from '../../server/write-ups/edition-links.js';
 import { standingOf } from '../../shared/fit/standing.js';
-import { demoCautionLibrary } from './caution-library.js';
 import { idsFrom, insertRows } from './ids.js';
+import { type PlannedCaution, libraryEntry, planCautions } from './plan-cautions.js';
 import { type PhotoIds, resolveContent } from './resolve-content.js';
 import { type Catalogue, known } from './seed-catalogue.js';
 import { seededNumbers } from './random.js';
@@ -53,6 +53,7 @@ export async function seedWriteUps(
     const editions = editionsOf(writeUp);
     const first = editions[0]!;
     const published = editions.filter((item) => item.state === 'published');
+    const cautions = planCautions(writeUp.cautions, published.map((item) => ({ content: resolveContent(item.content, catalogue, photos), told: item.content })));
     const created = new Date(now.getTime() - first.daysAgo * day - 9 * day);
     const firstPublished = published.length > 0 ? instant(first) : null;
     rows.writeUps.push({ id, slug: writeUp.slug, created_by: known(accounts, first.by), published_edition_id: null, first_published_at: firstPublished, created_at: created });
@@ -76,7 +77,7 @@ export async function seedWriteUps(
       if (item.state === 'published') {
         addLinks(edition_id, content);
         rows.publishedEditions = rows.publishedEditions.filter((entry) => entry.id !== id).concat({ id, edition: edition_id });
-        if (number === 1) addCautions(edition_id, item, new Date(at.getTime() - hour));
+        addCautions(edition_id, cautions[number - 1] ?? [], new Date(at.getTime() - hour));
         rows.decisions.push({ edition_id, moderator_id: moderator, decision: 'published', reason: '', created_at: at });
       }
       if (item.state === 'returned') {
@@ -98,22 +99,16 @@ export async function seedWriteUps(
       }
     }
 
-    /** Cautions stand before the edition that needs them is published; those of later fixes are placed with the first edition that has them. */
-    function addCautions(edition_id: number, item: PlannedEdition, at: Date): void {
-      const place = (slug: string, fixOf: string | null): void => {
-        const entry = demoCautionLibrary.find((caution) => caution.slug === slug);
-        if (!entry) throw new Error(`The caution library has no “${slug}”.`);
-        const fix_id = fixOf === null ? null : (fixIds.get(fixOf) ?? fixIds.set(fixOf, fixId()).get(fixOf)!);
+    function addCautions(edition_id: number, planned: readonly PlannedCaution[], at: Date): void {
+      for (const { slug, fixKey } of planned) {
+        const entry = libraryEntry(slug);
         rows.cautions.push({
-          write_up_id: id, fix_id, library_id: known(catalogue.cautions, slug), signal_word: entry.signalWord, hazards: JSON.stringify(entry.hazards),
-          hazard: entry.hazard, consequence: entry.consequence, avoidance: entry.avoidance, placed_by: moderator, placed_at: at,
+          write_up_id: id, fix_id: fixKey === null ? null : known(fixIds, fixKey), library_id: known(catalogue.cautions, slug),
+          signal_word: entry.signalWord, hazards: JSON.stringify(entry.hazards), hazard: entry.hazard, consequence: entry.consequence,
+          avoidance: entry.avoidance, placed_by: moderator, placed_at: at,
         });
         rows.decisions.push({ edition_id, moderator_id: moderator, decision: 'caution-placed', reason: entry.name, created_at: at });
-      };
-      writeUp.cautions.forEach((slug) => place(slug, null));
-      const latest = published.at(-1)?.content ?? item.content;
-      const everyFix = new Map([...published.flatMap((edition) => edition.content.fixes), ...latest.fixes].map((entry) => [entry.key, entry]));
-      for (const entry of everyFix.values()) entry.cautions.forEach((slug) => place(slug, entry.key));
+      }
     }
 
     function addFixes(latest: PlannedEdition): void {

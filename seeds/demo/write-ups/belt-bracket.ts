@@ -83,7 +83,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
             why: 'The maker hands the model out on request. Without the lip the plate lies flat on every motor revision; a loose centring ring of 19.3 mm does what the lip did.',
             tools: 'Printer with an enclosure; 3.2 mm drill', materials: 'Glass-filled nylon; brass inserts M3',
             steps: ['Ask the maker for the model, or measure the arm’s holes and draw it.', 'Leave the lip away. Print flat side down, six walls, solid round the holes.', 'Clear the holes with a 3.2 mm drill turned by hand.', 'Mount with the centring ring in the recess; take the ring out when the screws are tight.'],
-            after: ['focus-offsets'], accept: atMost('tilt of the motor against the plate', 0.3, 'deg'), trials: 'h0.1 h w',
+            after: ['focus-offsets'], accept: atMost('tilt of the motor against the plate', 0.3, 'deg'), trials: 'h h w',
           }),
           earlier.fixes[1]!,
         ],
@@ -110,7 +110,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
     symptoms: 'belt-slips-one-way belt-slips focus-run-fails backlash-large',
     noticed: 'Inwards I hear it tick and the focus run makes a step. Outwards all is well. Tightening the belt more makes the motor stall in the cold.',
     cause: 'A belt is pulled tight on one side and goes slack on the other. Turning the focus ring **in** lifts the camera’s weight and pulls hardest. On bracket Rev A and B the idler sits on the span that is tight in this direction, so it is pushed away and the slack gathers at the small pulley, where only eight teeth carry.',
-    readings: [read('thornapple-belt-kit-60:B', 'teeth of the motor pulley', 20, 'mm', 'count', null), read('', 'pull at the grip ring to turn it', 6.5, 'N', 'other', 1), read('stonebridge-belt-bracket:B', 'length of the tensioner slot', 14, 'mm')],
+    readings: [read('thornapple-belt-kit-60:B', 'pitch of the belt', 2, 'mm', 'makers-drawing', null), read('', 'pull at the grip ring to turn it', 6.5, 'N', 'other', 1), read('stonebridge-belt-bracket:B', 'length of the tensioner slot', 14, 'mm')],
     fixes: [
       fix('idler-to-slack-side', 'Idler to the slack side', 'reposition', 'reversible', {
         why: 'On the slack side the idler takes up what the pull leaves over and adds wrap to the small pulley.', tools: 'Hex key 2.5 mm; spanner 5.5 mm; ruler', materials: '',
@@ -124,7 +124,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
       fix('tension-by-the-span', 'Set the tension by the span', 'adjust', 'reversible', {
         why: 'Too little slips, too much bends the shaft and stalls the motor. The middle of the free span tells.', tools: 'Spring balance to 5 N; ruler', materials: '',
         steps: ['Unplug the motor.', 'Loosen the motor’s screws a quarter turn and push it outwards until 3 N moves the span’s middle by 3 mm.', 'Tighten crosswise, measure again at four positions of the ring and take the tightest as your figure.'],
-        accept: atMost('spread of the tension round the ring', 0.8, 'N'), cautions: 'pinch', trials: 'h0.5 h w n',
+        accept: atMost('spread of the tension round the ring', 0.8, 'N'), cautions: 'pinch', trials: 'h h w n',
       }),
     ],
     drawings: [
@@ -143,7 +143,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
           fix('add-the-sprung-arm', 'Add the sprung arm', 'swap', 'leaves-a-mark', {
             why: 'Where the ring runs out by more than 0.3 mm no fixed idler is right all round. The arm follows.', tools: 'Drill 2.5 mm; M3 tap; centre punch', materials: 'Tension arm Rev B or C; M3 × 8 screw',
             steps: ['Take motor and bracket off; drilling is done away from the telescope.', 'Mark the pivot 22 mm from the small pulley’s axis, punch, clamp and drill 2.5 mm. Wear eye protection.', 'Tap M3, brush the chips off and wipe.', 'Mount the arm so that its spring is half bent with the belt on.'],
-            after: ['focus-offsets'], accept: atMost('marks apart after five runs', 0.2, 'mm'), cautions: 'rotary-tool swarf pinch', trials: 'h0.05 h0.1 w',
+            after: ['focus-offsets'], accept: atMost('marks apart after five runs', 0.2, 'mm'), cautions: 'rotary-tool swarf pinch', trials: 'h h w',
           }),
         ],
       })),
@@ -204,7 +204,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
       }),
       fix('open-the-slots-by-file', 'Open the slots with a file', 'trim', 'permanent', {
         why: 'Gains 2 mm where no shorter belt is to be had. Keep 4 mm of wall at the end.', tools: 'Round file 3 mm; caliper; vice with soft jaws', materials: '',
-        steps: ['Take the motor off and carry the bracket away from the telescope.', 'Scribe the new ends: 2 mm, and check that 4 mm of wall are left.', 'File in a straight line, filing dust away from your face; mask on.', 'Brush, wipe, mount, set the tension.'], accept: atMost('sag of the span at 3 N', 3.5, 'mm'), cautions: 'dust swarf', trials: 'h3.4 w',
+        steps: ['Take the motor off and carry the bracket away from the telescope.', 'Scribe the new ends: 2 mm, and check that 4 mm of wall are left.', 'File in a straight line, filing dust away from your face; mask on.', 'Brush, wipe, mount, set the tension.'], accept: atMost('sag of the span at 3 N', 3.5, 'mm'), cautions: 'dust swarf', trials: 'h w',
       }),
     ],
     drawings: [drawing(beltPlan({ title: 'SLOTS OF BRACKET 80 REV A', bigTeeth: 147, smallTeeth: 20, pitch: 2, centres: 88, slotTravel: 8 }), 'Plan: belt over two pulleys with 88 mm between the shafts; the motor’s slots allow 8 mm of travel.', 'The slots end too soon.')],
