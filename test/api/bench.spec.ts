@@ -15,7 +15,10 @@ describe('my bench', () => {
     const me = await app.memberNamed('Owner');
     const added = await me.post('/api/bench').send({ partId: part.id, revisionId: part.revisions[1]!.id });
     expect(added.status).toBe(201);
-    expect(added.body).toMatchObject({ part: { id: part.id, name: part.name }, revision: { label: 'Rev B', partId: part.id } });
+    expect(added.body).toMatchObject({
+      part: { id: part.id, name: part.name },
+      revision: { label: 'Rev B', partId: part.id },
+    });
     const { body } = await me.get('/api/bench').expect(200);
     expect(body.items).toEqual([added.body]);
     expect(body.items[0].part.revisions).toHaveLength(2);
@@ -50,7 +53,9 @@ describe('my bench', () => {
     expect([changed.status, changed.body.revision.label]).toEqual([200, 'Rev B']);
     const twice = await me.patch(`/api/bench/${unknown.id}`).send({ revisionId: part.revisions[0]!.id });
     expect(twice.status).toBe(409);
-    const labels = (await me.get('/api/bench')).body.items.map((item: { revision: { label: string } }) => item.revision.label);
+    const labels = (await me.get('/api/bench')).body.items.map(
+      (item: { revision: { label: string } }) => item.revision.label,
+    );
     expect(labels).toEqual(['Rev B', 'Rev A']);
   });
 
@@ -62,7 +67,10 @@ describe('my bench', () => {
       return [answer.status, answer.body.fields[0].path];
     };
     expect(await refused({ partId: 999_999_999, revisionId: null })).toEqual([422, 'partId']);
-    expect(await refused({ partId: part.id, revisionId: other.revisions[0]!.id })).toEqual([422, 'revisionId']);
+    expect(await refused({ partId: part.id, revisionId: other.revisions[0]!.id })).toEqual([
+      422,
+      'revisionId',
+    ]);
     expect(await refused({ partId: part.id })).toEqual([422, 'revisionId']);
     expect((await me.get('/api/bench')).body.items).toEqual([]);
   });
@@ -81,7 +89,9 @@ describe('my bench', () => {
     const [mine, theirs] = [await app.memberNamed('Owner'), await app.memberNamed('Stranger')];
     const { body } = await mine.post('/api/bench').send({ partId: part.id, revisionId: null });
     expect((await theirs.get('/api/bench')).body.items).toEqual([]);
-    expect((await theirs.patch(`/api/bench/${body.id}`).send({ revisionId: part.revisions[0]!.id })).status).toBe(404);
+    expect(
+      (await theirs.patch(`/api/bench/${body.id}`).send({ revisionId: part.revisions[0]!.id })).status,
+    ).toBe(404);
     expect((await theirs.delete(`/api/bench/${body.id}`)).status).toBe(404);
     expect((await app.visitor().get('/api/bench')).status).toBe(401);
     expect((await mine.get('/api/bench')).body.items).toEqual([body]);

@@ -31,9 +31,15 @@ describe('the list of parts', () => {
   });
 
   it('finds every word in the name of the part or of its maker, and takes wildcards for themselves', async () => {
-    const part = await insertPart(app.knex, { name: 'Belt kit 100%', maker: 'Quillon Works', kind: 'belt-kit' });
+    const part = await insertPart(app.knex, {
+      name: 'Belt kit 100%',
+      maker: 'Quillon Works',
+      kind: 'belt-kit',
+    });
     const found = async (query: object): Promise<string[]> =>
-      (await app.visitor().get('/api/parts').query(query).expect(200)).body.items.map((item: { slug: string }) => item.slug);
+      (await app.visitor().get('/api/parts').query(query).expect(200)).body.items.map(
+        (item: { slug: string }) => item.slug,
+      );
     expect(await found({ q: 'quillon belt' })).toEqual([part.slug]);
     expect(await found({ q: '100%' })).toEqual([part.slug]);
     expect(await found({ q: 'quillon rotator' })).toEqual([]);
@@ -48,12 +54,24 @@ describe('the list of parts', () => {
     await publishNew(author, moderator, completeContent(joint));
     const after = await app.visitor().get('/api/parts').query({ maker: joint.motor.makerSlug });
     expect(after.body.items[0].writeUps).toBe(1);
-    expect(after.body.items[0].revisions.map((revision: { label: string }) => revision.label)).toEqual(['Rev A', 'Rev B', 'Rev C']);
+    expect(after.body.items[0].revisions.map((revision: { label: string }) => revision.label)).toEqual([
+      'Rev A',
+      'Rev B',
+      'Rev C',
+    ]);
   });
 
   it('refuses a cursor that is none, and a kind that is none, naming the field', async () => {
-    for (const [field, value] of [['cursor', 'nonsense'], ['kind', 'spoon'], ['limit', '1000'], ['stray', '1']] as const) {
-      const { status, body } = await app.visitor().get('/api/parts').query({ [field]: value });
+    for (const [field, value] of [
+      ['cursor', 'nonsense'],
+      ['kind', 'spoon'],
+      ['limit', '1000'],
+      ['stray', '1'],
+    ] as const) {
+      const { status, body } = await app
+        .visitor()
+        .get('/api/parts')
+        .query({ [field]: value });
       expect([status, body.fields[0].path]).toEqual([422, field]);
     }
   });
@@ -62,11 +80,21 @@ describe('the list of parts', () => {
 describe('the page of a part', () => {
   it('shows revisions with their days, features, and for which revisions each write-up holds', async () => {
     const joint = await insertJoint(app.knex);
-    await app.knex('features').insert({ part_id: joint.motor.id, slug: 'lip', name: 'Raised lip', kind: 'boss' });
+    await app
+      .knex('features')
+      .insert({ part_id: joint.motor.id, slug: 'lip', name: 'Raised lip', kind: 'boss' });
     const { slug } = await publishNew(author, moderator, completeContent(joint));
     const { body } = await app.visitor().get(`/api/parts/${joint.motor.slug}`).expect(200);
-    expect(body).toMatchObject({ name: 'Motor M', photo: null, features: [{ slug: 'lip', name: 'Raised lip', kind: 'boss' }] });
-    expect(body.revisions.map((revision: { soldFrom: string | null }) => revision.soldFrom)).toEqual(['2024-03-01', null, null]);
+    expect(body).toMatchObject({
+      name: 'Motor M',
+      photo: null,
+      features: [{ slug: 'lip', name: 'Raised lip', kind: 'boss' }],
+    });
+    expect(body.revisions.map((revision: { soldFrom: string | null }) => revision.soldFrom)).toEqual([
+      '2024-03-01',
+      null,
+      null,
+    ]);
     expect(body.writeUps).toEqual([
       { slug, title: 'Bracket rocks on the raised lip', holdsFor: ['Rev A'], notFor: ['Rev B'] },
     ]);
@@ -84,7 +112,9 @@ describe('makers and symptoms', () => {
     const makers = (await app.visitor().get('/api/makers').expect(200)).body.items;
     expect(makers[0]).toMatchObject({ slug: part.makerSlug, name: 'Aardvark Tooling' });
     const [first, second] = [await insertSymptom(app.knex, 'Zeta'), await insertSymptom(app.knex, 'Alpha')];
-    const slugs = (await app.visitor().get('/api/symptoms').expect(200)).body.items.map((each: { slug: string }) => each.slug);
+    const slugs = (await app.visitor().get('/api/symptoms').expect(200)).body.items.map(
+      (each: { slug: string }) => each.slug,
+    );
     expect(slugs.indexOf(first)).toBeLessThan(slugs.indexOf(second));
     expect(slugs).toContain(second);
   });

@@ -21,7 +21,11 @@ export async function insertPart(
   const name = wish.name ?? `Part ${made}`;
   const makerSlug = `maker-${made}`;
   const slug = `part-${made}`;
-  const [makerId] = await knex('makers').insert({ slug: makerSlug, name: wish.maker ?? `Maker ${made}`, about: '' });
+  const [makerId] = await knex('makers').insert({
+    slug: makerSlug,
+    name: wish.maker ?? `Maker ${made}`,
+    about: '',
+  });
   const [id] = await knex('parts').insert({
     slug,
     maker_id: makerId,

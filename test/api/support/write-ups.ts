@@ -14,7 +14,11 @@ export interface TestJoint {
 /** Two parts that are meant to mate, and a symptom. */
 export async function insertJoint(knex: Knex): Promise<TestJoint> {
   return {
-    motor: await insertPart(knex, { name: 'Motor M', kind: 'focus-motor', revisions: ['Rev A', 'Rev B', 'Rev C'] }),
+    motor: await insertPart(knex, {
+      name: 'Motor M',
+      kind: 'focus-motor',
+      revisions: ['Rev A', 'Rev B', 'Rev C'],
+    }),
     bracket: await insertPart(knex, { name: 'Bracket K', revisions: ['v1', 'v2'] }),
     symptom: await insertSymptom(knex),
   };
@@ -49,11 +53,20 @@ export function plainFix(over: Partial<Fix> = {}): Fix {
 
 /** A remedy that names a knife, and so the hazard `blade`. */
 export function knifeFix(over: Partial<Fix> = {}): Fix {
-  return plainFix({ title: 'Trim the lip', kind: 'trim', permanence: 'permanent', tools: ['knife'], ...over });
+  return plainFix({
+    title: 'Trim the lip',
+    kind: 'trim',
+    permanence: 'permanent',
+    tools: ['knife'],
+    ...over,
+  });
 }
 
 /** An edition that lacks nothing: holds for the motor's Rev A and not for its Rev B, and for the bracket's v1. */
-export function completeContent({ motor, bracket, symptom }: TestJoint, over: Partial<EditionContent> = {}): EditionContent {
+export function completeContent(
+  { motor, bracket, symptom }: TestJoint,
+  over: Partial<EditionContent> = {},
+): EditionContent {
   return {
     ...emptyContent,
     title: 'Bracket rocks on the raised lip',
@@ -68,7 +81,11 @@ export function completeContent({ motor, bracket, symptom }: TestJoint, over: Pa
             { revisionId: motor.revisions[1]!.id, holds: false },
           ],
         },
-        b: { partId: bracket.id, feature: 'recess', revisions: [{ revisionId: bracket.revisions[0]!.id, holds: true }] },
+        b: {
+          partId: bracket.id,
+          feature: 'recess',
+          revisions: [{ revisionId: bracket.revisions[0]!.id, holds: true }],
+        },
       },
     ],
     symptoms: [symptom],
@@ -80,12 +97,21 @@ export function completeContent({ motor, bracket, symptom }: TestJoint, over: Pa
 }
 
 /** A draft of the author with this text, saved once. */
-export async function saveNewDraft(author: MemberAgent, content: EditionContent, changeNote = ''): Promise<Draft> {
+export async function saveNewDraft(
+  author: MemberAgent,
+  content: EditionContent,
+  changeNote = '',
+): Promise<Draft> {
   const draft: Draft = (await author.post('/api/write-ups').send({}).expect(201)).body;
   return saveDraft(author, draft, content, changeNote);
 }
 
-export async function saveDraft(author: MemberAgent, draft: Draft, content: EditionContent, changeNote = ''): Promise<Draft> {
+export async function saveDraft(
+  author: MemberAgent,
+  draft: Draft,
+  content: EditionContent,
+  changeNote = '',
+): Promise<Draft> {
   const saved = await author
     .put(`/api/drafts/${draft.id}`)
     .set('If-Match', `"${draft.version}"`)
@@ -95,7 +121,9 @@ export async function saveDraft(author: MemberAgent, draft: Draft, content: Edit
 }
 
 export async function submitDraft(author: MemberAgent, draft: Draft): Promise<Draft> {
-  return (await author.post(`/api/drafts/${draft.id}/submit`).set('If-Match', `"${draft.version}"`).expect(200)).body;
+  return (
+    await author.post(`/api/drafts/${draft.id}/submit`).set('If-Match', `"${draft.version}"`).expect(200)
+  ).body;
 }
 
 export interface PublishedWriteUp {
@@ -113,9 +141,15 @@ export async function publishNew(
 ): Promise<PublishedWriteUp> {
   const draft = await submitDraft(author, await saveNewDraft(author, content));
   for (const caution of cautions) {
-    await moderator.post('/api/desk/cautions').send({ ...caution, editionId: draft.id }).expect(201);
+    await moderator
+      .post('/api/desk/cautions')
+      .send({ ...caution, editionId: draft.id })
+      .expect(201);
   }
-  const { body } = await moderator.post(`/api/desk/editions/${draft.id}/publish`).send({ note: '' }).expect(200);
+  const { body } = await moderator
+    .post(`/api/desk/editions/${draft.id}/publish`)
+    .send({ note: '' })
+    .expect(200);
   return { slug: body.slug, editionId: draft.id, writeUpId: draft.writeUpId };
 }
 
