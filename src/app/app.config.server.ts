@@ -6,7 +6,10 @@ import { serverRoutes } from './app.routes.server';
 import { InternalBackend } from './core/internal-backend';
 
 const onServer: ApplicationConfig = {
-  providers: [provideServerRendering(withRoutes(serverRoutes)), { provide: HttpBackend, useClass: InternalBackend }],
+  providers: [
+    provideServerRendering(withRoutes(serverRoutes)),
+    { provide: HttpBackend, useClass: InternalBackend },
+  ],
 };
 
 export const serverConfig = mergeApplicationConfig(appConfig, onServer);

@@ -3,19 +3,53 @@ import { mustBe } from './core/guards';
 
 /** Addresses of the editor and of what is not published yet; tested before its code is fetched. */
 const isEditorAddress: CanMatchFn = (_route, segments) =>
-  /^(?:write-ups\/new$|write-ups\/[^/]+\/edit$|drafts\/|my\/)/.test(segments.map((segment) => segment.path).join('/'));
+  /^(?:write-ups\/new$|write-ups\/[^/]+\/edit$|drafts\/|my\/)/.test(
+    segments.map((segment) => segment.path).join('/'),
+  );
 
 export const appRoutes: Routes = [
   { path: '', pathMatch: 'full', loadComponent: () => import('./library/home-page').then((m) => m.HomePage) },
-  { path: 'search', title: 'Search', loadComponent: () => import('./library/search-page').then((m) => m.SearchPage) },
-  { path: '', canMatch: [isEditorAddress], loadChildren: () => import('./write-ups/editor/editor.routes').then((m) => m.routes) },
+  {
+    path: 'search',
+    title: 'Search',
+    loadComponent: () => import('./library/search-page').then((m) => m.SearchPage),
+  },
+  {
+    path: '',
+    canMatch: [isEditorAddress],
+    loadChildren: () => import('./write-ups/editor/editor.routes').then((m) => m.routes),
+  },
   { path: 'write-ups', loadChildren: () => import('./write-ups/write-ups.routes').then((m) => m.routes) },
-  { path: 'hardware', title: 'Hardware', loadComponent: () => import('./hardware/hardware-page').then((m) => m.HardwarePage) },
+  {
+    path: 'hardware',
+    title: 'Hardware',
+    loadComponent: () => import('./hardware/hardware-page').then((m) => m.HardwarePage),
+  },
   { path: 'parts/:slug', loadComponent: () => import('./hardware/part-page').then((m) => m.PartPage) },
-  { path: 'bench', title: 'Bench', loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage) },
+  {
+    path: 'bench',
+    title: 'Bench',
+    loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
+  },
   { path: 'account', loadChildren: () => import('./account/account.routes').then((m) => m.routes) },
-  { path: 'desk', canActivate: [mustBe('moderator')], loadChildren: () => import('./desk/desk.routes').then((m) => m.routes) },
-  { path: 'admin', canActivate: [mustBe('administrator')], loadChildren: () => import('./admin/admin.routes').then((m) => m.routes) },
-  { path: 'not-for-you', title: 'Not for you', loadComponent: () => import('./core/not-for-you-page').then((m) => m.NotForYouPage) },
-  { path: '**', title: 'Nothing here', loadComponent: () => import('./core/nothing-here-page').then((m) => m.NothingHerePage) },
+  {
+    path: 'desk',
+    canActivate: [mustBe('moderator')],
+    loadChildren: () => import('./desk/desk.routes').then((m) => m.routes),
+  },
+  {
+    path: 'admin',
+    canActivate: [mustBe('administrator')],
+    loadChildren: () => import('./admin/admin.routes').then((m) => m.routes),
+  },
+  {
+    path: 'not-for-you',
+    title: 'Not for you',
+    loadComponent: () => import('./core/not-for-you-page').then((m) => m.NotForYouPage),
+  },
+  {
+    path: '**',
+    title: 'Nothing here',
+    loadComponent: () => import('./core/nothing-here-page').then((m) => m.NothingHerePage),
+  },
 ];

@@ -1,6 +1,15 @@
 import { ChangeDetectionStrategy, Component, ElementRef, inject, viewChild } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
-import { NavigationCancel, NavigationEnd, NavigationError, NavigationStart, Router, RouterLink, RouterLinkActive, RouterOutlet } from '@angular/router';
+import {
+  NavigationCancel,
+  NavigationEnd,
+  NavigationError,
+  NavigationStart,
+  Router,
+  RouterLink,
+  RouterLinkActive,
+  RouterOutlet,
+} from '@angular/router';
 import { filter, map } from 'rxjs';
 import { BenchStore } from './bench/bench-store';
 import { Session } from './core/session';
@@ -24,7 +33,11 @@ export class App {
   /** Whether the next page is on its way. */
   protected readonly underway = toSignal(
     this.router.events.pipe(
-      filter((event) => [NavigationStart, NavigationEnd, NavigationCancel, NavigationError].some((kind) => event instanceof kind)),
+      filter((event) =>
+        [NavigationStart, NavigationEnd, NavigationCancel, NavigationError].some(
+          (kind) => event instanceof kind,
+        ),
+      ),
       map((event) => event instanceof NavigationStart),
     ),
     { initialValue: false },

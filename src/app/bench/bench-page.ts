@@ -1,4 +1,12 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  computed,
+  effect,
+  inject,
+  signal,
+} from '@angular/core';
 import { takeUntilDestroyed, toSignal } from '@angular/core/rxjs-interop';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
 import { RouterLink } from '@angular/router';
@@ -35,22 +43,43 @@ export class BenchPage {
   protected readonly problem = signal<Problem | null>(null);
   protected readonly working = signal(false);
   protected readonly name = new FormControl('', { nonNullable: true });
-  protected readonly typed = toSignal(this.name.valueChanges.pipe(map((words) => words.trim())), { initialValue: '' });
+  protected readonly typed = toSignal(this.name.valueChanges.pipe(map((words) => words.trim())), {
+    initialValue: '',
+  });
   protected readonly found = toSignal<LoadState<PartSummary[]>, LoadState<PartSummary[]>>(
     this.name.valueChanges.pipe(
       map((words) => words.trim()),
       debounceTime(pauseInTyping),
       distinctUntilChanged(),
-      switchMap((q) => (q === '' ? of(loading) : statesOf(this.hardware.parts({ q, limit: 8 }).pipe(map(({ items }) => items))))),
+      switchMap((q) =>
+        q === ''
+          ? of(loading)
+          : statesOf(this.hardware.parts({ q, limit: 8 }).pipe(map(({ items }) => items))),
+      ),
       takeUntilDestroyed(inject(DestroyRef)),
     ),
     { initialValue: loading },
   );
-  protected readonly unsaid = computed(() => this.bench.items().filter((entry) => entry.revision === null).length);
+  protected readonly unsaid = computed(
+    () => this.bench.items().filter((entry) => entry.revision === null).length,
+  );
+
+  protected readonly leftNames = computed(() =>
+    this.bench
+      .left()
+      .map((entry) => `${entry.part.name} ${entry.revision?.label ?? ''}`.trim())
+      .join(', '),
+  );
 
   constructor() {
     const titles = inject(ShimloreTitles);
-    effect(() => titles.describe({ title: 'Bench', description: 'The parts you have, and which revision each is.', path: '/bench' }));
+    effect(() =>
+      titles.describe({
+        title: 'Bench',
+        description: 'The parts you have, and which revision each is.',
+        path: '/bench',
+      }),
+    );
   }
 
   protected add(part: PartSummary): Promise<void> {
@@ -68,7 +97,10 @@ export class BenchPage {
   protected remove(entry: BenchEntry): Promise<void> {
     return this.during(async () => {
       await this.bench.remove(entry);
-      this.undo.offer(`${entry.part.name} is off your bench.`, () => void this.during(() => this.bench.add(entry.part, entry.revision?.id ?? null)));
+      this.undo.offer(
+        `${entry.part.name} is off your bench.`,
+        () => void this.during(() => this.bench.add(entry.part, entry.revision?.id ?? null)),
+      );
     });
   }
 

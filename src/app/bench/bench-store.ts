@@ -1,4 +1,14 @@
-import { DestroyRef, Injectable, Injector, afterNextRender, computed, effect, inject, signal, untracked } from '@angular/core';
+import {
+  DestroyRef,
+  Injectable,
+  Injector,
+  afterNextRender,
+  computed,
+  effect,
+  inject,
+  signal,
+  untracked,
+} from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { firstValueFrom } from 'rxjs';
 import { benchRoutes, type BenchItem, type PartSummary } from '../../../shared/contract/hardware';
@@ -37,8 +47,12 @@ export class BenchStore {
     return this.isMember() ? this.local().filter((entry) => !here.has(keyOf(entry))) : [];
   });
   /** What a search call says of a visitor; the server knows a member's bench by itself. */
-  readonly revisionIdsToSend = computed(() => (this.isMember() ? [] : this.local().flatMap((entry) => (entry.revision ? [entry.revision.id] : []))));
-  readonly owned = computed<OwnedPart[]>(() => this.items().map((entry) => ({ partId: entry.part.id, revision: entry.revision })));
+  readonly revisionIdsToSend = computed(() =>
+    this.isMember() ? [] : this.local().flatMap((entry) => (entry.revision ? [entry.revision.id] : [])),
+  );
+  readonly owned = computed<OwnedPart[]>(() =>
+    this.items().map((entry) => ({ partId: entry.part.id, revision: entry.revision })),
+  );
 
   constructor() {
     this.readRemote(untracked(this.accountId));
@@ -48,14 +62,18 @@ export class BenchStore {
 
   /** Whether this revision of this part (null: not said which) is on the bench. */
   has(partId: number, revisionId: number | null): boolean {
-    return this.items().some((entry) => entry.part.id === partId && (entry.revision?.id ?? null) === revisionId);
+    return this.items().some(
+      (entry) => entry.part.id === partId && (entry.revision?.id ?? null) === revisionId,
+    );
   }
 
   /** Rejects with an `ApiProblem`; a part that is there already changes nothing. */
   async add(part: PartSummary, revisionId: number | null): Promise<void> {
     if (this.has(part.id, revisionId)) return;
     if (this.isMember()) {
-      const item = await firstValueFrom(this.api.call(benchRoutes.addToBench, { body: { partId: part.id, revisionId } }));
+      const item = await firstValueFrom(
+        this.api.call(benchRoutes.addToBench, { body: { partId: part.id, revisionId } }),
+      );
       this.remote.update((items) => [...items, item]);
     } else {
       const id = 1 + Math.max(0, ...this.local().map((entry) => entry.id));
@@ -66,10 +84,16 @@ export class BenchStore {
   /** Says which revision an entry is. Rejects with an `ApiProblem`. */
   async choose(entry: BenchEntry, revisionId: number | null): Promise<void> {
     if (this.isMember()) {
-      const item = await firstValueFrom(this.api.call(benchRoutes.changeBenchItem, { params: { id: entry.id }, body: { revisionId } }));
+      const item = await firstValueFrom(
+        this.api.call(benchRoutes.changeBenchItem, { params: { id: entry.id }, body: { revisionId } }),
+      );
       this.remote.update((items) => items.map((other) => (other.id === item.id ? item : other)));
     } else {
-      this.keep(this.local().map((other) => (other.id === entry.id ? { ...other, revision: revisionOf(other.part, revisionId) } : other)));
+      this.keep(
+        this.local().map((other) =>
+          other.id === entry.id ? { ...other, revision: revisionOf(other.part, revisionId) } : other,
+        ),
+      );
     }
   }
 

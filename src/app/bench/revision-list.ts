@@ -18,20 +18,51 @@ interface Chip {
     <ul class="sl-plain-list" [attr.aria-label]="'Revisions of ' + partName()">
       @for (chip of chips(); track chip.id) {
         <li [class]="chip.mark" [class.mine]="chip.mine" [title]="chip.words">
-          <span aria-hidden="true">{{ chip.label }}</span><span class="sl-visually-hidden">{{ chip.label }}: {{ chip.words }}</span>
-          @if (chip.mine) {<span class="yours" aria-hidden="true">yours</span>}
+          <span aria-hidden="true">{{ chip.label }}</span><span class="sl-visually-hidden"
+            >{{ chip.label }}: {{ chip.words }}</span
+          >
+          @if (chip.mine) {
+            <span class="yours" aria-hidden="true">yours</span>
+          }
         </li>
       }
     </ul>
   `,
   styles: `
-    ul { display: flex; flex-wrap: wrap; gap: 0.3rem; }
-    li { display: inline-flex; align-items: center; gap: 0.35rem; font: 400 0.875rem/1.45 var(--sl-mono); padding: 0 0.4rem; border: 1px solid var(--sl-ink); color: var(--sl-ink); }
-    .holds { font-weight: 600; }
-    .not { border-color: var(--sl-rule); color: var(--sl-quiet); text-decoration: line-through; }
-    .unknown { border-style: dotted; border-color: var(--sl-quiet); color: var(--sl-quiet); }
-    .mine { box-shadow: 0 2px 0 var(--sl-accent); }
-    .yours { font: 600 0.8125rem/1 var(--sl-body); text-decoration: none; }
+    ul {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 0.3rem;
+    }
+    li {
+      display: inline-flex;
+      align-items: center;
+      gap: 0.35rem;
+      font: 500 1rem/1.45 var(--sl-heading);
+      padding: 0 0.45rem;
+      border: 1px solid var(--sl-ink);
+      color: var(--sl-ink);
+    }
+    .holds {
+      font-weight: 600;
+    }
+    .not {
+      border-color: var(--sl-rule);
+      color: var(--sl-quiet);
+      text-decoration: line-through;
+    }
+    .unknown {
+      border-style: dotted;
+      border-color: var(--sl-quiet);
+      color: var(--sl-quiet);
+    }
+    .mine {
+      box-shadow: 0 2px 0 var(--sl-accent);
+    }
+    .yours {
+      font: 600 0.8125rem/1 var(--sl-body);
+      text-decoration: none;
+    }
   `,
 })
 export class RevisionList {

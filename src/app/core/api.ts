@@ -28,7 +28,9 @@ export class Api {
         headers: ifMatch === undefined ? {} : { 'If-Match': `"${ifMatch}"` },
         responseType: 'json',
       })
-      .pipe(catchError((error: unknown) => throwError(() => toApiProblem(error)))) as Observable<ResponseOf<R>>;
+      .pipe(catchError((error: unknown) => throwError(() => toApiProblem(error)))) as Observable<
+      ResponseOf<R>
+    >;
   }
 }
 
@@ -57,7 +59,8 @@ function queryOf(query: Record<string, unknown> = {}): HttpParams {
 
 function formOf(body: unknown, file: Blob): FormData {
   const form = new FormData();
-  for (const [name, value] of Object.entries((body ?? {}) as Record<string, unknown>)) form.append(name, String(value));
+  for (const [name, value] of Object.entries((body ?? {}) as Record<string, unknown>))
+    form.append(name, String(value));
   form.append('file', file);
   return form;
 }

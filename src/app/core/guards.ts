@@ -16,6 +16,8 @@ export function mustBe(role: AccountRole): CanActivateFn {
     const router = inject(Router);
     const account = session.account();
     if (!account) return router.createUrlTree(['/account/sign-in'], { queryParams: { back: state.url } });
-    return account.role === role || account.role === 'administrator' ? true : router.createUrlTree(['/not-for-you']);
+    return account.role === role || account.role === 'administrator'
+      ? true
+      : router.createUrlTree(['/not-for-you']);
   };
 }

@@ -1,4 +1,10 @@
-import { FetchBackend, HttpBackend, HttpResponse, type HttpEvent, type HttpRequest } from '@angular/common/http';
+import {
+  FetchBackend,
+  HttpBackend,
+  HttpResponse,
+  type HttpEvent,
+  type HttpRequest,
+} from '@angular/common/http';
 import { Injectable, REQUEST, inject } from '@angular/core';
 import { map, type Observable } from 'rxjs';
 
@@ -21,7 +27,9 @@ export class InternalBackend implements HttpBackend {
       url: this.address + pathname + search,
       ...(cookie ? { setHeaders: { cookie } } : {}),
     });
-    return this.fetchBackend.handle(inward).pipe(map((event) => (event instanceof HttpResponse ? forThisReader(event) : event)));
+    return this.fetchBackend
+      .handle(inward)
+      .pipe(map((event) => (event instanceof HttpResponse ? forThisReader(event) : event)));
   }
 }
 

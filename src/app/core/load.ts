@@ -16,7 +16,9 @@ export const loading: LoadState<never> = { state: 'loading' };
 export function statesOf<T>(call: Observable<T>): Observable<LoadState<T>> {
   return call.pipe(
     map((value): LoadState<T> => ({ state: 'ready', value })),
-    catchError((error: unknown) => of<LoadState<T>>({ state: 'failed', problem: toApiProblem(error).problem })),
+    catchError((error: unknown) =>
+      of<LoadState<T>>({ state: 'failed', problem: toApiProblem(error).problem }),
+    ),
     startWith<LoadState<T>>(loading),
   );
 }
@@ -25,6 +27,11 @@ export function statesOf<T>(call: Observable<T>): Observable<LoadState<T>> {
  * Loads anew for each value of the source and forgets what it supersedes. Subscribes at once: where the server has
  * rendered the page, the first state in the browser is `ready` already and nothing flickers. Call it while constructing.
  */
-export function loadEach<P, T>(source: Observable<P>, load: (value: P) => Observable<T>): Signal<LoadState<T>> {
-  return toSignal(source.pipe(switchMap((value) => statesOf(load(value)))), { initialValue: loading as LoadState<T> });
+export function loadEach<P, T>(
+  source: Observable<P>,
+  load: (value: P) => Observable<T>,
+): Signal<LoadState<T>> {
+  return toSignal(source.pipe(switchMap((value) => statesOf(load(value)))), {
+    initialValue: loading as LoadState<T>,
+  });
 }

@@ -10,7 +10,9 @@ import { ShimloreTitles } from './titles';
     <div class="sl-sheet sl-narrow">
       <h1>Nothing at this address</h1>
       <p>The write-up may have moved, or the address has a slip in it.</p>
-      <p><a routerLink="/search">Search for the symptom</a> or <a routerLink="/hardware">look for the part</a>.</p>
+      <p>
+        <a routerLink="/search">Search for the symptom</a> or <a routerLink="/hardware">look for the part</a>.
+      </p>
     </div>
   `,
 })

@@ -1,4 +1,13 @@
-import { Injectable, PLATFORM_ID, REQUEST, TransferState, computed, inject, makeStateKey, signal } from '@angular/core';
+import {
+  Injectable,
+  PLATFORM_ID,
+  REQUEST,
+  TransferState,
+  computed,
+  inject,
+  makeStateKey,
+  signal,
+} from '@angular/core';
 import { isPlatformServer } from '@angular/common';
 import { firstValueFrom } from 'rxjs';
 import { accountRoutes, type Account } from '../../../shared/contract/accounts';
@@ -23,7 +32,9 @@ export class Session {
   /** Learns who is signed in. Where the API does not answer, the reader is taken for a visitor. */
   async load(): Promise<void> {
     if (this.onServer) {
-      const account = this.request?.headers.get('cookie')?.includes('shimlore.sid=') ? await this.ask() : null;
+      const account = this.request?.headers.get('cookie')?.includes('shimlore.sid=')
+        ? await this.ask()
+        : null;
       this.transfer.set(stateKey, account);
       this.current.set(account);
     } else if (this.transfer.hasKey(stateKey)) {

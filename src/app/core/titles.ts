@@ -1,6 +1,7 @@
 import { DOCUMENT, Injectable, REQUEST, RESPONSE_INIT, inject } from '@angular/core';
 import { Meta, Title } from '@angular/platform-browser';
 import { TitleStrategy, type RouterStateSnapshot } from '@angular/router';
+import type { Problem } from '../../../shared/contract/problem';
 
 const site = 'Shimlore';
 
@@ -32,7 +33,9 @@ export class ShimloreTitles extends TitleStrategy {
     const title = this.buildTitle(snapshot);
     this.title.setTitle(title ? `${title} · ${site}` : site);
     this.meta.removeTag('name="description"');
-    this.document.head.querySelectorAll('link[rel=canonical], script[data-page]').forEach((element) => element.remove());
+    this.document.head
+      .querySelectorAll('link[rel=canonical], script[data-page]')
+      .forEach((element) => element.remove());
   }
 
   /** What a page says of itself once it knows; call it from an effect, since a navigation ends after its page is made. */
@@ -48,13 +51,21 @@ export class ShimloreTitles extends TitleStrategy {
     return new URL(path, this.request?.url ?? this.document.location.href).href;
   }
 
+  /** What a page says of itself where it could not be fetched. */
+  failed(problem: Problem): void {
+    this.describe({ title: problem.status === 404 ? 'Nothing here' : problem.title });
+    this.answerWith(problem.status || 503);
+  }
+
   /** Marks the answer as "not found" (or another status) where the page is rendered on the server. */
   answerWith(status: number): void {
     if (this.responseInit) this.responseInit.status = status;
   }
 
   private link(path: string): void {
-    const link = this.document.head.querySelector('link[rel=canonical]') ?? this.document.head.appendChild(this.document.createElement('link'));
+    const link =
+      this.document.head.querySelector('link[rel=canonical]') ??
+      this.document.head.appendChild(this.document.createElement('link'));
     link.setAttribute('rel', 'canonical');
     link.setAttribute('href', this.addressOf(path));
   }

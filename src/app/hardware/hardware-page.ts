@@ -1,7 +1,28 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, computed, effect, inject, linkedSignal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  computed,
+  effect,
+  inject,
+  linkedSignal,
+} from '@angular/core';
 import { takeUntilDestroyed, toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router, RouterLink, type ParamMap, type Params } from '@angular/router';
-import { Subject, catchError, concat, debounceTime, defer, distinctUntilChanged, exhaustMap, map, of, startWith, switchMap, type Observable } from 'rxjs';
+import {
+  Subject,
+  catchError,
+  concat,
+  debounceTime,
+  defer,
+  distinctUntilChanged,
+  exhaustMap,
+  map,
+  of,
+  startWith,
+  switchMap,
+  type Observable,
+} from 'rxjs';
 import type { PartSummary } from '../../../shared/contract/hardware';
 import { PartKind, partKindWords } from '../../../shared/contract/vocabulary';
 import { toApiProblem } from '../core/api-problem';
@@ -41,7 +62,9 @@ export class HardwarePage {
 
   protected readonly kinds = PartKind.options.map((value) => ({ value, words: partKindWords[value] }));
   protected readonly kindWords = partKindWords;
-  protected readonly asked = toSignal(this.route.queryParamMap.pipe(map(askedIn)), { initialValue: { q: '', kind: null, maker: null } as Asked });
+  protected readonly asked = toSignal(this.route.queryParamMap.pipe(map(askedIn)), {
+    initialValue: { q: '', kind: null, maker: null } as Asked,
+  });
   protected readonly words = linkedSignal(() => this.asked().q);
   protected readonly makers = loadEach(of(undefined), () => this.hardware.makers());
   protected readonly makerOptions = computed(() => {
@@ -63,15 +86,20 @@ export class HardwarePage {
     const now = this.state();
     return now.state === 'failed' ? now.problem : null;
   });
-  protected readonly narrowed = computed(() => this.asked().q !== '' || this.asked().kind !== null || this.asked().maker !== null);
+  protected readonly narrowed = computed(
+    () => this.asked().q !== '' || this.asked().kind !== null || this.asked().maker !== null,
+  );
 
   constructor() {
-    this.typing.pipe(debounceTime(pauseInTyping), distinctUntilChanged(), takeUntilDestroyed(inject(DestroyRef))).subscribe((q) => this.ask({ q }));
+    this.typing
+      .pipe(debounceTime(pauseInTyping), distinctUntilChanged(), takeUntilDestroyed(inject(DestroyRef)))
+      .subscribe((q) => this.ask({ q }));
     const titles = inject(ShimloreTitles);
     effect(() =>
       titles.describe({
         title: 'Hardware',
-        description: 'Telescopes, focus motors, brackets, gear and belt drives, spacers and clamps, each with its revisions.',
+        description:
+          'Telescopes, focus motors, brackets, gear and belt drives, spacers and clamps, each with its revisions.',
         path: '/hardware',
       }),
     );
@@ -84,8 +112,15 @@ export class HardwarePage {
 
   /** Changes some of what is asked; an empty value takes it out of the address. */
   protected ask(change: Partial<Record<keyof Asked, string>>): void {
-    const queryParams: Params = Object.fromEntries(Object.entries(change).map(([name, value]) => [name, value === '' ? null : value]));
-    void this.router.navigate([], { relativeTo: this.route, queryParams, queryParamsHandling: 'merge', replaceUrl: 'q' in change });
+    const queryParams: Params = Object.fromEntries(
+      Object.entries(change).map(([name, value]) => [name, value === '' ? null : value]),
+    );
+    void this.router.navigate([], {
+      relativeTo: this.route,
+      queryParams,
+      queryParamsHandling: 'merge',
+      replaceUrl: 'q' in change,
+    });
   }
 
   protected more(): void {
@@ -96,19 +131,36 @@ export class HardwarePage {
     return defer(() => {
       let sofar: Found = { items: [], next: null };
       const page = (): Observable<LoadState<Found>> =>
-        this.hardware.parts({ q: asked.q || undefined, kind: asked.kind ?? undefined, maker: asked.maker ?? undefined, cursor: sofar.next ?? undefined, limit: pageSize }).pipe(
-          map(({ items, next }): LoadState<Found> => {
-            sofar = { items: [...sofar.items, ...items], next };
-            return { state: 'ready', value: sofar };
-          }),
-          catchError((error: unknown) => of<LoadState<Found>>({ state: 'failed', problem: toApiProblem(error).problem })),
-        );
-      return concat(of<LoadState<Found>>(loading), this.wantMore.pipe(startWith(undefined), exhaustMap(page)));
+        this.hardware
+          .parts({
+            q: asked.q || undefined,
+            kind: asked.kind ?? undefined,
+            maker: asked.maker ?? undefined,
+            cursor: sofar.next ?? undefined,
+            limit: pageSize,
+          })
+          .pipe(
+            map(({ items, next }): LoadState<Found> => {
+              sofar = { items: [...sofar.items, ...items], next };
+              return { state: 'ready', value: sofar };
+            }),
+            catchError((error: unknown) =>
+              of<LoadState<Found>>({ state: 'failed', problem: toApiProblem(error).problem }),
+            ),
+          );
+      return concat(
+        of<LoadState<Found>>(loading),
+        this.wantMore.pipe(startWith(undefined), exhaustMap(page)),
+      );
     });
   }
 }
 
 function askedIn(params: ParamMap): Asked {
   const kind = PartKind.safeParse(params.get('kind'));
-  return { q: (params.get('q') ?? '').slice(0, 100), kind: kind.success ? kind.data : null, maker: params.get('maker') };
+  return {
+    q: (params.get('q') ?? '').slice(0, 100),
+    kind: kind.success ? kind.data : null,
+    maker: params.get('maker'),
+  };
 }

@@ -1,6 +1,12 @@
 import { Injectable, inject } from '@angular/core';
 import type { Observable } from 'rxjs';
-import { hardwareRoutes, type MakerRef, type PartPage, type PartSummary, type Symptom } from '../../../shared/contract/hardware';
+import {
+  hardwareRoutes,
+  type MakerRef,
+  type PartPage,
+  type PartSummary,
+  type Symptom,
+} from '../../../shared/contract/hardware';
 import type { CallOf } from '../../../shared/contract/route';
 import { Api } from '../core/api';
 
@@ -9,7 +15,9 @@ import { Api } from '../core/api';
 export class Hardware {
   private readonly api = inject(Api);
 
-  parts(query: CallOf<typeof hardwareRoutes.listParts>['query']): Observable<{ items: PartSummary[]; next: string | null }> {
+  parts(
+    query: CallOf<typeof hardwareRoutes.listParts>['query'],
+  ): Observable<{ items: PartSummary[]; next: string | null }> {
     return this.api.call(hardwareRoutes.listParts, { query });
   }
 

@@ -33,7 +33,10 @@ export class PartPage {
   protected readonly kinds = partKindWords;
   protected readonly now = new Date();
   protected readonly problem = signal<Problem | null>(null);
-  protected readonly loaded = loadEach(inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')), (slug) => this.hardware.part(slug));
+  protected readonly loaded = loadEach(
+    inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
+    (slug) => this.hardware.part(slug),
+  );
   protected readonly part = computed(() => {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
@@ -44,7 +47,7 @@ export class PartPage {
   constructor() {
     effect(() => {
       const now = this.loaded();
-      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'failed') this.titles.failed(now.problem);
       if (now.state === 'ready') this.describe(now.value);
     });
   }
@@ -53,7 +56,9 @@ export class PartPage {
     try {
       this.problem.set(null);
       await this.bench.add(summaryOf(part), revisionId);
-      const entry = this.bench.items().find((item) => item.part.id === part.id && (item.revision?.id ?? null) === revisionId);
+      const entry = this.bench
+        .items()
+        .find((item) => item.part.id === part.id && (item.revision?.id ?? null) === revisionId);
       if (entry) this.undo.offer(`${part.name} is on your bench.`, () => void this.bench.remove(entry));
     } catch (error) {
       this.problem.set(toApiProblem(error).problem);
@@ -74,7 +79,11 @@ export class PartPage {
         category: partKindWords[part.kind],
         url: this.titles.addressOf(path),
         manufacturer: { '@type': 'Organization', name: part.maker.name },
-        hasVariant: part.revisions.map((revision) => ({ '@type': 'ProductModel', name: `${part.name} ${revision.label}`, releaseDate: revision.soldFrom ?? undefined })),
+        hasVariant: part.revisions.map((revision) => ({
+          '@type': 'ProductModel',
+          name: `${part.name} ${revision.label}`,
+          releaseDate: revision.soldFrom ?? undefined,
+        })),
       },
     });
   }
@@ -82,5 +91,14 @@ export class PartPage {
 
 function summaryOf(part: Part): PartSummary {
   const { id, slug, name, kind, maker, about, revisions, writeUps } = part;
-  return { id, slug, name, kind, maker, about, revisions: revisions.map(({ id: revisionId, partId, label }) => ({ id: revisionId, partId, label })), writeUps: writeUps.length };
+  return {
+    id,
+    slug,
+    name,
+    kind,
+    maker,
+    about,
+    revisions: revisions.map(({ id: revisionId, partId, label }) => ({ id: revisionId, partId, label })),
+    writeUps: writeUps.length,
+  };
 }

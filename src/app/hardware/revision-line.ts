@@ -29,14 +29,21 @@ export function timeLineOf(revisions: readonly Revision[], now: Date): TimeLine 
   const undated = revisions.filter((revision) => revision.soldFrom === null);
   if (dated.length === 0) return { spans: [], years: [], undated };
   const first = Math.min(...dated.map((revision) => instant(revision.soldFrom!)));
-  const last = Math.max(now.getTime(), ...dated.map((revision) => instant(revision.soldTo ?? revision.soldFrom!) + day));
+  const last = Math.max(
+    now.getTime(),
+    ...dated.map((revision) => instant(revision.soldTo ?? revision.soldFrom!) + day),
+  );
   const at = (time: number): number => ((time - first) / (last - first)) * 100;
   const spans = dated.map((revision): RevisionSpan => {
     const start = at(instant(revision.soldFrom!));
     const end = revision.soldTo === null ? 100 : at(instant(revision.soldTo));
     return { revision, start, length: Math.max(end - start, 1), sold: revision.soldTo === null };
   });
-  return { spans, years: yearsBetween(first, last).map((year) => ({ year, at: at(Date.UTC(year, 0, 1)) })), undated };
+  return {
+    spans,
+    years: yearsBetween(first, last).map((year) => ({ year, at: at(Date.UTC(year, 0, 1)) })),
+    undated,
+  };
 }
 
 function yearsBetween(first: number, last: number): number[] {

@@ -11,11 +11,20 @@ import { timeLineOf } from './revision-line';
     @if (line.spans.length) {
       <div class="line" role="img" [attr.aria-label]="words()">
         <div class="years">
-          @for (year of line.years; track year.year) {<span [style.inset-inline-start.%]="year.at">{{ year.year }}</span>}
+          @for (year of line.years; track year.year) {
+            <span [style.inset-inline-start.%]="year.at">{{ year.year }}</span>
+          }
         </div>
         @for (span of line.spans; track span.revision.id) {
           <div class="row">
-            <a class="span" [href]="path() + '#rev-' + span.revision.id" [class.sold]="span.sold" [style.inset-inline-start.%]="span.start" [style.inline-size.%]="span.length" tabindex="-1"></a>
+            <a
+              class="span"
+              [href]="path() + '#rev-' + span.revision.id"
+              [class.sold]="span.sold"
+              [style.inset-inline-start.%]="span.start"
+              [style.inline-size.%]="span.length"
+              tabindex="-1"
+            ></a>
             <b [style.inset-inline-start.%]="span.start">{{ span.revision.label }}</b>
           </div>
         }
@@ -23,14 +32,50 @@ import { timeLineOf } from './revision-line';
     }
   `,
   styles: `
-    :host { display: block; }
-    .line { position: relative; padding-block: 1.75rem 0.25rem; border-block-end: 1px solid var(--sl-ink); overflow: hidden; }
-    .years { position: absolute; inset: 0; }
-    .years span { position: absolute; inset-block: 0; border-inline-start: 1px solid var(--sl-hair); padding-inline-start: 0.3rem; font: 400 0.875rem/1.4 var(--sl-mono); color: var(--sl-quiet); }
-    .row { position: relative; block-size: 2.1rem; }
-    .row b { position: absolute; inset-block-end: 0.85rem; padding-inline-end: 0.4rem; font: 600 0.9375rem/1 var(--sl-mono); color: var(--sl-ink); white-space: nowrap; }
-    .span { position: absolute; inset-block-end: 0.25rem; block-size: 0.45rem; border: 1px solid var(--sl-ink); background: var(--sl-paper); }
-    .sold { background: var(--sl-accent); border-inline-end: 0; }
+    :host {
+      display: block;
+    }
+    .line {
+      position: relative;
+      padding-block: 1.75rem 0.25rem;
+      border-block-end: 1px solid var(--sl-ink);
+      overflow: hidden;
+    }
+    .years {
+      position: absolute;
+      inset: 0;
+    }
+    .years span {
+      position: absolute;
+      inset-block: 0;
+      border-inline-start: 1px solid var(--sl-hair);
+      padding-inline-start: 0.3rem;
+      font: 400 0.875rem/1.4 var(--sl-mono);
+      color: var(--sl-quiet);
+    }
+    .row {
+      position: relative;
+      block-size: 2.1rem;
+    }
+    .row b {
+      position: absolute;
+      inset-block-end: 0.85rem;
+      padding-inline-end: 0.4rem;
+      font: 600 1.1rem/1 var(--sl-heading);
+      color: var(--sl-ink);
+      white-space: nowrap;
+    }
+    .span {
+      position: absolute;
+      inset-block-end: 0.25rem;
+      block-size: 0.45rem;
+      border: 1px solid var(--sl-ink);
+      background: var(--sl-paper);
+    }
+    .sold {
+      background: var(--sl-accent);
+      border-inline-end: 0;
+    }
   `,
 })
 export class RevisionTimeLine {
@@ -41,7 +86,10 @@ export class RevisionTimeLine {
   protected readonly timeLine = computed(() => timeLineOf(this.revisions(), this.now()));
   protected readonly words = computed(() =>
     this.timeLine()
-      .spans.map(({ revision }) => `${revision.label}: from ${revision.soldFrom} ${revision.soldTo ? `until ${revision.soldTo}` : 'on'}`)
+      .spans.map(
+        ({ revision }) =>
+          `${revision.label}: from ${revision.soldFrom} ${revision.soldTo ? `until ${revision.soldTo}` : 'on'}`,
+      )
       .join('; '),
   );
 }

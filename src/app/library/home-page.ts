@@ -1,7 +1,17 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
 import { toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { Router, RouterLink } from '@angular/router';
-import { Subject, combineLatest, debounceTime, distinctUntilChanged, map, of, skip, startWith, switchMap } from 'rxjs';
+import {
+  Subject,
+  combineLatest,
+  debounceTime,
+  distinctUntilChanged,
+  map,
+  of,
+  skip,
+  startWith,
+  switchMap,
+} from 'rxjs';
 import { BenchGlance } from '../bench/bench-glance';
 import { BenchStore } from '../bench/bench-store';
 import { loading } from '../core/load';
@@ -29,22 +39,39 @@ export class HomePage {
   private readonly noMore = new Subject<void>();
 
   protected readonly words = signal('');
-  private readonly mine = toObservable(this.bench.revisionIdsToSend).pipe(skip(1), startWith(this.bench.revisionIdsToSend()));
+  private readonly mine = toObservable(this.bench.revisionIdsToSend).pipe(
+    skip(1),
+    startWith(this.bench.revisionIdsToSend()),
+  );
 
   protected readonly recent = toSignal(
     this.mine.pipe(switchMap((mine) => this.search.pages(emptySearch, mine, this.noMore, shownAtOnce))),
     { initialValue: loading },
   );
   protected readonly found = toSignal(
-    combineLatest([toObservable(this.words).pipe(map((words) => words.trim()), debounceTime(150), distinctUntilChanged()), this.mine]).pipe(
-      switchMap(([q, mine]) => (q === '' ? of(loading) : this.search.pages({ ...emptySearch, q }, mine, this.noMore, shownAtOnce))),
+    combineLatest([
+      toObservable(this.words).pipe(
+        map((words) => words.trim()),
+        debounceTime(150),
+        distinctUntilChanged(),
+      ),
+      this.mine,
+    ]).pipe(
+      switchMap(([q, mine]) =>
+        q === '' ? of(loading) : this.search.pages({ ...emptySearch, q }, mine, this.noMore, shownAtOnce),
+      ),
     ),
     { initialValue: loading },
   );
   protected readonly typed = computed(() => this.words().trim() !== '');
   protected readonly state = computed(() => (this.typed() ? this.found() : this.recent()));
   protected readonly address = computed(() => addressOfSearch({ ...emptySearch, q: this.words() }));
-  protected readonly examples = ['bracket rocks on a raised lip', '22.5 lip 19.5 recess', 'belt slips when cold', 'gear grinds at one spot'];
+  protected readonly examples = [
+    'bracket rocks on a raised lip',
+    '22.5 lip 19.5 recess',
+    'belt slips when cold',
+    'gear grinds at one spot',
+  ];
 
   constructor() {
     const titles = inject(ShimloreTitles);

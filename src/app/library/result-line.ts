@@ -13,7 +13,16 @@ import { TextRuns } from '../ui/text-runs/text-runs';
 /** One write-up among the results: whether it holds for the reader first, then what it is about and what it offers. */
 @Component({
   selector: 'sl-result-line',
-  imports: [ApplicabilityLabel, DatePipe, PermanenceLabel, PhotoView, RevisionList, RouterLink, StandingLabel, TextRuns],
+  imports: [
+    ApplicabilityLabel,
+    DatePipe,
+    PermanenceLabel,
+    PhotoView,
+    RevisionList,
+    RouterLink,
+    StandingLabel,
+    TextRuns,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './result-line.html',
   styleUrl: './result-line.scss',

@@ -1,7 +1,26 @@
-import { ChangeDetectionStrategy, Component, DestroyRef, ElementRef, computed, effect, inject, linkedSignal, viewChild } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  DestroyRef,
+  ElementRef,
+  computed,
+  effect,
+  inject,
+  linkedSignal,
+  viewChild,
+} from '@angular/core';
 import { takeUntilDestroyed, toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router } from '@angular/router';
-import { Subject, combineLatest, debounceTime, distinctUntilChanged, map, skip, startWith, switchMap } from 'rxjs';
+import {
+  Subject,
+  combineLatest,
+  debounceTime,
+  distinctUntilChanged,
+  map,
+  skip,
+  startWith,
+  switchMap,
+} from 'rxjs';
 import type { SearchResults } from '../../../shared/contract/search';
 import { BenchStore } from '../bench/bench-store';
 import { loading, type LoadState } from '../core/load';
@@ -11,7 +30,15 @@ import { ProblemNote } from '../ui/problem-note/problem-note';
 import { FilterPanel } from './filter-panel';
 import { ResultLine } from './result-line';
 import { Search } from './search';
-import { addressOfSearch, chosenCount, emptySearch, searchStateOf, toggled, type FilterName, type SearchState } from './search-state';
+import {
+  addressOfSearch,
+  chosenCount,
+  emptySearch,
+  searchStateOf,
+  toggled,
+  type FilterName,
+  type SearchState,
+} from './search-state';
 import { SymptomField } from './symptom-field';
 
 const pauseInTyping = 150;
@@ -34,8 +61,13 @@ export class SearchPage {
   private readonly asked = new Subject<void>();
   private readonly sheet = viewChild.required<ElementRef<HTMLDialogElement>>('sheet');
 
-  protected readonly asking = toSignal(this.route.queryParamMap.pipe(map(searchStateOf)), { initialValue: emptySearch });
-  private readonly mine = toObservable(this.bench.revisionIdsToSend).pipe(skip(1), startWith(this.bench.revisionIdsToSend()));
+  protected readonly asking = toSignal(this.route.queryParamMap.pipe(map(searchStateOf)), {
+    initialValue: emptySearch,
+  });
+  private readonly mine = toObservable(this.bench.revisionIdsToSend).pipe(
+    skip(1),
+    startWith(this.bench.revisionIdsToSend()),
+  );
 
   protected readonly results = toSignal(
     combineLatest([
@@ -104,7 +136,11 @@ export class SearchPage {
   }
 
   private go(state: SearchState, replaceUrl: boolean): void {
-    void this.router.navigate([], { relativeTo: this.route, queryParams: addressOfSearch(state), replaceUrl });
+    void this.router.navigate([], {
+      relativeTo: this.route,
+      queryParams: addressOfSearch(state),
+      replaceUrl,
+    });
   }
 }
 
@@ -123,7 +159,13 @@ const groupTitles = {
 function groupsOf(results: SearchResults | undefined): { title: string; hits: SearchResults['items'] }[] {
   if (!results) return [];
   const groups = (Object.keys(groupTitles) as (keyof typeof groupTitles)[])
-    .map((verdict) => ({ verdict, title: groupTitles[verdict] as string, hits: results.items.filter((hit) => hit.applicability.verdict === verdict) }))
+    .map((verdict) => ({
+      verdict,
+      title: groupTitles[verdict] as string,
+      hits: results.items.filter((hit) => hit.applicability.verdict === verdict),
+    }))
     .filter((group) => group.hits.length > 0);
-  return groups.length === 1 && groups[0]?.verdict === 'not-yours' ? [{ title: '', hits: groups[0].hits }] : groups;
+  return groups.length === 1 && groups[0]?.verdict === 'not-yours'
+    ? [{ title: '', hits: groups[0].hits }]
+    : groups;
 }

@@ -3,12 +3,30 @@ import type { SearchQuery } from '../../../shared/contract/search';
 import { FixKind, Permanence, Standing } from '../../../shared/contract/vocabulary';
 
 /** What is searched for, as it stands in the address. */
-export type SearchState = Pick<SearchQuery, 'q' | 'part' | 'revision' | 'symptom' | 'permanence' | 'standing' | 'kind'>;
+export type SearchState = Pick<
+  SearchQuery,
+  'q' | 'part' | 'revision' | 'symptom' | 'permanence' | 'standing' | 'kind'
+>;
 
 export type FilterName = Exclude<keyof SearchState, 'q'>;
-export const filterNames: readonly FilterName[] = ['part', 'revision', 'symptom', 'permanence', 'standing', 'kind'];
+export const filterNames: readonly FilterName[] = [
+  'part',
+  'revision',
+  'symptom',
+  'permanence',
+  'standing',
+  'kind',
+];
 
-export const emptySearch: SearchState = { q: '', part: [], revision: [], symptom: [], permanence: [], standing: [], kind: [] };
+export const emptySearch: SearchState = {
+  q: '',
+  part: [],
+  revision: [],
+  symptom: [],
+  permanence: [],
+  standing: [],
+  kind: [],
+};
 
 /** Reads an address, leaving out what means nothing, so that an old or mangled link still shows something. */
 export function searchStateOf(params: ParamMap): SearchState {
@@ -17,7 +35,11 @@ export function searchStateOf(params: ParamMap): SearchState {
   return {
     q: (params.get('q') ?? '').slice(0, 200),
     part: params.getAll('part').filter(isSlug).slice(0, 20),
-    revision: params.getAll('revision').map(Number).filter((id) => Number.isSafeInteger(id) && id > 0).slice(0, 40),
+    revision: params
+      .getAll('revision')
+      .map(Number)
+      .filter((id) => Number.isSafeInteger(id) && id > 0)
+      .slice(0, 40),
     symptom: params.getAll('symptom').filter(isSlug).slice(0, 20),
     permanence: known('permanence', Permanence.options),
     standing: known('standing', Standing.options),

@@ -22,8 +22,13 @@ export class EditionsPage {
   private readonly titles = inject(ShimloreTitles);
   private readonly writeUps = inject(WriteUps);
 
-  protected readonly slug = toSignal(this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')), { initialValue: '' });
-  protected readonly loaded = loadEach(this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')), (slug) => this.writeUps.editions(slug));
+  protected readonly slug = toSignal(this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')), {
+    initialValue: '',
+  });
+  protected readonly loaded = loadEach(
+    this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')),
+    (slug) => this.writeUps.editions(slug),
+  );
   protected readonly editions = computed(() => {
     const now = this.loaded();
     return now.state === 'ready' ? now.value.items : null;
@@ -34,9 +39,13 @@ export class EditionsPage {
   constructor() {
     effect(() => {
       const now = this.loaded();
-      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'failed') this.titles.failed(now.problem);
       const title = this.editions()?.[0]?.title;
-      if (title) this.titles.describe({ title: `Editions of “${title}”`, description: `Who changed “${title}”, when and why.` });
+      if (title)
+        this.titles.describe({
+          title: `Editions of “${title}”`,
+          description: `Who changed “${title}”, when and why.`,
+        });
     });
   }
 

@@ -17,9 +17,13 @@ export function readingText(value: number, uncertainty: number | null, unit: Rea
   return `${minus(value.toFixed(decimals))} ± ${uncertainty.toFixed(decimals)} ${readingUnitSymbols[unit]}`;
 }
 
-/** "tilt at most 0.05 mm". */
-export function acceptanceText(acceptance: Acceptance): string {
-  return `${acceptance.quantity} ${acceptance.comparison === 'at-most' ? 'at most' : 'at least'} ${withUnit(acceptance.value, acceptance.unit)}`;
+/** What a trial must reach, in words and figure: "tilt at most", "0.05 mm". */
+export function acceptanceParts(acceptance: Acceptance): { words: string; figure: string } {
+  const comparison = acceptance.comparison === 'at-most' ? 'at most' : 'at least';
+  return {
+    words: `${acceptance.quantity} ${comparison}`,
+    figure: withUnit(acceptance.value, acceptance.unit),
+  };
 }
 
 function signed(value: number): string {

@@ -17,8 +17,15 @@ import { WriteUps } from './write-ups';
     @if (page(); as page) {
       @if (page.edition.number < page.latestNumber) {
         <p class="older" role="note">
-          This is edition {{ page.edition.number }}, kept as it was. <a [routerLink]="['/write-ups', page.slug]">Edition {{ page.latestNumber }} is the one that counts now</a>;
-          <a [routerLink]="['/write-ups', page.slug, 'compare']" [queryParams]="{ from: page.edition.number, to: page.latestNumber }">see what changed</a>.
+          This is edition {{ page.edition.number }}, kept as it was.
+          <a [routerLink]="['/write-ups', page.slug]"
+            >Edition {{ page.latestNumber }} is the one that counts now</a
+          >;
+          <a
+            [routerLink]="['/write-ups', page.slug, 'compare']"
+            [queryParams]="{ from: page.edition.number, to: page.latestNumber }"
+            >see what changed</a
+          >.
         </p>
       }
       <sl-edition-page [view]="page.view" />
@@ -28,8 +35,15 @@ import { WriteUps } from './write-ups';
     }
   `,
   styles: `
-    .older { border: 1px dashed var(--sl-ink); padding: 0.75rem 1.25rem; }
-    .block { display: block; max-inline-size: 24rem; margin: 2.5rem 0 0 auto; }
+    .older {
+      border: 1px dashed var(--sl-ink);
+      padding: 0.75rem 1.25rem;
+    }
+    .block {
+      display: block;
+      max-inline-size: 24rem;
+      margin: 2.5rem 0 0 auto;
+    }
   `,
 })
 export class OldEditionPage {
@@ -37,7 +51,9 @@ export class OldEditionPage {
   private readonly writeUps = inject(WriteUps);
 
   protected readonly loaded = loadEach(
-    inject(ActivatedRoute).paramMap.pipe(map((params) => ({ slug: params.get('slug') ?? '', number: Number(params.get('number')) }))),
+    inject(ActivatedRoute).paramMap.pipe(
+      map((params) => ({ slug: params.get('slug') ?? '', number: Number(params.get('number')) })),
+    ),
     ({ slug, number }) => this.writeUps.edition(slug, number),
   );
   protected readonly page = computed(() => {
@@ -48,10 +64,14 @@ export class OldEditionPage {
   constructor() {
     effect(() => {
       const now = this.loaded();
-      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'failed') this.titles.failed(now.problem);
       if (now.state === 'ready') {
         const { slug, edition, view } = now.value;
-        this.titles.describe({ title: `${view.title} (edition ${edition.number})`, description: view.summary, path: `/write-ups/${slug}` });
+        this.titles.describe({
+          title: `${view.title} (edition ${edition.number})`,
+          description: view.summary,
+          path: `/write-ups/${slug}`,
+        });
       }
     });
   }

@@ -22,7 +22,11 @@ export function writeUpData(page: WriteUpPage, address: string): object {
 function productsOf(view: EditionView): object[] {
   const parts = view.joints.flatMap((joint) => [joint.a.part, joint.b.part]);
   const once = parts.filter((part, index) => parts.findIndex((other) => other.id === part.id) === index);
-  return once.map((part) => ({ '@type': 'Product', name: part.name, manufacturer: { '@type': 'Organization', name: part.maker.name } }));
+  return once.map((part) => ({
+    '@type': 'Product',
+    name: part.name,
+    manufacturer: { '@type': 'Organization', name: part.maker.name },
+  }));
 }
 
 function howTo(fix: FixView, address: string): object {
@@ -32,6 +36,10 @@ function howTo(fix: FixView, address: string): object {
     url: `${address}#fix-${fix.key}`,
     tool: fix.tools.map((name) => ({ '@type': 'HowToTool', name })),
     supply: fix.materials.map((name) => ({ '@type': 'HowToSupply', name })),
-    step: fix.steps.map((step, index) => ({ '@type': 'HowToStep', position: index + 1, text: step.text.source })),
+    step: fix.steps.map((step, index) => ({
+      '@type': 'HowToStep',
+      position: index + 1,
+      text: step.text.source,
+    })),
   };
 }

@@ -1,4 +1,13 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, linkedSignal, output, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  linkedSignal,
+  output,
+  signal,
+} from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { firstValueFrom } from 'rxjs';
@@ -28,7 +37,10 @@ export class TrialForm {
   private readonly writeUps = inject(WriteUps);
   private readonly undo = inject(Undo);
 
-  protected readonly outcomes = TrialOutcome.options.map((value) => ({ value, words: trialOutcomeWords[value] }));
+  protected readonly outcomes = TrialOutcome.options.map((value) => ({
+    value,
+    words: trialOutcomeWords[value],
+  }));
   protected readonly units = readingUnitSymbols;
   protected readonly open = signal(false);
   protected readonly sending = signal(false);
@@ -40,17 +52,25 @@ export class TrialForm {
     figure: new FormControl<number | null>(null),
   });
   private readonly fixKey = toSignal(this.form.controls.fixKey.valueChanges, { initialValue: '' });
-  protected readonly acceptance = computed(() => this.view().fixes.find((fix) => fix.key === this.fixKey())?.acceptance ?? null);
+  protected readonly acceptance = computed(
+    () => this.view().fixes.find((fix) => fix.key === this.fixKey())?.acceptance ?? null,
+  );
 
   protected readonly parts = computed(() => {
     const sides = this.view().joints.flatMap((joint) => [joint.a, joint.b]);
     return sides
       .filter((side, index) => sides.findIndex((other) => other.part.id === side.part.id) === index)
-      .map((side) => ({ id: side.part.id, name: side.part.name, revisions: [...side.revisions, ...side.notKnown].sort((one, other) => one.id - other.id) }));
+      .map((side) => ({
+        id: side.part.id,
+        name: side.part.name,
+        revisions: [...side.revisions, ...side.notKnown].sort((one, other) => one.id - other.id),
+      }));
   });
   /** Revision of each part, by part id; the bench is the first guess. */
   protected readonly revisions = linkedSignal<ReadonlyMap<number, number>>(() => {
-    const mine = this.bench.owned().flatMap((item) => (item.revision ? [[item.partId, item.revision.id] as const] : []));
+    const mine = this.bench
+      .owned()
+      .flatMap((item) => (item.revision ? [[item.partId, item.revision.id] as const] : []));
     const asked = new Set(this.parts().map((part) => part.id));
     return new Map(mine.filter(([partId]) => asked.has(partId)));
   });
@@ -77,7 +97,13 @@ export class TrialForm {
     const { fixKey, outcome, note, figure } = this.form.getRawValue();
     try {
       const trial = await firstValueFrom(
-        this.writeUps.reportTrial(this.slug(), { fixKey, outcome, note, figure: this.acceptance() ? figure : null, revisionIds: [...this.revisions().values()] }),
+        this.writeUps.reportTrial(this.slug(), {
+          fixKey,
+          outcome,
+          note,
+          figure: this.acceptance() ? figure : null,
+          revisionIds: [...this.revisions().values()],
+        }),
       );
       this.reported.emit(trial);
       this.open.set(false);

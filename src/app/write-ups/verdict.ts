@@ -24,14 +24,23 @@ const verdicts = {
   host: { '[class]': 'applicability().verdict' },
   template: `
     <p class="word">{{ title() }}</p>
-    @if (applicability().reasons.length) {<sl-applicability-label [applicability]="applicability()" />}
+    @if (applicability().reasons.length) {
+      <sl-applicability-label [applicability]="applicability()" />
+    }
     @if (missing().length) {
       <div class="ask sl-off-paper">
         @for (side of missing(); track side.part.id) {
           <fieldset>
             <legend>{{ side.part.name }}</legend>
             @for (revision of side.revisions; track revision.id) {
-              <button type="button" class="sl-plain-button" [attr.aria-label]="side.part.name + ' ' + revision.label + ' is mine'" (click)="own(side, revision.id)">{{ revision.label }}</button>
+              <button
+                type="button"
+                class="sl-plain-button"
+                [attr.aria-label]="side.part.name + ' ' + revision.label + ' is mine'"
+                (click)="own(side, revision.id)"
+              >
+                {{ revision.label }}
+              </button>
             }
             <a class="tell" [routerLink]="['/parts', side.part.slug]">How to tell</a>
           </fieldset>
@@ -41,16 +50,63 @@ const verdicts = {
     <sl-problem-note [problem]="problem()" />
   `,
   styles: `
-    :host { display: block; border: 2px solid var(--sl-ink); padding: 0.75rem 1.25rem; margin-block-end: 1.75rem; background: var(--sl-paper); }
-    :host(.holds) { border-color: var(--sl-accent); background: var(--sl-accent-wash); }
-    :host(.not-known), :host(.not-yours) { border-style: dashed; border-width: 1px; }
-    .word { margin: 0 0 0.15rem; font: 600 1.35rem/1.25 var(--sl-heading); color: var(--sl-ink); }
-    .ask { display: flex; flex-wrap: wrap; gap: 0.5rem 2rem; margin-block-start: 0.4rem; }
-    fieldset { display: flex; flex-wrap: wrap; align-items: center; gap: 0.4rem; border: 0; padding: 0; margin: 0; min-inline-size: 0; }
-    legend { padding: 0; font-weight: 600; }
-    .sl-plain-button { min-inline-size: 2.75rem; padding-inline: 0.75rem; font-family: var(--sl-mono); }
-    .tell { display: inline-flex; align-items: center; min-block-size: 2.75rem; padding-inline: 0.5rem; }
-    @media print { :host { border: 1px solid; } }
+    :host {
+      display: block;
+      border: 2px solid var(--sl-ink);
+      padding: 0.75rem 1.25rem;
+      margin-block-end: 1.75rem;
+      background: var(--sl-paper);
+    }
+    :host(.holds) {
+      border-color: var(--sl-accent);
+      background: var(--sl-accent-wash);
+    }
+    :host(.not-known),
+    :host(.not-yours) {
+      border-style: dashed;
+      border-width: 1px;
+    }
+    .word {
+      margin: 0 0 0.15rem;
+      font: 600 1.35rem/1.25 var(--sl-heading);
+      color: var(--sl-ink);
+    }
+    .ask {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 0.5rem 2rem;
+      margin-block-start: 0.4rem;
+    }
+    fieldset {
+      display: flex;
+      flex-wrap: wrap;
+      align-items: center;
+      gap: 0.4rem;
+      border: 0;
+      padding: 0;
+      margin: 0;
+      min-inline-size: 0;
+    }
+    legend {
+      padding: 0;
+      font-weight: 600;
+    }
+    .sl-plain-button {
+      min-inline-size: 2.75rem;
+      padding-inline: 0.75rem;
+      font: 600 1.15rem/1 var(--sl-heading);
+    }
+    .tell {
+      display: inline-flex;
+      align-items: center;
+      min-block-size: 2.75rem;
+      padding-inline: 0.5rem;
+    }
+    @media print {
+      :host {
+        border: 1px solid;
+      }
+    }
   `,
 })
 export class Verdict {
@@ -61,7 +117,9 @@ export class Verdict {
 
   private readonly sides = computed(() => {
     const sides = this.joints().flatMap((joint) => [joint.a, joint.b]);
-    return sides.filter((side, index) => sides.findIndex((other) => other.part.id === side.part.id) === index);
+    return sides.filter(
+      (side, index) => sides.findIndex((other) => other.part.id === side.part.id) === index,
+    );
   });
   protected readonly applicability = computed(() =>
     applicabilityOf(
@@ -95,5 +153,7 @@ export class Verdict {
 
 /** Revisions get their identities in the order in which they are announced. */
 function inOrder(revisions: readonly RevisionRef[]): RevisionRef[] {
-  return revisions.map(({ id, partId, label }) => ({ id, partId, label })).sort((one, other) => one.id - other.id);
+  return revisions
+    .map(({ id, partId, label }) => ({ id, partId, label }))
+    .sort((one, other) => one.id - other.id);
 }

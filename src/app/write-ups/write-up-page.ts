@@ -30,29 +30,45 @@ export class WriteUpPageView {
   private readonly window = inject(DOCUMENT).defaultView;
   protected readonly session = inject(Session);
 
-  protected readonly loaded = loadEach(inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')), (slug) => this.writeUps.read(slug));
+  protected readonly loaded = loadEach(
+    inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
+    (slug) => this.writeUps.read(slug),
+  );
   protected readonly page = computed(() => {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
   });
   protected readonly trials = linkedSignal<readonly Trial[]>(() => this.page()?.trials ?? []);
-  protected readonly fixTitles = computed(() => this.page()?.view.fixes.map(({ key, title }) => ({ key, title })) ?? []);
+  protected readonly fixTitles = computed(
+    () => this.page()?.view.fixes.map(({ key, title }) => ({ key, title })) ?? [],
+  );
 
   constructor() {
     effect(() => {
       const now = this.loaded();
-      if (now.state === 'failed') this.titles.answerWith(now.problem.status || 503);
+      if (now.state === 'failed') this.titles.failed(now.problem);
       if (now.state === 'ready') {
         const path = `/write-ups/${now.value.slug}`;
         const { title, summary } = now.value.view;
-        this.titles.describe({ title, description: summary, path, data: writeUpData(now.value, this.titles.addressOf(path)) });
+        this.titles.describe({
+          title,
+          description: summary,
+          path,
+          data: writeUpData(now.value, this.titles.addressOf(path)),
+        });
       }
     });
   }
 
   /** One person has one trial of a fix: theirs replaces the one before. */
   protected take(trial: Trial): void {
-    this.trials.update((trials) => [trial, ...trials.filter((other) => other.id !== trial.id && !(other.person.id === trial.person.id && other.fixKey === trial.fixKey))]);
+    this.trials.update((trials) => [
+      trial,
+      ...trials.filter(
+        (other) =>
+          other.id !== trial.id && !(other.person.id === trial.person.id && other.fixKey === trial.fixKey),
+      ),
+    ]);
   }
 
   protected print(): void {

@@ -3,7 +3,18 @@ import type { Routes } from '@angular/router';
 export const routes: Routes = [
   { path: '', pathMatch: 'full', redirectTo: '/search' },
   { path: ':slug', loadComponent: () => import('./write-up-page').then((m) => m.WriteUpPageView) },
-  { path: ':slug/editions', title: 'Editions', loadComponent: () => import('./editions-page').then((m) => m.EditionsPage) },
-  { path: ':slug/editions/:number', loadComponent: () => import('./old-edition-page').then((m) => m.OldEditionPage) },
-  { path: ':slug/compare', title: 'Two editions', loadComponent: () => import('./compare-page').then((m) => m.ComparePage) },
+  {
+    path: ':slug/editions',
+    title: 'Editions',
+    loadComponent: () => import('./editions-page').then((m) => m.EditionsPage),
+  },
+  {
+    path: ':slug/editions/:number',
+    loadComponent: () => import('./old-edition-page').then((m) => m.OldEditionPage),
+  },
+  {
+    path: ':slug/compare',
+    title: 'Two editions',
+    loadComponent: () => import('./compare-page').then((m) => m.ComparePage),
+  },
 ];

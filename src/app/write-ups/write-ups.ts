@@ -1,7 +1,13 @@
 import { Injectable, inject } from '@angular/core';
 import type { Observable } from 'rxjs';
 import type { CallOf, ResponseOf } from '../../../shared/contract/route';
-import { writeUpRoutes, type EditionComparison, type EditionLine, type Trial, type WriteUpPage } from '../../../shared/contract/write-ups';
+import {
+  writeUpRoutes,
+  type EditionComparison,
+  type EditionLine,
+  type Trial,
+  type WriteUpPage,
+} from '../../../shared/contract/write-ups';
 import { Api } from '../core/api';
 
 /** Published write-ups, their editions and trials. Failures are `ApiProblem`s. */

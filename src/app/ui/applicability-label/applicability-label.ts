@@ -22,16 +22,36 @@ const icons: Record<Applicability['verdict'], IconName> = {
     }
   `,
   styles: `
-    :host { display: flex; flex-wrap: wrap; gap: 0.15rem 1.25rem; }
-    .line { display: inline-flex; align-items: baseline; gap: 0.4rem; font-weight: 600; color: var(--sl-quiet); }
-    .line sl-icon { align-self: center; }
-    .holds { color: var(--sl-accent); }
-    .written-for-others { color: var(--sl-text); }
+    :host {
+      display: flex;
+      flex-wrap: wrap;
+      gap: 0.15rem 1.25rem;
+    }
+    .line {
+      display: inline-flex;
+      align-items: baseline;
+      gap: 0.4rem;
+      font-weight: 600;
+      color: var(--sl-quiet);
+    }
+    .line sl-icon {
+      align-self: center;
+    }
+    .holds {
+      color: var(--sl-accent);
+    }
+    .written-for-others {
+      color: var(--sl-text);
+    }
   `,
 })
 export class ApplicabilityLabel {
   readonly applicability = input.required<Applicability>();
   protected readonly lines = computed(() =>
-    this.applicability().reasons.map((reason) => ({ verdict: reason.verdict, icon: icons[reason.verdict], text: applicabilityWords(reason) })),
+    this.applicability().reasons.map((reason) => ({
+      verdict: reason.verdict,
+      icon: icons[reason.verdict],
+      text: applicabilityWords(reason),
+    })),
   );
 }

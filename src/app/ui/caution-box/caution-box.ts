@@ -8,9 +8,15 @@ import { Icon } from '../icon/icon';
   selector: 'sl-caution-box',
   imports: [Icon],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  host: { role: 'note', '[class]': 'caution().signalWord', '[attr.aria-label]': 'caution().signalWord + ": " + caution().hazard' },
+  host: {
+    role: 'note',
+    '[class]': 'caution().signalWord',
+    '[attr.aria-label]': 'caution().signalWord + ": " + caution().hazard',
+  },
   template: `
-    <p class="word" [title]="caution().signalWord + ': ' + means()"><sl-icon name="warning" />{{ caution().signalWord }}</p>
+    <p class="word" [title]="caution().signalWord + ': ' + means()">
+      <sl-icon name="warning" />{{ caution().signalWord }}
+    </p>
     <div class="text">
       <p class="hazard">{{ caution().hazard }}</p>
       <p>{{ caution().consequence }}</p>
@@ -18,15 +24,49 @@ import { Icon } from '../icon/icon';
     </div>
   `,
   styles: `
-    :host { display: block; border: 2px solid var(--sl-caution-line); margin-block: 0.75rem; break-inside: avoid; background: var(--sl-paper); }
-    :host(.danger), :host(.warning) { border-color: var(--sl-danger); }
-    p { margin: 0; }
-    .word { display: flex; align-items: center; gap: 0.5rem; padding: 0.25rem 0.75rem; font: 600 1.15rem/1.4 var(--sl-heading); letter-spacing: 0.06em; text-transform: uppercase; border-block-end: 2px solid var(--sl-caution-line); color: var(--sl-ink); }
-    :host(.danger) .word { background: var(--sl-danger); color: var(--sl-on-danger); border-color: var(--sl-danger); }
-    :host(.warning) .word { color: var(--sl-danger); border-color: var(--sl-danger); }
-    .text { padding: 0.5rem 0.75rem 0.65rem; }
-    .hazard { font-weight: 600; }
-    .avoid { margin-block-start: 0.25rem; }
+    :host {
+      display: block;
+      border: 2px solid var(--sl-caution-line);
+      margin-block: 0.75rem;
+      break-inside: avoid;
+      background: var(--sl-paper);
+    }
+    :host(.danger),
+    :host(.warning) {
+      border-color: var(--sl-danger);
+    }
+    p {
+      margin: 0;
+    }
+    .word {
+      display: flex;
+      align-items: center;
+      gap: 0.5rem;
+      padding: 0.25rem 0.75rem;
+      font: 600 1.15rem/1.4 var(--sl-heading);
+      letter-spacing: 0.06em;
+      text-transform: uppercase;
+      border-block-end: 2px solid var(--sl-caution-line);
+      color: var(--sl-ink);
+    }
+    :host(.danger) .word {
+      background: var(--sl-danger);
+      color: var(--sl-on-danger);
+      border-color: var(--sl-danger);
+    }
+    :host(.warning) .word {
+      color: var(--sl-danger);
+      border-color: var(--sl-danger);
+    }
+    .text {
+      padding: 0.5rem 0.75rem 0.65rem;
+    }
+    .hazard {
+      font-weight: 600;
+    }
+    .avoid {
+      margin-block-start: 0.25rem;
+    }
   `,
 })
 export class CautionBox {

@@ -34,7 +34,10 @@ export class Confirm {
   private readonly dialog = inject(MatDialog);
 
   async ask(question: Question): Promise<boolean> {
-    const dialog = this.dialog.open<ConfirmDialog, Question, boolean>(ConfirmDialog, { data: question, maxWidth: '28rem' });
+    const dialog = this.dialog.open<ConfirmDialog, Question, boolean>(ConfirmDialog, {
+      data: question,
+      maxWidth: '28rem',
+    });
     return (await firstValueFrom(dialog.afterClosed())) ?? false;
   }
 }

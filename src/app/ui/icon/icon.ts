@@ -34,13 +34,33 @@ export type IconName = keyof typeof outlines;
   selector: 'sl-icon',
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <svg viewBox="0 0 24 24" [attr.role]="label() ? 'img' : null" [attr.aria-label]="label() || null" [attr.aria-hidden]="label() ? null : true" focusable="false">
+    <svg
+      viewBox="0 0 24 24"
+      [attr.role]="label() ? 'img' : null"
+      [attr.aria-label]="label() || null"
+      [attr.aria-hidden]="label() ? null : true"
+      focusable="false"
+    >
       <path [attr.d]="outline()" />
     </svg>
   `,
   styles: `
-    :host { display: inline-flex; inline-size: 1.25em; block-size: 1.25em; flex: none; vertical-align: -0.22em; }
-    svg { inline-size: 100%; block-size: 100%; fill: none; stroke: currentColor; stroke-width: 1.75; stroke-linecap: square; stroke-linejoin: miter; }
+    :host {
+      display: inline-flex;
+      inline-size: 1.25em;
+      block-size: 1.25em;
+      flex: none;
+      vertical-align: -0.22em;
+    }
+    svg {
+      inline-size: 100%;
+      block-size: 100%;
+      fill: none;
+      stroke: currentColor;
+      stroke-width: 1.75;
+      stroke-linecap: square;
+      stroke-linejoin: miter;
+    }
   `,
 })
 export class Icon {

@@ -1,5 +1,12 @@
 import { NgTemplateOutlet } from '@angular/common';
-import { ChangeDetectionStrategy, Component, TemplateRef, computed, contentChild, input } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  TemplateRef,
+  computed,
+  contentChild,
+  input,
+} from '@angular/core';
 import type { LoadState } from '../../core/load';
 import { ProblemNote } from '../problem-note/problem-note';
 
@@ -14,8 +21,12 @@ import { ProblemNote } from '../problem-note/problem-note';
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @switch (of().state) {
-      @case ('loading') { <p class="waiting" role="status">{{ waitingText() }}</p> }
-      @case ('failed') { <sl-problem-note [problem]="problem()" /> }
+      @case ('loading') {
+        <p class="waiting" role="status">{{ waitingText() }}</p>
+      }
+      @case ('failed') {
+        <sl-problem-note [problem]="problem()" />
+      }
       @case ('ready') {
         @if (content(); as content) {
           <ng-container [ngTemplateOutlet]="content" [ngTemplateOutletContext]="{ $implicit: value() }" />
@@ -23,7 +34,12 @@ import { ProblemNote } from '../problem-note/problem-note';
       }
     }
   `,
-  styles: `.waiting { color: var(--sl-quiet); padding-block: 1.5rem; }`,
+  styles: `
+    .waiting {
+      color: var(--sl-quiet);
+      padding-block: 1.5rem;
+    }
+  `,
 })
 export class LoadStateView {
   readonly of = input.required<LoadState<unknown>>();

@@ -7,9 +7,16 @@ import { permanenceWords, type Permanence } from '../../../../shared/contract/vo
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `<span class="sl-label" [class]="permanence()">{{ words() }}</span>`,
   styles: `
-    .sl-label { border-block-end: 2px dotted currentColor; }
-    .leaves-a-mark { border-block-end-style: dashed; }
-    .permanent { border-block-end-style: solid; font-weight: 600; }
+    .sl-label {
+      border-block-end: 2px dotted currentColor;
+    }
+    .leaves-a-mark {
+      border-block-end-style: dashed;
+    }
+    .permanent {
+      border-block-end-style: solid;
+      font-weight: 600;
+    }
   `,
 })
 export class PermanenceLabel {

@@ -18,12 +18,23 @@ import type { Photo } from '../../../../shared/contract/photos';
         [attr.loading]="eager() ? 'eager' : 'lazy'"
         decoding="async"
         [style.background-image]="behind()"
+        [style.--own-ratio]="photo().width / photo().height"
       />
     </picture>
   `,
   styles: `
-    :host, picture { display: block; }
-    img { display: block; inline-size: 100%; block-size: auto; aspect-ratio: var(--sl-photo-ratio, auto); object-fit: cover; background-size: cover; }
+    :host,
+    picture {
+      display: block;
+    }
+    img {
+      display: block;
+      inline-size: 100%;
+      block-size: auto;
+      aspect-ratio: var(--sl-photo-ratio, var(--own-ratio));
+      object-fit: cover;
+      background-size: cover;
+    }
   `,
 })
 export class PhotoView {
@@ -40,7 +51,9 @@ export class PhotoView {
   });
 
   protected sources(format: 'avif' | 'webp'): string {
-    return this.photo().widths.map((width) => `${this.addressOf(width, format)} ${width}w`).join(', ');
+    return this.photo()
+      .widths.map((width) => `${this.addressOf(width, format)} ${width}w`)
+      .join(', ');
   }
 
   private addressOf(width: number, format: 'avif' | 'webp'): string {

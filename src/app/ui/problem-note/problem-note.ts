@@ -19,14 +19,18 @@ import { Icon } from '../icon/icon';
             <ul>
               @for (field of problem.fields; track $index) {
                 <li>
-                  @if (field.path) {<code>{{ field.path }}</code>}
+                  @if (field.path) {
+                    <code>{{ field.path }}</code>
+                  }
                   {{ field.message }}{{ field.remedy ? '. ' + field.remedy : '' }}
                 </li>
               }
             </ul>
           }
           @if (problem.status >= 500 && problem.requestId) {
-            <p class="id">Request <code>{{ problem.requestId }}</code></p>
+            <p class="id">
+              Request <code>{{ problem.requestId }}</code>
+            </p>
           }
           @if (retryable()) {
             <button type="button" class="sl-plain-button" (click)="retry.emit()">Try again</button>
@@ -36,12 +40,33 @@ import { Icon } from '../icon/icon';
     }
   `,
   styles: `
-    .note { display: flex; gap: 0.75rem; border: 1px solid var(--sl-danger); border-inline-start-width: 6px; padding: 0.75rem 1rem; margin-block: 1rem; background: var(--sl-paper); }
-    sl-icon { color: var(--sl-danger); margin-top: 0.15rem; }
-    p { margin: 0 0 0.25rem; }
-    .title { font-weight: 600; }
-    ul { margin: 0.25rem 0; padding-inline-start: 1.1rem; }
-    .id { color: var(--sl-quiet); font-size: var(--sl-small); }
+    .note {
+      display: flex;
+      gap: 0.75rem;
+      border: 1px solid var(--sl-danger);
+      border-inline-start-width: 6px;
+      padding: 0.75rem 1rem;
+      margin-block: 1rem;
+      background: var(--sl-paper);
+    }
+    sl-icon {
+      color: var(--sl-danger);
+      margin-top: 0.15rem;
+    }
+    p {
+      margin: 0 0 0.25rem;
+    }
+    .title {
+      font-weight: 600;
+    }
+    ul {
+      margin: 0.25rem 0;
+      padding-inline-start: 1.1rem;
+    }
+    .id {
+      color: var(--sl-quiet);
+      font-size: var(--sl-small);
+    }
   `,
 })
 export class ProblemNote {

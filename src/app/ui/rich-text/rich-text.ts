@@ -6,7 +6,11 @@ import type { RichText } from '../../../../shared/contract/write-ups';
   selector: 'sl-rich-text',
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `<div class="sl-prose" [innerHTML]="text().html"></div>`,
-  styles: `:host { display: block; }`,
+  styles: `
+    :host {
+      display: block;
+    }
+  `,
 })
 export class RichTextView {
   readonly text = input.required<RichText>();

@@ -5,12 +5,22 @@ import { standingWords, type Standing } from '../../../../shared/contract/vocabu
 @Component({
   selector: 'sl-standing-label',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `<span class="sl-label" [class.measured]="standing() === 'measured'" [title]="words().means">{{ words().label }}</span>
-    @if (explained()) {<span class="means">({{ words().means }})</span>}`,
+  template: `<span class="sl-label" [class.measured]="standing() === 'measured'" [title]="words().means">{{
+      words().label
+    }}</span>
+    @if (explained()) {
+      <span class="means">({{ words().means }})</span>
+    }`,
   styles: `
-    .sl-label { font-weight: 600; }
-    .measured { color: var(--sl-brass); }
-    .means { color: var(--sl-quiet); }
+    .sl-label {
+      font-weight: 600;
+    }
+    .measured {
+      color: var(--sl-brass);
+    }
+    .means {
+      color: var(--sl-quiet);
+    }
   `,
 })
 export class StandingLabel {

@@ -5,7 +5,13 @@ import type { TextRun } from '../../../../shared/contract/search';
 @Component({
   selector: 'sl-text-runs',
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `@for (run of runs(); track $index) {@if (run.hit) {<mark>{{ run.text }}</mark>} @else {{{ run.text }}}}`,
+  template: `@for (run of runs(); track $index) {
+    @if (run.hit) {
+      <mark>{{ run.text }}</mark>
+    } @else {
+      <span>{{ run.text }}</span>
+    }
+  }`,
 })
 export class TextRuns {
   readonly runs = input.required<readonly TextRun[]>();

@@ -10,7 +10,10 @@ export class Undo {
 
   /** Tells what was done and offers to take it back. */
   offer(done: string, takeBack: () => void): void {
-    this.snackBar.open(done, 'Undo', { duration: shownFor, politeness: 'polite' }).onAction().subscribe(takeBack);
+    this.snackBar
+      .open(done, 'Undo', { duration: shownFor, politeness: 'polite' })
+      .onAction()
+      .subscribe(takeBack);
   }
 
   /** Tells what was done, where there is nothing to take back. */

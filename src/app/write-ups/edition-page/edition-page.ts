@@ -23,7 +23,10 @@ export class EditionPage {
   protected readonly readings = computed(() =>
     this.view().readings.map((reading) => ({
       ...reading,
-      figure: reading.value === null ? 'not entered' : readingText(reading.value, reading.uncertainty, reading.unit),
+      figure:
+        reading.value === null
+          ? 'not entered'
+          : readingText(reading.value, reading.uncertainty, reading.unit),
     })),
   );
 

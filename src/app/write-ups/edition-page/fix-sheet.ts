@@ -6,7 +6,7 @@ import { PermanenceLabel } from '../../ui/permanence-label/permanence-label';
 import { PhotoView } from '../../ui/photo/photo';
 import { RichTextView } from '../../ui/rich-text/rich-text';
 import { StandingLabel } from '../../ui/standing-label/standing-label';
-import { acceptanceText } from '../figures';
+import { acceptanceParts } from '../figures';
 
 /** One remedy: its facts, its cautions, then why, what is needed, the steps, and how to know that it worked. */
 @Component({
@@ -26,9 +26,13 @@ export class FixSheet {
   });
   protected readonly acceptance = computed(() => {
     const { acceptance } = this.fix();
-    return acceptance ? acceptanceText(acceptance) : null;
+    return acceptance ? acceptanceParts(acceptance) : null;
   });
-  protected readonly afterwards = computed(() => this.fix().afterwards.map((item) => afterwardsWords[item]).join(', '));
+  protected readonly afterwards = computed(() =>
+    this.fix()
+      .afterwards.map((item) => afterwardsWords[item])
+      .join(', '),
+  );
   protected readonly trials = computed(() => {
     const { held, heldForAWhile, didNotHelp } = this.fix().trialCounts;
     const parts = [
