@@ -1,7 +1,9 @@
-import { existsSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, readFileSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { join } from 'node:path';
 import { fingerprint } from './fingerprint.mjs';
 import { runToEnd } from './run-to-end.mjs';
+
+const stampName = '.built-from';
 
 const halves = [
   {
@@ -17,14 +19,20 @@ const halves = [
       'tsconfig.server.json',
       'package-lock.json',
     ],
-    program: ['node_modules/typescript/bin/tsc', '-p', 'tsconfig.server.json'],
+    program: (output) => [
+      'node_modules/typescript/bin/tsc',
+      '-p',
+      'tsconfig.server.json',
+      '--outDir',
+      output,
+    ],
   },
   {
     name: 'pages',
     output: 'dist/web',
     result: 'server/server.mjs',
     sources: ['src', 'shared', 'angular.json', 'tsconfig.json', 'tsconfig.app.json', 'package-lock.json'],
-    program: ['node_modules/@angular/cli/bin/ng.js', 'build'],
+    program: (output) => ['node_modules/@angular/cli/bin/ng.js', 'build', '--output-path', output],
   },
 ];
 
@@ -34,16 +42,27 @@ export async function ensureBuilt({ projectDir, logDir, say, signal }) {
     .map((half) => ({
       ...half,
       hash: fingerprint(projectDir, half.sources),
-      stamp: join(projectDir, half.output, '.built-from'),
+      stamp: join(projectDir, half.output, stampName),
     }))
     .filter((half) => !isCurrent(projectDir, half));
   if (stale.length === 0) return;
   say(`Building ${stale.map((half) => half.name).join(' and ')} (up to a minute) …`);
-  await Promise.all(stale.map((half) => build(half)));
+  const giveUp = new AbortController();
+  const either = AbortSignal.any([giveUp.signal, ...(signal ? [signal] : [])]);
+  const builds = stale.map((half) => build(half));
+  try {
+    await Promise.all(builds);
+  } catch (error) {
+    giveUp.abort(error);
+    await Promise.allSettled(builds);
+    throw error;
+  }
 
-  async function build({ name, output, program, stamp, hash }) {
-    rmSync(join(projectDir, output), { recursive: true, force: true });
-    const [script, ...args] = program;
+  async function build({ name, output, program, hash }) {
+    // Built beside and put in place as a whole: what was built before stays until then, also when this fails.
+    const fresh = `${output}.new`;
+    rmSync(join(projectDir, fresh), { recursive: true, force: true });
+    const [script, ...args] = program(fresh);
     await runToEnd({
       name: `Building the ${name}`,
       command: process.execPath,
@@ -51,9 +70,11 @@ export async function ensureBuilt({ projectDir, logDir, say, signal }) {
       cwd: projectDir,
       env: { ...process.env, NG_CLI_ANALYTICS: 'false' },
       logFile: join(logDir, `build-${name}.log`),
-      signal,
+      signal: either,
     });
-    writeFileSync(stamp, hash);
+    writeFileSync(join(projectDir, fresh, stampName), hash);
+    rmSync(join(projectDir, output), { recursive: true, force: true });
+    renameSync(join(projectDir, fresh), join(projectDir, output));
     say(`Built the ${name}.`);
   }
 }

@@ -3,6 +3,7 @@ import { pathToFileURL } from 'node:url';
 import { ensureBuilt } from './build.mjs';
 import { ensureDependencies } from './dependencies.mjs';
 import { ensurePackages } from './packages.mjs';
+import { demandFreePort } from './ports.mjs';
 import { claimDataFolder } from './running.mjs';
 import { projectDir } from './services.mjs';
 import { readLaunchSettings } from './settings.mjs';
@@ -23,6 +24,7 @@ export async function launch(environment, { compiled }) {
   try {
     const settings = readLaunchSettings(environment, { compiled });
     claim = await claimDataFolder(settings.dataDir, settings.publicAddress, say);
+    await demandFreePorts(settings, compiled);
     await prepare({ settings, compiled, say, signal: wish.signal });
     stack = await startStack({ settings, compiled, say, signal: wish.signal, onChild: claim.noteChild });
     await greet({ settings, stack, compiled, say });
@@ -42,6 +44,18 @@ export async function launch(environment, { compiled }) {
     }
     claim?.release();
   }
+}
+
+/** Told before minutes go into installing and building. */
+async function demandFreePorts({ ports, environment }, compiled) {
+  await demandFreePort(ports.app, 'the app', 'PORT');
+  if (!environment.DATABASE_URL) await demandFreePort(ports.database, 'MariaDB', 'SHIMLORE_DB_PORT');
+  if (!environment.MEILI_HOST) await demandFreePort(ports.search, 'search', 'SHIMLORE_SEARCH_PORT');
+  if (!environment.SMTP_URL) {
+    await demandFreePort(ports.smtp, 'mail', 'SHIMLORE_SMTP_PORT');
+    await demandFreePort(ports.mailbox, 'the mailbox page', 'SHIMLORE_MAILBOX_PORT');
+  }
+  if (!compiled) await demandFreePort(ports.pages, 'the dev server', 'SHIMLORE_PAGES_PORT');
 }
 
 async function prepare({ settings, compiled, say, signal }) {

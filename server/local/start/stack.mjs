@@ -3,7 +3,6 @@ import { join } from 'node:path';
 import { startMariaDb } from '../mariadb.mjs';
 import { startChild, untilReady } from './child.mjs';
 import { createCrew } from './crew.mjs';
-import { demandFreePort } from './ports.mjs';
 import { runToEnd } from './run-to-end.mjs';
 import { readSecrets } from './secrets.mjs';
 import { answers, programArguments, projectDir, startMailbox, startSearch } from './services.mjs';
@@ -24,8 +23,6 @@ export async function startStack({ settings, compiled = true, say, onChild = () 
   const breakOff = () => crew.stop();
   signal?.addEventListener('abort', breakOff);
   try {
-    await demandFreePort(settings.ports.app, 'the app', 'PORT');
-    if (!compiled) await demandFreePort(settings.ports.pages, 'the dev server', 'SHIMLORE_PAGES_PORT');
     const step = { settings, crew, compiled, say, signal };
     const environment = await startSurroundings(step);
     await prepareData({ ...step, environment });
