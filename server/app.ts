@@ -8,25 +8,26 @@ import { createAccounts } from './accounts/accounts.js';
 import { createBench } from './bench/bench.js';
 import type { Settings } from './config.js';
 import { createHardware } from './hardware/hardware.js';
-import type { RouteBinding } from './http/binding.js';
 import { createCsrf } from './http/csrf.js';
 import { mountRoutes } from './http/mount.js';
 import { notStored } from './http/not-stored.js';
 import { nothingHere, problemHandler } from './http/problem-handler.js';
-import { NotFound } from './http/problems.js';
 import { createRateLimits, noRateLimits } from './http/rate-limits.js';
 import { pageProblemHandler } from './http/rendered-pages.js';
 import { requestLog } from './http/request-log.js';
 import { securityHeaders } from './http/security-headers.js';
 import { sessionSweeper } from './http/session-sweeper.js';
 import { createSessions } from './http/session.js';
+import { createJoints } from './joints/joints.js';
 import { createMail } from './mail/mail.js';
+import { createMeasurements } from './measurements/measurements.js';
 import { createModeration } from './moderation/moderation.js';
 import { createPhotos } from './photos/photos.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
 import { renderText } from './text/render-text.js';
 import type { Worker } from './worker.js';
+import { createWorksheets } from './worksheets/worksheets.js';
 import { createWriteUps } from './write-ups/write-ups.js';
 
 /** All that comes from outside; tests hand in their own. */
@@ -100,6 +101,14 @@ export function createApp(around: Surroundings): Composition {
     mail: mail.queue,
     searchOutbox: search.outbox,
   });
+  const measurements = createMeasurements({ knex, clock, limits });
+  const joints = createJoints({
+    knex,
+    clock,
+    measurements: measurements.service,
+    writeUps: writeUps.service,
+  });
+  const worksheets = createWorksheets({ knex });
   const system = createSystem({
     knex,
     publicAddress: settings.PUBLIC_ADDRESS,
@@ -117,6 +126,9 @@ export function createApp(around: Surroundings): Composition {
     ...search.bindings,
     ...writeUps.bindings,
     ...moderation.bindings,
+    ...measurements.bindings,
+    ...joints.bindings,
+    ...worksheets.bindings,
   ];
 
   const app = express();
@@ -128,7 +140,7 @@ export function createApp(around: Surroundings): Composition {
   // Photo files are kept by shared caches, so no session cookie may go with them.
   app.use([...sessions.handlers, ...csrf.issue].map(unlessPhotoFile));
   app.use('/api', notStored);
-  mountRoutes(app, routes, [...bindings, ...unanswered(bindings)], {
+  mountRoutes(app, routes, bindings, {
     callerOf: sessions.callerOf,
     csrf: csrf.demand,
   });
@@ -143,12 +155,4 @@ function unlessPhotoFile(handler: RequestHandler): RequestHandler {
     if (request.path.startsWith('/photos/')) next();
     else void handler(request, response, next);
   };
-}
-
-/** Declared routes whose feature is not composed yet. */
-function unanswered(bindings: readonly RouteBinding[]): RouteBinding[] {
-  const bound = new Set(bindings.map((binding) => binding.route));
-  return Object.values(routes)
-    .filter((route) => !bound.has(route))
-    .map((route) => ({ route, before: [], handle: () => Promise.reject(new NotFound()) }));
 }

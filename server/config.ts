@@ -19,6 +19,8 @@ const Settings = z.object({
   SMTP_URL: z.url({ protocol: /^smtps?$/, hostname: /.+/ }),
   MAIL_FROM: z.string().default('Shimlore <desk@shimlore.example>'),
   PHOTO_DIR: z.string().default('data/photos'),
+  /** Folder of the built client; where it is not built, only the API is served. */
+  WEB_DIR: z.string().default('dist/web'),
   SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),
   LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   /** Whether X-Forwarded-* headers of a proxy in front are believed. */

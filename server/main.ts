@@ -63,8 +63,11 @@ function readSettingsOrEnd(): Settings {
 }
 
 /** The built client; undefined, with a line in the log, where it has not been built. */
-async function builtPages({ PUBLIC_ADDRESS }: Settings, log: Logger): Promise<PageHandlers | undefined> {
-  const built = path.join(projectFolder(), 'dist', 'web');
+async function builtPages(
+  { PUBLIC_ADDRESS, WEB_DIR }: Settings,
+  log: Logger,
+): Promise<PageHandlers | undefined> {
+  const built = path.resolve(projectFolder(), WEB_DIR);
   const entry = path.join(built, 'server', 'server.mjs');
   if (!existsSync(entry)) {
     log.warn({ entry }, 'the client is not built; only the API is served');

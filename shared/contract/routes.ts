@@ -1,6 +1,9 @@
 import { accountRoutes } from './accounts.js';
 import { benchRoutes, hardwareRoutes } from './hardware.js';
+import { jointRoutes } from './joints.js';
+import { measurementRoutes } from './measurements.js';
 import { deskRoutes } from './moderation.js';
+import { ownStockRoutes } from './own-stock.js';
 import { photoRoutes } from './photos.js';
 import { searchRoutes } from './search.js';
 import { systemRoutes } from './system.js';
@@ -12,6 +15,9 @@ export const routes = {
   ...accountRoutes,
   ...hardwareRoutes,
   ...benchRoutes,
+  ...measurementRoutes,
+  ...jointRoutes,
+  ...ownStockRoutes,
   ...searchRoutes,
   ...writeUpRoutes,
   ...photoRoutes,

@@ -26,7 +26,13 @@ const declared = Object.entries(routes) as [keyof typeof routes, RouteDefinition
 // Signing out comes last, for it ends the session the others need.
 const inOrder = [...declared].sort(([a], [b]) => Number(a === 'signOut') - Number(b === 'signOut'));
 
-const standIns: Record<string, string> = { slug: 'no-such-thing', number: '1', file: 'page.js' };
+const standIns: Record<string, string> = {
+  slug: 'no-such-thing',
+  feature: 'boss',
+  dimension: 'diameter',
+  number: '1',
+  file: 'page.js',
+};
 const address = (route: RouteDefinition): string =>
   route.path.replace(/:([a-zA-Z]+)/g, (_, name: string) => standIns[name] ?? '999999999');
 
@@ -103,6 +109,19 @@ function accessTable(): Record<keyof typeof routes, readonly Role[]> {
     addToBench: accounts,
     changeBenchItem: accounts,
     removeFromBench: accounts,
+    readPartMeasurements: everybody,
+    readDimension: everybody,
+    addMeasurement: accounts,
+    setAsideMeasurement: desk,
+    takeBackMeasurement: desk,
+    listJoints: everybody,
+    readJoint: everybody,
+    reportFit: accounts,
+    checkFit: everybody,
+    compareParts: everybody,
+    listOwnStock: accounts,
+    addOwnStock: accounts,
+    removeOwnStock: accounts,
     search: everybody,
     readWriteUp: everybody,
     listEditions: everybody,

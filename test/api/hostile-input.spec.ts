@@ -45,6 +45,8 @@ const withQuery = all.filter(([, route]) => route.query);
 
 const standIns: Record<string, string> = {
   slug: 'no-such-thing',
+  feature: 'boss',
+  dimension: 'diameter',
   number: '1',
   file: `${'0'.repeat(64)}-480.webp`,
 };
