@@ -2,8 +2,8 @@ import { ApiError } from '../http/api-error.js';
 import { folded } from '../storage/document-store.js';
 import { flatten } from '../storage/flatten.js';
 import type { IndexCatalogue, IndexState } from '../storage/index-catalogue.js';
-import type { FacetCounts } from './facets.js';
-import { facetsOfHits, findHits, type RankedHit } from './search.js';
+import { countFacets, type FacetCounts } from './facets.js';
+import { findHits, type RankedHit } from './search.js';
 import type { SearchRequest } from './search-request.js';
 
 export interface FederatedQuery {
@@ -42,15 +42,14 @@ export function federated(
   const page = federation.page ?? 1;
   const offset = isPaged ? Math.max(0, page - 1) * hitsPerPage : (federation.offset ?? 0);
   const limit = isPaged ? (page === 0 ? 0 : hitsPerPage) : (federation.limit ?? 20);
-  const facets = new Map<string, FacetCounts>();
+  const { reader } = catalogue;
+  reader.run('DELETE FROM gathered');
   let total = 0;
   const hits = queries.flatMap((query, position): WeightedHit[] => {
     const wanted = { offset: 0, limit: Math.min(offset + limit, Number.MAX_SAFE_INTEGER) };
     const found = findHits(catalogue, query.index, query.request, query.extraFilter, wanted);
     total += found.total;
-    const names = federation.facetsByIndex?.[query.index.uid] ?? [];
-    if (names.length > 0)
-      addFacets(facets, query.index, facetsOfHits(catalogue, query.index, names) as FacetCounts);
+    reader.run('INSERT OR IGNORE INTO gathered SELECT ?, doc FROM hits', [query.index.id]);
     return found.hits.map((hit) => ({
       ...hit,
       weighted: hit.rankingScore * query.weight,
@@ -73,7 +72,7 @@ export function federated(
     hits: once.slice(offset, offset + limit).map(shownHit),
     processingTimeMs: Math.round(performance.now() - started),
     ...paging,
-    ...shownFacets(facets, federation),
+    ...shownFacets(countGathered(catalogue, queries, federation), federation),
   };
 }
 
@@ -100,9 +99,21 @@ function withoutRepeats(hits: readonly WeightedHit[], distinct: string | undefin
   });
 }
 
-function addFacets(facets: Map<string, FacetCounts>, index: IndexState, counts: FacetCounts): void {
-  const before = facets.get(index.uid);
-  facets.set(index.uid, before ? mergedCounts([before, counts]) : counts);
+/** Facets of each index over the hits of all its queries; a document that several queries found counts once. */
+function countGathered(
+  catalogue: IndexCatalogue,
+  queries: readonly FederatedQuery[],
+  { facetsByIndex = {} }: Federation,
+): Map<string, FacetCounts> {
+  const counts = new Map<string, FacetCounts>();
+  for (const { index } of queries) {
+    const names = facetsByIndex[index.uid] ?? [];
+    if (names.length === 0 || counts.has(index.uid)) continue;
+    catalogue.reader.run('DELETE FROM hits');
+    catalogue.reader.run('INSERT INTO hits SELECT doc, 1, 0 FROM gathered WHERE index_id = ?', [index.id]);
+    counts.set(index.uid, countFacets(catalogue.reader, index, names));
+  }
+  return counts;
 }
 
 function mergedCounts(all: readonly FacetCounts[]): FacetCounts {

@@ -43,7 +43,10 @@ export class IndexCatalogue {
       CREATE TABLE IF NOT EXISTS outcomes (task INTEGER PRIMARY KEY, outcome TEXT NOT NULL);
     `);
     this.reader = new Connection(path);
-    this.reader.exec('CREATE TEMP TABLE hits (doc INTEGER PRIMARY KEY, bucket REAL, score REAL)');
+    this.reader.exec(`
+      CREATE TEMP TABLE hits (doc INTEGER PRIMARY KEY, bucket REAL, score REAL);
+      CREATE TEMP TABLE gathered (index_id INTEGER, doc INTEGER, PRIMARY KEY (index_id, doc)) WITHOUT ROWID;
+    `);
   }
 
   find(uid: string, connection = this.reader): IndexState | undefined {
