@@ -81,8 +81,8 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
           }),
           fix('print-it-without-lip', 'Print the bracket without the lip', 'remake', 'reversible', {
             why: 'The maker hands the model out on request. Without the lip the plate lies flat on every motor revision; a loose centring ring of 19.3 mm does what the lip did.',
-            tools: 'Printer with an enclosure; 3.2 mm drill', materials: 'Glass-filled nylon; brass inserts M3',
-            steps: ['Ask the maker for the model, or measure the arm’s holes and draw it.', 'Leave the lip away. Print flat side down, six walls, solid round the holes.', 'Clear the holes with a 3.2 mm drill turned by hand.', 'Mount with the centring ring in the recess; take the ring out when the screws are tight.'],
+            tools: 'Printer with an enclosure; 3.2 mm hand reamer', materials: 'Glass-filled nylon; brass inserts M3',
+            steps: ['Ask the maker for the model, or measure the arm’s holes and draw it.', 'Leave the lip away. Print flat side down, six walls, solid round the holes.', 'Clear the holes with the hand reamer.', 'Mount with the centring ring in the recess; take the ring out when the screws are tight.'],
             after: ['focus-offsets'], accept: atMost('tilt of the motor against the plate', 0.3, 'deg'), trials: 'h h w',
           }),
           earlier.fixes[1]!,
@@ -154,7 +154,7 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
     summary: 'The belt climbs to one edge and drops off after a few turns. The motor’s pulley is not in the plane of the ring: set it by a straight edge, then lock it on the flat.',
     joints: [joint(side('thornapple-belt-kit-60', 'motor pulley', 'A B', 'C'), side('tarn-m1', 'output shaft', 'A B C D'))],
     symptoms: 'belt-walks-off drive-noisy', noticed: 'Black dust under the pulley, and the belt hums at one edge.',
-    cause: 'A belt runs towards the side where it is tighter. If the pulleys are 1 mm out of plane, or the motor leans by half a degree, it climbs. Rev C’s idler has flanges on both sides and holds it back; that hides the lean rather than curing it.',
+    cause: 'A belt creeps towards the side where it is tighter. If the pulleys are 1 mm out of plane, or the motor leans by half a degree, it climbs. Rev C’s idler has flanges on both sides and holds it back; that hides the lean rather than curing it.',
     readings: [read('tarn-m1:C', 'offset of the pulley from the plane of the ring', 1.1, 'mm', 'ruler', 0.2), read('thornapple-belt-kit-60:B', 'width of the belt', 6.0)],
     fixes: [
       fix('pulley-into-the-plane', 'Pulley into the plane of the ring', 'adjust', 'reversible', {

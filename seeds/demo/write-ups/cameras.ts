@@ -108,7 +108,7 @@ export const cameraWriteUps: readonly DemoWriteUp[] = [
   }),
   writeUp('wren-60-field-shifts-with-the-ring-clamp-at-the-focuser', 'Wren 60 field shifts with the ring clamp at the focuser', {
     by: 'ubo', daysAgo: 110,
-    summary: 'A clamp on the rear of the tube pinches the helical focuser’s seat and the field shifts with each tightening. Clamp forward of the joint.',
+    summary: 'A clamp on the rear of the tube squeezes the helical focuser’s seat and the field shifts with each tightening. Clamp forward of the joint.',
     joints: [joint(side('oxbow-ring-clamp', 'split bore', 'A B C'), side('larkfield-wren-60-helical', 'seat in the tube', 'A B C'))],
     symptoms: 'image-shifts thread-binds stars-long-in-corner', noticed: 'The focus ring gets stiff when I tighten the clamp.', cause: 'The tube is thinned to 1.2 mm over its last 30 mm, where the focuser is screwed in.',
     readings: [read('larkfield-wren-60:C', 'wall over the focuser’s seat', 1.2)],

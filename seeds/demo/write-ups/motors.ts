@@ -7,7 +7,7 @@ import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, wri
 export const motorWriteUps: readonly DemoWriteUp[] = [
   writeUp('m2-screws-do-not-line-up-with-the-motor-plate', 'M2 screws do not line up with the motor plate', {
     by: 'joss', daysAgo: 560,
-    summary: 'Motor plate Rev B is drilled on Ø 31, M2 Rev B wants Ø 33. Slotting the four holes by 1 mm each way is enough; Rev C comes with slots.',
+    summary: 'Motor plate Rev B has its holes on Ø 31, M2 Rev B wants Ø 33. Slotting the four holes by 1 mm each way is enough; Rev C comes with slots.',
     joints: [joint(side('dunlin-motor-plate', 'motor holes', 'B', 'C'), side('tarn-m2', 'face holes', 'B C', 'A'))],
     symptoms: 'screws-do-not-line-up will-not-go-in', noticed: 'Two screws start, the other two stand beside their holes by half their width.', cause: 'Tarn moved the face holes from 31.0 to 33.0 mm with the new gearbox. A 3.4 mm hole round a 3.0 mm screw forgives 0.2 mm; the miss is 1.0 mm.',
     readings: [read('dunlin-motor-plate:B', 'bolt circle', 31.0, 'mm', 'caliper', 0.05), read('tarn-m2:B', 'bolt circle', 33.0, 'mm', 'caliper', 0.05)],

@@ -52,7 +52,7 @@ export const ringGearWriteUps: readonly DemoWriteUp[] = [
     by: 'kaja', daysAgo: 540,
     summary: 'A ring bored 76.9 mm on a 75.4 mm grip ring cannot clamp. A strip of brass shim takes up the rest; tape creeps.',
     joints: [joint(side('cotterpin-ring-gear-kit', 'bore of the ring', 'C D', 'A B'), side('larkfield-wren-60', 'grip ring of the focuser', 'A B', 'C D'))],
-    symptoms: 'motor-turns-focus-does-not gear-skips too-loose-in-bore', noticed: 'The gear turns, the knurl under it does not. Tightening the clamp bends the ring egg-shaped and the mesh gets tight and loose.',
+    symptoms: 'motor-turns-focus-does-not gear-skips too-loose-in-bore', noticed: 'The gear goes round, the knurl under it does not. Tightening the clamp bends the ring egg-shaped and the mesh gets tight and loose.',
     cause: 'Kits from Rev C on are bored for the wider grip ring of Wren 60 Rev C (Ø 76.8). Earlier grip rings are Ø 75.4: 1.5 mm of play, more than the split can close.',
     readings: [read('larkfield-wren-60:B', 'diameter over the knurl', 75.4), read('cotterpin-ring-gear-kit:C', 'bore', 76.9)],
     fixes: [
@@ -73,15 +73,15 @@ export const ringGearWriteUps: readonly DemoWriteUp[] = [
       })),
     ],
   }),
-  writeUp('ring-gear-80-grinds-once-a-turn', 'Ring gear 80 grinds once a turn', {
+  writeUp('ring-gear-80-binds-once-a-turn', 'Ring gear 80 binds once a turn', {
     by: 'greta', daysAgo: 410,
     summary: 'Tips touch the roots at one place: the centres are 0.3 mm too close there. Set the eccentric bush at the ring’s highest place, not where you happen to be.',
     joints: [joint(side('cotterpin-ring-gear-kit-80', 'ring gear and eccentric bush', 'A B', ''), side('larkfield-wren-80', 'grip ring of the focuser', 'A B'))],
-    symptoms: 'gear-grinds backlash-changes drive-noisy', noticed: 'Grinds for a tenth of a turn, rattles on the far side.', cause: 'The ring runs out by 0.35 mm because its clamp pulls it to one side. Mesh set at the low side is too deep at the high side.',
+    symptoms: 'gear-grinds backlash-changes drive-noisy', noticed: 'Rough and stiff for a tenth of a turn, rattles on the far side.', cause: 'The ring runs out by 0.35 mm because its clamp pulls it to one side. Mesh set at the low side is too deep at the high side.',
     readings: [read('cotterpin-ring-gear-kit-80:B', 'run-out at the tooth tips', 0.35, 'mm', 'other', 0.05), read('', 'standard centre distance', 56.8, 'mm', 'print-model', null)],
     fixes: [
       fix('set-mesh-at-the-high-side', 'Set the mesh at the high side', 'adjust', 'reversible', {
-        why: 'A little play at the low side costs focus a few micrometres and software takes it up; grinding costs the ring.', tools: 'Felt pen; strip of newspaper 0.07 mm; hex key', materials: '',
+        why: 'A little play at the low side costs focus a few micrometres and software takes it up; a mesh too deep costs the ring.', tools: 'Felt pen; strip of newspaper 0.07 mm; hex key', materials: '',
         steps: ['Unplug the motor so that the pinion is free.', 'Turn the ring by hand and mark where it is tightest.', 'At the mark lay newspaper between the teeth, turn the bush until it holds, lock it.', 'Roll the paper out: creased, not cut.', 'Measure the play on the far side; put it into the software as backlash.'],
         shows: { 2: 0 }, after: ['focus-offsets'], accept: atMost('backlash on the low side', 120, 'steps'), cautions: 'pinch', trials: 'h90 h110 h80 w150 n200 h100',
       }),

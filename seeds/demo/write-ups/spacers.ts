@@ -36,13 +36,13 @@ export const spacerWriteUps: readonly DemoWriteUp[] = [
     readings: [read('hollin-m48-spacer:B', 'length of the male thread', 4.5), read('larkfield-flattener-w1:C', 'depth of the female thread', 4.0)],
     fixes: [
       fix('ring-under-the-shoulder', 'Ring of 0.6 mm under the shoulder', 'shim', 'reversible', { why: 'Brings the load back to the shoulder; take 0.1 mm into account in the stack.', tools: 'Caliper', materials: 'Shim ring 48 × 54 × 0.6 mm', steps: ['Slip the ring on, screw home.', 'Hold it against a lamp: no light at the shoulder.', 'Correct the stack elsewhere by 0.6 mm less 0.5.'], shows: { 0: 0 }, after: ['back-focus', 'flats'], accept: atMost('light at the shoulder', 0.02, 'mm'), trials: 'h0 h0.01 h h0.02' }),
-      fix('shorten-the-thread', 'Shorten the thread by 0.7 mm', 'trim', 'permanent', { why: 'Leaves 3.8 mm, as Rev C.', tools: 'Flat plate; 240 grit wet paper; thread gauge or a spare nut', materials: 'Water; brush', steps: ['Take the spacer away from all glass.', 'Rub the thread’s end on wet paper, turning the ring in the hand.', 'Every 0.2 mm measure at four places.', 'Break the first thread with a needle file, brush, wash and dry.', 'Run the nut over it: no grinding.'], after: ['back-focus'], accept: atMost('light at the shoulder', 0.02, 'mm'), cautions: 'dust swarf', trials: 'h0 w', madeRight: 'hollin-m48-spacer:C' }),
+      fix('shorten-the-thread', 'Shorten the thread by 0.7 mm', 'trim', 'permanent', { why: 'Leaves 3.8 mm, as Rev C.', tools: 'Flat plate; 240 grit wet paper; thread gauge or a spare nut', materials: 'Water; brush', steps: ['Take the spacer away from all glass.', 'Rub the thread’s end on wet paper, turning the ring in the hand.', 'Every 0.2 mm measure at four places.', 'Break the first thread with a needle file, brush, wash and dry.', 'Run the nut over it: it must go freely.'], after: ['back-focus'], accept: atMost('light at the shoulder', 0.02, 'mm'), cautions: 'dust swarf', trials: 'h0 w', madeRight: 'hollin-m48-spacer:C' }),
     ],
     drawings: [drawing(barrelSection({ title: 'THREAD LONGER THAN ITS HOLE', outer: 'FLATTENER', inner: 'SPACER', barrel: 48, bore: 48, barrelLength: 4.5, boreDepth: 4 }), 'Section: male thread of 4.5 mm in a hole of 4.0 mm bottoms half a millimetre early.', 'The shoulder never lands.')],
   }),
   writeUp('m48-ring-is-stuck-on-the-flattener', 'M48 ring is stuck on the flattener', {
     by: 'calla', daysAgo: 810,
-    summary: 'Two fine threads of bare aluminium seize. Even grip, a cold pack and patience free it; grips and heat guns deform it.',
+    summary: 'Two fine threads of bare aluminium seize. Even grip, a cold pack and patience free it; pliers deform it.',
     joints: [joint(side('hollin-m48-spacer', 'female thread', 'A B', 'C'), side('larkfield-flattener-w1', 'rear thread M48', 'A B C'))],
     symptoms: 'thread-stuck thread-binds', noticed: 'Neither hand nor rubber glove moves it.', cause: 'Squeezing makes the ring oval, and oval threads wedge. Dirt and bare aluminium weld at the crests.',
     readings: [],
