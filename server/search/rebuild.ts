@@ -18,7 +18,8 @@ export interface RebuildParts {
   readonly indexUid: string;
   readonly clock: () => Date;
   readonly logger: Logger;
-  readonly say: (line: string) => void;
+  /** Told after each stage, which waits for it. */
+  readonly say: (line: string) => void | Promise<void>;
 }
 
 /**
@@ -41,20 +42,20 @@ export async function rebuildSearch(
   await ensureSearchIndex(engine, besideUid);
 
   const written = await fill(documents, createSearchIndex(engine, besideUid));
-  say(`${written.size} write-ups are written beside.`);
+  await say(`${written.size} write-ups are written beside.`);
 
   const swapped = await engine
     .swapIndexes([{ indexes: [indexUid, besideUid], rename: false }])
     .waitTask(taskPatience);
   if (swapped.status !== 'succeeded')
     throw new Error(`The indexes could not be swapped: ${swapped.error?.message ?? swapped.status}`);
-  say('The new index answers.');
+  await say('The new index answers.');
 
   const changedMeanwhile = await noteChanges(documents, outbox, clock(), written);
   const index = createSearchIndex(engine, indexUid);
   while ((await workBatch({ outbox, documents, index, clock, logger })) > 0);
   await removeIndex(engine, besideUid);
-  say(`${changedMeanwhile} write-ups had changed meanwhile; the old index is gone.`);
+  await say(`${changedMeanwhile} write-ups had changed meanwhile; the old index is gone.`);
   return { written: written.size, changedMeanwhile };
 }
 
