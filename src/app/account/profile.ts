@@ -51,7 +51,7 @@ import { Accounts } from './accounts';
         <span role="status">{{ saved() ? 'Saved.' : '' }}</span>
       </div>
     </form>
-    <p class="beside">
+    <p class="links">
       <a routerLink="/my/write-ups">My write-ups</a>
       <a routerLink="/account/forgotten">Change the password</a>
     </p>

@@ -37,7 +37,7 @@ import { DraftEditing } from './draft-editing';
     h2::before {
       content: '+';
       display: inline-block;
-      inline-size: 1.1ch;
+      inline-size: 1.6ch;
       font-family: var(--sl-mono);
       font-weight: 400;
       color: var(--sl-accent);

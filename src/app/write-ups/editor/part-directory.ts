@@ -38,12 +38,12 @@ export class PartDirectory {
     return revision ? `${this.partName(revision.partId)} rev ${revision.label}` : `revision ${id}`;
   }
 
-  /** Parts whose name or maker matches; at most twelve. */
-  find(words: string): Observable<PartSummary[]> {
+  /** Parts whose name or maker matches; at most twelve. Null where the catalogue does not answer. */
+  find(words: string): Observable<PartSummary[] | null> {
     return this.api.call(hardwareRoutes.listParts, { query: { q: words, limit: 12 } }).pipe(
       map((page) => page.items),
       tap((parts) => this.keep(parts)),
-      catchError(() => of([])),
+      catchError(() => of(null)),
     );
   }
 

@@ -4,7 +4,6 @@ import {
   ElementRef,
   Injector,
   afterNextRender,
-  computed,
   inject,
   input,
   viewChild,
@@ -49,14 +48,18 @@ import { PartDirectory } from './part-directory';
         [matAutocomplete]="found"
       />
       <mat-autocomplete #found="matAutocomplete" [displayWith]="nothing" (optionSelected)="choose($event)">
-        @for (part of parts(); track part.id) {
+        @for (part of parts() ?? []; track part.id) {
           <mat-option [value]="part">
             <strong>{{ part.name }}</strong>
             <span class="sl-quiet">{{ part.maker.name }}, {{ kinds[part.kind] }}</span>
           </mat-option>
         } @empty {
-          @if (searched()) {
-            <mat-option disabled>No part of that name in the catalogue</mat-option>
+          @if (parts() !== undefined) {
+            <mat-option disabled>{{
+              parts() === null
+                ? 'The catalogue does not answer at the moment'
+                : 'No part of that name in the catalogue'
+            }}</mat-option>
           }
         }
       </mat-autocomplete>
@@ -92,7 +95,6 @@ export class PartPicker {
   private readonly another = viewChild<ElementRef<HTMLButtonElement>>('another');
   protected readonly kinds = partKindWords;
   protected readonly words = new FormControl<string | PartSummary>('', { nonNullable: true });
-  protected readonly searched = computed(() => this.parts() !== undefined);
 
   protected readonly parts = toSignal(
     this.words.valueChanges.pipe(
