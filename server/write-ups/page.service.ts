@@ -31,10 +31,11 @@ export type PageService = ReturnType<typeof createPageService>;
 export function createPageService({ knex, published, drafts, trials, views, comparer }: PageParts) {
   return {
     async readWriteUp(caller: Caller, slug: string): Promise<WriteUpPage> {
-      const writeUp = await find(slug);
-      const [editions, content, reported, myDraftId] = await Promise.all([
+      const writeUp = await published.withContent(slug);
+      if (!writeUp) throw new NoSuchWriteUp();
+      const [editions, view, reported, myDraftId] = await Promise.all([
         published.editionsOf(writeUp.id),
-        contentOf(writeUp.publishedEditionId),
+        views.viewOf(writeUp.content, writeUp.id),
         trials.trialsOf(writeUp.id),
         caller.accountId === null ? undefined : drafts.openEditionOf(knex, writeUp.id, caller.accountId),
       ]);
@@ -46,7 +47,7 @@ export function createPageService({ knex, published, drafts, trials, views, comp
         editionCount: editions.length,
         firstPublishedAt: writeUp.firstPublishedAt.toISOString(),
         authors,
-        view: await views.viewOf(content, writeUp.id),
+        view,
         trials: reported,
         mayEdit: isModerator(caller) || authors.some((author) => author.id === caller.accountId),
         myDraftId: myDraftId ?? null,

@@ -25,13 +25,22 @@ export type PublishedStore = ReturnType<typeof createPublishedStore>;
 export function createPublishedStore(knex: Knex) {
   return {
     async bySlug(slug: string): Promise<WriteUpRow | undefined> {
-      return knex('write_ups')
-        .where('slug', slug)
-        .whereNotNull('published_edition_id')
-        .first('id', 'slug', {
-          publishedEditionId: 'published_edition_id',
-          firstPublishedAt: 'first_published_at',
+      return knex('write_ups').where('slug', slug).whereNotNull('published_edition_id').first('id', 'slug', {
+        publishedEditionId: 'published_edition_id',
+        firstPublishedAt: 'first_published_at',
+      });
+    },
+
+    /** The write-up with the text that is published now. */
+    async withContent(slug: string): Promise<(WriteUpRow & { content: EditionContent }) | undefined> {
+      const row = await knex('write_ups as w')
+        .join('editions as e', 'e.id', 'w.published_edition_id')
+        .where('w.slug', slug)
+        .first('w.id', 'w.slug', 'e.content', {
+          publishedEditionId: 'w.published_edition_id',
+          firstPublishedAt: 'w.first_published_at',
         });
+      return row && { ...row, content: fromJson<EditionContent>(row.content) };
     },
 
     /** Every published edition without its text, the newest first. */

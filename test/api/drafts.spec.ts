@@ -216,7 +216,7 @@ describe('saving', () => {
     expect(draft.content.cause).toBe(cause);
     const { body } = await author.get(`/api/drafts/${draft.id}/preview`).expect(200);
     expect(body.view.cause.html).toContain('<strong>bold</strong>');
-    expect(body.view.cause.html).not.toMatch(/onerror|javascript:/i);
+    expect(body.view.cause.html).not.toMatch(/<img|<script|href="javascript/i);
   });
 });
 

@@ -165,7 +165,7 @@ describe('the history', () => {
       view: { summary: content.summary },
     });
     expect((await app.visitor().get(`/api/write-ups/${slug}/editions/3`)).status).toBe(404);
-    expect((await app.visitor().get(`/api/write-ups/${slug}/editions/x`)).status).toBe(422);
+    expect((await app.visitor().get(`/api/write-ups/${slug}/editions/x`)).status).toBe(404);
   });
 
   it('does not show editions that are drafts or on the desk', async () => {
