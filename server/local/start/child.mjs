@@ -62,7 +62,7 @@ export function startChild({ name, command, args, logFile, env = process.env, cw
  * Waits until `isReady` answers true. Throws one sentence with the last lines of the log when the child ends before
  * that or `seconds` have passed.
  */
-export async function untilReady(child, isReady, seconds = 60) {
+export async function untilReady(child, isReady, seconds = 120) {
   const end = Date.now() + seconds * 1000;
   for (;;) {
     if (child.isOver()) {

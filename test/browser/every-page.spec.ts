@@ -1,0 +1,65 @@
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
+import { expectAccessible } from './support/accessibility.js';
+import { startBrowser, viewports, type TestBrowser, type TestPage } from './support/browser.js';
+
+let browser: TestBrowser;
+let opened: TestPage[] = [];
+
+beforeAll(async () => {
+  browser = await startBrowser();
+});
+afterEach(async () => {
+  await Promise.all(opened.map((page) => page.close()));
+  opened = [];
+});
+afterAll(async () => {
+  await browser.close();
+});
+
+async function open(viewport: keyof typeof viewports): Promise<TestPage> {
+  const page = await browser.open(viewport);
+  opened.push(page);
+  return page;
+}
+
+/** Each with the role of the demo that is to see it. */
+const pages: [path: string, role: string | null][] = [
+  ['/', null],
+  ['/search?q=rocks', null],
+  ['/hardware', null],
+  ['/account/sign-in', null],
+  ['/account/sign-up', null],
+  ['/bench', null],
+  ['/my/write-ups', 'author'],
+  ['/write-ups/new', 'author'],
+  ['/desk', 'moderator'],
+  ['/admin/accounts', 'administrator'],
+];
+
+describe.each(Object.keys(viewports) as (keyof typeof viewports)[])('on a %s', (viewport) => {
+  it.each(pages)(
+    '%s (as %s) causes no error, breaks no rule of WCAG 2.2 AA and is not wider than the screen',
+    async (path, role) => {
+      const page = await open(viewport);
+      if (role) await page.signInAs(role);
+
+      await page.visit(path);
+
+      await expectAccessible(page.page);
+      const overhang = await page.page.evaluate(
+        () => document.documentElement.scrollWidth - window.innerWidth,
+      );
+      expect(overhang).toBeLessThanOrEqual(0);
+      expect(page.errors()).toEqual([]);
+    },
+  );
+});
+
+describe('without scripts', () => {
+  it('a search arrives with its results in it', async () => {
+    const answer = await fetch(`${browser.address}/search?q=rocks`);
+
+    expect(answer.status).toBe(200);
+    expect(await answer.text()).toMatch(/href="\/write-ups\/[a-z0-9-]+"/);
+  });
+});
