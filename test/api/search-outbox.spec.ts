@@ -245,7 +245,7 @@ describe('one batch of work', () => {
       indexUid,
       clock: () => now,
       logger,
-      say: (line) => said.push(line),
+      say: (line) => void said.push(line),
     });
     rebuilt = true;
     await searching;
