@@ -143,9 +143,9 @@ function shownHit(
   const hit: Record<string, unknown> = { ...shown };
   if (attributesToHighlight.length > 0 || attributesToCrop.length > 0) {
     const formatting = formattingOf(request);
-    const crops = formatting.crop.map(({ attribute }) => attribute);
+    const named = [...attributesToHighlight, ...formatting.crop.map(({ attribute }) => attribute)];
     const paths = shownPaths(
-      [...request.attributesToRetrieve, ...attributesToHighlight, ...crops],
+      [...request.attributesToRetrieve, ...named.filter((attribute) => attribute !== '*')],
       displayed,
     );
     hit['_formatted'] = formatDocument(project(document, paths), matcher, formatting);
