@@ -4,7 +4,7 @@ import { PartDirectory } from './part-directory';
 
 export interface NamedRevision {
   id: number;
-  /** "M1 rev B" */
+  /** "M1 Rev B" */
   name: string;
   holds: boolean;
 }
@@ -21,7 +21,7 @@ export class JointRevisions {
         const holds = side.revisions.some((mark) => mark.revisionId === revision.id && mark.holds);
         named.set(revision.id, {
           id: revision.id,
-          name: `${this.directory.partName(revision.partId)} rev ${revision.label}`,
+          name: `${this.directory.partName(revision.partId)} ${revision.label}`,
           holds: holds || (named.get(revision.id)?.holds ?? false),
         });
       }

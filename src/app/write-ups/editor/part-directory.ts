@@ -32,10 +32,10 @@ export class PartDirectory {
     return undefined;
   }
 
-  /** "M1 rev B"; the number where the catalogue does not know it. */
+  /** "M1 Rev B"; the number where the catalogue does not know it. */
   revisionName(id: number): string {
     const revision = this.revision(id);
-    return revision ? `${this.partName(revision.partId)} rev ${revision.label}` : `revision ${id}`;
+    return revision ? `${this.partName(revision.partId)} ${revision.label}` : `revision ${id}`;
   }
 
   /** Parts whose name or maker matches; at most twelve. Null where the catalogue does not answer. */
