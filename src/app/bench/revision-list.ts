@@ -49,6 +49,8 @@ interface Chip {
     .not {
       border-color: var(--sl-rule);
       color: var(--sl-quiet);
+    }
+    .not > span:first-child {
       text-decoration: line-through;
     }
     .unknown {

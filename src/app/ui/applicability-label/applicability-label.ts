@@ -35,7 +35,8 @@ const icons: Record<Applicability['verdict'], IconName> = {
       color: var(--sl-quiet);
     }
     .line sl-icon {
-      align-self: center;
+      align-self: start;
+      margin-block-start: 0.15em;
     }
     .holds {
       color: var(--sl-accent);
