@@ -353,6 +353,19 @@ describe('cautions', () => {
     expect((await deskEdition(editionId)).cautions).toHaveLength(1);
   });
 
+  it('cannot slip away while the edition that needs them is published', async () => {
+    const fix = knifeFix();
+    const draft = await onDesk(completeContent(joint, { fixes: [fix] }));
+    const { body: caution } = await place(draft.id, cautionFor(fix.key, 'blade')).expect(201);
+    const [published, removed] = await Promise.all([
+      publish(draft.id),
+      moderator.delete(`/api/desk/cautions/${caution.id}`),
+    ]);
+    const isPublished = (await edition(draft.id)).state === 'published';
+    expect([published.status, removed.status]).toEqual(isPublished ? [200, 409] : [409, 204]);
+    expect((await deskEdition(draft.id)).cautions).toHaveLength(isPublished ? 1 : 0);
+  });
+
   it('can be worded anew, but not so that a published hazard stays unanswered', async () => {
     const fix = knifeFix();
     const { editionId } = await publishNew(author, moderator, completeContent(joint, { fixes: [fix] }), [
