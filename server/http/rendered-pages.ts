@@ -17,6 +17,7 @@ export function renderedPages(render: RenderPage, origin: string): RequestHandle
       next();
       return;
     }
+    if (!isReadable(request.originalUrl)) throw new UnreadableAddress();
     const page = await render(webRequest(request, origin));
     if (page === null) {
       next();
@@ -30,6 +31,20 @@ export function renderedPages(render: RenderPage, origin: string): RequestHandle
     const body = await page.text();
     response.send(body.replace(noncePlaceholder, nonceOf(response.locals)));
   };
+}
+
+class UnreadableAddress extends Error {
+  readonly status = 400;
+}
+
+/** Whether each percent sign of an address stands for something; the router of the app takes no other. */
+function isReadable(address: string): boolean {
+  try {
+    decodeURIComponent(address);
+    return true;
+  } catch {
+    return false;
+  }
 }
 
 /** An error page with the request id; the error itself stays in the log. */
