@@ -74,9 +74,10 @@ export function partOutline(title: string, outline: Outline): string {
       points.push(`${(front[0] + r * Math.cos(angle)).toFixed(1)} ${(front[1] + r * Math.sin(angle)).toFixed(1)}`);
     }
     sheet.path(`M${points.join('L')}Z`, 'outline', 'none').circle(front, radius, 'axis').circle(front, radius * 0.62, 'outline', 'none').centre(front, radius + 34);
-    const wide = Math.max(40, (outline.width / pitch) * radius * 2);
+    const wide = Math.max(30, (outline.width / pitch) * radius * 2);
     for (const sign of [1, -1]) sheet.box(side[0] - wide / 2, sign > 0 ? side[1] + radius * 0.62 : side[1] - radius - tooth, wide, radius * 0.38 + tooth, 'steel');
-    sheet.line([side[0] - wide, side[1]], [side[0] + wide, side[1]], 'axis');
+    for (const sign of [1, -1]) sheet.line([side[0] + (sign * wide) / 2, side[1] - radius * 0.62], [side[0] + (sign * wide) / 2, side[1] + radius * 0.62]);
+    sheet.line([side[0] - wide / 2 - 36, side[1]], [side[0] + wide / 2 + 36, side[1]], 'axis');
     sheet.across(front[0] - radius, front[0] + radius, 500, `PITCH Ø${figure(pitch)}`, front[1]).across(side[0] - wide / 2, side[0] + wide / 2, 500, figure(outline.width), side[1] + radius + tooth);
     sheet.text(48, 62, `${outline.teeth} TEETH · MODULE ${outline.module}`, { height: 14 });
     return sheet.toSvg();
@@ -104,12 +105,14 @@ export function partOutline(title: string, outline: Outline): string {
     return sheet.toSvg();
   }
   if (outline.shape === 'bar') {
-    const scale = 420 / Math.max(outline.length, outline.width);
+    const scale = Math.min(420 / outline.length, 260 / outline.width);
     const [w, h] = [outline.length * scale, Math.max(40, outline.width * scale)];
     sheet.box(90, 200, w, h, 'none').circle([90 + w * 0.2, 200 + h / 2], 9).circle([90 + w * 0.8, 200 + h / 2], 9).line([60, 200 + h / 2], [90 + w + 30, 200 + h / 2], 'axis');
-    const [e, v] = [Math.max(70, outline.width * scale * 0.9), Math.max(36, outline.height * scale)];
+    const endScale = Math.min(scale, 180 / outline.width);
+    const [e, v] = [outline.width * endScale, Math.max(26, outline.height * endScale)];
     sheet.cut([[640, 200 + v], [640 + e * 0.14, 200], [640 + e * 0.86, 200], [640 + e, 200 + v]], 'steel');
-    sheet.across(90, 90 + w, 440, figure(outline.length), 200 + h).across(640, 640 + e, 440, figure(outline.width), 200 + v).down(200, 200 + v, 640 + e + 50, figure(outline.height), [640 + e * 0.86, 640 + e]);
+    const under = 262 + Math.max(h, v);
+    sheet.across(90, 90 + w, under, figure(outline.length), 200 + h).across(640, 640 + e, under, figure(outline.width), 200 + v).down(200, 200 + v, 640 + e + 50, figure(outline.height), [640 + e * 0.86, 640 + e]);
     return sheet.toSvg();
   }
   const scale = 300 / Math.max(outline.width, outline.height);

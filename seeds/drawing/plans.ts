@@ -154,7 +154,7 @@ export function holePlan(pattern: HolePattern): string {
       const [sx, sy] = [-uy * holeRadius, ux * holeRadius];
       const a: Point = [at[0] - ux * reach, at[1] - uy * reach];
       const b: Point = [at[0] + ux * reach, at[1] + uy * reach];
-      sheet.path(`M${a[0] + sx} ${a[1] + sy}L${b[0] + sx} ${b[1] + sy}A${holeRadius} ${holeRadius} 0 0 1 ${b[0] - sx} ${b[1] - sy}L${a[0] - sx} ${a[1] - sy}A${holeRadius} ${holeRadius} 0 0 1 ${a[0] + sx} ${a[1] + sy}Z`, 'brass', 'none');
+      sheet.path(`M${a[0] + sx} ${a[1] + sy}L${b[0] + sx} ${b[1] + sy}A${holeRadius} ${holeRadius} 0 0 0 ${b[0] - sx} ${b[1] - sy}L${a[0] - sx} ${a[1] - sy}A${holeRadius} ${holeRadius} 0 0 0 ${a[0] + sx} ${a[1] + sy}Z`, 'brass', 'none');
     } else sheet.circle(at, holeRadius, 'outline', 'none');
     const miss = Math.hypot(at[0] - screw[0], at[1] - screw[1]);
     const bad = !pattern.slots && miss > holeRadius - screwRadius;
@@ -181,28 +181,36 @@ export interface Envelope {
 /** End view of the room round an axis: what is taken, what is wanted, and where they meet. */
 export function envelopePlan(envelope: Envelope): string {
   const sheet = new Sheet(envelope.title, 'END VIEW FROM THE CAMERA · ANGLES IN DEGREES');
-  const centre: Point = [370, 300];
+  const centre: Point = [470, 290];
   sheet.circle(centre, 96, 'outline', 'steel').circle(centre, 62, 'outline', 'none').centre(centre, 236);
   const sector = (from: number, to: number, inner: number, outer: number): string => {
     const [a, b, c, d] = [around(centre, inner, from), around(centre, outer, from), around(centre, outer, to), around(centre, inner, to)];
     const large = to - from > 180 ? 1 : 0;
     return `M${a.join(' ')}L${b.join(' ')}A${outer} ${outer} 0 ${large} 0 ${c.join(' ')}L${d.join(' ')}A${inner} ${inner} 0 ${large} 1 ${a.join(' ')}Z`;
   };
-  for (const item of envelope.taken) {
-    sheet.path(sector(item.from, item.to, 100, 188), 'outline', 'print');
-    const on = around(centre, 170, (item.from + item.to) / 2);
-    const right = on[0] >= centre[0];
-    sheet.label(on, right ? [640, Math.max(70, Math.min(500, on[1] - 20))] : [210, Math.max(70, Math.min(500, on[1] - 30))], `${item.name} ${item.from}-${item.to}°`);
-  }
   const { wanted } = envelope;
   const clashes = envelope.taken.filter((item) => item.from < wanted.to && wanted.from < item.to);
+  const names: { on: Point; text: string; colour: string }[] = [];
+  for (const item of envelope.taken) {
+    sheet.path(sector(item.from, item.to, 100, 188), 'outline', 'print');
+    names.push({ on: around(centre, 150, (item.from + item.to) / 2), text: `${item.name} ${item.from}-${item.to}°`, colour: ink.blue });
+  }
   sheet.path(sector(wanted.from, wanted.to, 104, 216), clashes.length > 0 ? 'red' : 'brass');
   for (const item of clashes) {
     sheet.add(`<path d="${sector(Math.max(item.from, wanted.from), Math.min(item.to, wanted.to), 104, 188)}" fill="url(#clash)" stroke="${ink.red}" stroke-width="1.6"/>`);
   }
-  const on = around(centre, 206, (wanted.from + wanted.to) / 2);
-  sheet.label(on, [on[0] >= centre[0] ? 660 : 160, on[1] > 300 ? 530 : 110], `${wanted.name} ${wanted.from}-${wanted.to}°`, clashes.length > 0 ? ink.red : ink.brass);
-  sheet.label(around(centre, 78, 250), [250, 545], envelope.hub);
+  const colour = clashes.length > 0 ? ink.red : ink.brass;
+  names.push({ on: around(centre, 206, (wanted.from + wanted.to) / 2), text: `${wanted.name} ${wanted.from}-${wanted.to}°`, colour });
+  names.push({ on: around(centre, 78, 290), text: envelope.hub, colour: ink.blue });
+  // Names stand in two columns, far enough apart not to run into each other.
+  for (const right of [false, true]) {
+    let free = 64;
+    for (const name of names.filter((item) => item.on[0] >= centre[0] === right).sort((one, other) => one.on[1] - other.on[1])) {
+      const y = Math.max(free, Math.min(520, name.on[1] - 26));
+      sheet.label(name.on, [right ? 730 : 100, y], name.text, name.colour);
+      free = y + 36;
+    }
+  }
   return sheet.toSvg();
 }
 

@@ -14,8 +14,11 @@ export interface Seat {
   readonly recessDepth: number;
   /** Thickness of a shim under the plate; the gap is left open without it. */
   readonly shim?: { readonly thickness: number; readonly name: string };
-  /** Take the boss away, as after a trim. */
-  readonly trimmed?: boolean;
+  /** What the two diameters are called where they are no boss and recess. */
+  readonly bossName?: string;
+  readonly recessName?: string;
+  /** Leave the shaft out. */
+  readonly open?: boolean;
 }
 
 /** Section through a plate whose boss is meant to enter a recess: overlap in red where it does not. */
@@ -25,9 +28,9 @@ export function seatSection(seat: Seat): string {
   const deep = 22 * Math.min(1, 3 / Math.max(seat.bossHeight, seat.recessDepth, 1));
   const centre = 430;
   const enters = seat.boss < seat.recess;
-  const bossDeep = seat.trimmed ? 0 : seat.bossHeight * deep;
+  const bossDeep = seat.bossHeight * deep;
   const top = 318;
-  const lift = seat.trimmed || enters ? Math.max(0, enters ? bossDeep - seat.recessDepth * deep : 0) : bossDeep;
+  const lift = enters ? Math.max(0, bossDeep - seat.recessDepth * deep) : bossDeep;
   const under = top - lift;
   const half = (seat.boss / 2) * scale;
   const recessHalf = (seat.recess / 2) * scale;
@@ -44,7 +47,7 @@ export function seatSection(seat: Seat): string {
   ];
   for (const sign of [1, -1] as const) {
     sheet.cut(body(sign), 'steel').cut(plate(sign), 'print');
-    if (!enters && !seat.trimmed && !seat.shim) {
+    if (!enters && !seat.shim) {
       sheet.clash([
         [centre + sign * recessHalf, top - 7], [centre + sign * half, top - 7], [centre + sign * half, top + 7], [centre + sign * recessHalf, top + 7],
       ]);
@@ -55,15 +58,16 @@ export function seatSection(seat: Seat): string {
       sheet.box(Math.min(inner, outer), top - lift, Math.abs(outer - inner), lift, 'shim', 'brass');
     }
   }
-  sheet.box(centre - 16, top - 150, 32, 280, 'none').line([centre, 96], [centre, top + 160], 'axis');
-  sheet.across(centre - half, centre + half, 128, `BOSS Ø${figure(seat.boss)}`, [under - 62, under - 62]);
-  sheet.across(centre - recessHalf, centre + recessHalf, top + 190, `RECESS Ø${figure(seat.recess)}`, [top + recessDeep, top + recessDeep]);
-  if (bossDeep > 0) sheet.down(under, under + bossDeep, centre - wide - 46, figure(seat.bossHeight), [centre - wide, centre - half]);
+  if (!seat.open) sheet.box(centre - 16, top - 150, 32, 280, 'none');
+  sheet.line([centre, 140], [centre, top + 160], 'axis');
+  sheet.across(centre - half, centre + half, 128, `${seat.bossName ?? 'BOSS'} Ø${figure(seat.boss)}`, [under - 62, under - 62]);
+  sheet.across(centre - recessHalf, centre + recessHalf, top + 190, `${seat.recessName ?? 'RECESS'} Ø${figure(seat.recess)}`, [top + recessDeep, top + recessDeep]);
+  sheet.down(under, under + bossDeep, centre - wide - 46, figure(seat.bossHeight), [centre - wide, centre - half]);
   sheet.down(top, top + recessDeep, centre + wide + 46, figure(seat.recessDepth), [centre + wide, centre + recessHalf]);
   sheet.label([centre + wide - 30, under - 40], [centre + wide + 40, 170], seat.upper);
   sheet.label([centre + wide - 30, top + 96], [centre + wide + 40, top + 150], seat.lower);
   if (seat.shim) sheet.label([centre - wide + 22, top - lift / 2], [centre - wide - 20, 210], `${seat.shim.name} ${figure(seat.shim.thickness, 2)}`, ink.brass);
-  else if (!enters && !seat.trimmed) {
+  else if (!enters) {
     sheet.text(48, 62, `LIP OVERLAPS THE RIM BY ${figure((seat.boss - seat.recess) / 2, 2)} ALL ROUND`, { colour: ink.red, height: 14 });
   }
   return sheet.toSvg();
@@ -135,7 +139,7 @@ export function stackSection(stack: Stack): string {
     const narrow = width < 76;
     if (!narrow) sheet.across(x, x + width, 450, length, axis + reach);
     const tier = index % 3;
-    sheet.label([x + width / 2, axis - reach + 12], [x + width / 2 + 12, 148 - tier * 34], narrow ? `${layer.name} ${length}` : layer.name, layer.hatch === 'shim' ? ink.brass : ink.blue);
+    sheet.label([x + width / 2, axis - reach + 12], [x + width / 2 + 12, 80 + tier * 34], narrow ? `${layer.name} ${length}` : layer.name, layer.hatch === 'shim' ? ink.brass : ink.blue);
     x += width;
   });
   sheet.line([110, axis], [Math.max(x, 150 + longest * scale) + 40, axis], 'axis');
@@ -160,6 +164,9 @@ export interface BarrelInBore {
   readonly barrelLength: number;
   readonly boreDepth: number;
   readonly shim?: string;
+  /** The bore goes right through; the inner piece is solid. */
+  readonly through?: boolean;
+  readonly solid?: boolean;
 }
 
 /** Section of a barrel pushed into a bore from the right: radial room, and what bottoms. */
@@ -171,18 +178,27 @@ export function barrelSection(seat: BarrelInBore): string {
   const barrelHalf = Math.abs(seat.bore - seat.barrel) < 0.005 ? 118 : seat.bore > seat.barrel ? 106 : 124;
   const mouth = 520;
   const bottom = mouth - seat.boreDepth * scale;
-  const bottoms = seat.barrelLength > seat.boreDepth;
+  const bottoms = !seat.through && seat.barrelLength > seat.boreDepth;
   const tip = bottoms ? bottom : mouth - seat.barrelLength * scale;
   const shoulder = tip + seat.barrelLength * scale;
   for (const sign of [1, -1] as const) {
+    const wall = seat.through ? bottom : bottom - 50;
+    const rim = seat.through ? boreHalf : 46;
     sheet.cut([
-      [bottom - 50, axis + sign * 46], [bottom, axis + sign * 46], [bottom, axis + sign * boreHalf], [mouth, axis + sign * boreHalf],
-      [mouth, axis + sign * 176], [bottom - 50, axis + sign * 176],
+      [wall, axis + sign * rim], [bottom, axis + sign * rim], [bottom, axis + sign * boreHalf], [mouth, axis + sign * boreHalf],
+      [mouth, axis + sign * 176], [wall, axis + sign * 176],
     ], 'steel');
-    sheet.cut([
-      [tip, axis + sign * 62], [shoulder + 70, axis + sign * 62], [shoulder + 70, axis + sign * 168], [shoulder, axis + sign * 168],
-      [shoulder, axis + sign * barrelHalf], [tip, axis + sign * barrelHalf],
-    ], 'print');
+    if (!seat.solid) {
+      sheet.cut([
+        [tip, axis + sign * 62], [shoulder + 70, axis + sign * 62], [shoulder + 70, axis + sign * 168], [shoulder, axis + sign * 168],
+        [shoulder, axis + sign * barrelHalf], [tip, axis + sign * barrelHalf],
+      ], 'print');
+    } else if (sign === 1) {
+      sheet.cut([
+        [tip, axis - barrelHalf], [shoulder, axis - barrelHalf], [shoulder, axis - 168], [shoulder + 70, axis - 168],
+        [shoulder + 70, axis + 168], [shoulder, axis + 168], [shoulder, axis + barrelHalf], [tip, axis + barrelHalf],
+      ], 'print');
+    }
     if (seat.shim && boreHalf > barrelHalf) {
       sheet.box(tip + 20, sign > 0 ? axis + barrelHalf : axis - boreHalf, Math.min(mouth, shoulder) - tip - 24, boreHalf - barrelHalf, 'shim', 'brass');
     }
@@ -192,11 +208,11 @@ export function barrelSection(seat: BarrelInBore): string {
     if (bottoms) sheet.clash([[bottom - 8, axis + sign * 62], [bottom + 5, axis + sign * 62], [bottom + 5, axis + sign * barrelHalf], [bottom - 8, axis + sign * barrelHalf]]);
   }
   sheet.line([bottom - 90, axis], [shoulder + 110, axis], 'axis');
-  sheet.down(axis - boreHalf, axis + boreHalf, 96, `BORE Ø${figure(seat.bore, 2)}`, [bottom, bottom]);
-  sheet.down(axis - barrelHalf, axis + barrelHalf, shoulder + 116, `BARREL Ø${figure(seat.barrel, 2)}`, shoulder + 70);
+  sheet.down(axis - boreHalf, axis + boreHalf, 96, `Ø${figure(seat.bore, 2)}`, [bottom, bottom]);
+  sheet.down(axis - barrelHalf, axis + barrelHalf, shoulder + 116, `Ø${figure(seat.barrel, 2)}`, shoulder + 70);
   sheet.across(bottom, mouth, 92, `DEPTH ${figure(seat.boreDepth)}`, axis - 176);
   sheet.across(tip, shoulder, 526, `LENGTH ${figure(seat.barrelLength)}`, [axis + barrelHalf, axis + 168]);
-  sheet.label([bottom - 20, axis - 150], [bottom - 40, 70], seat.outer);
+  sheet.label([bottom + (seat.through ? 30 : -20), axis - 150], [bottom - 40, 70], seat.outer);
   sheet.label([shoulder + 50, axis - 140], [shoulder + 90, 100], seat.inner);
   if (seat.shim) sheet.label([tip + 60, axis - (boreHalf + barrelHalf) / 2], [shoulder + 70, 64], seat.shim, ink.brass);
   if (bottoms) sheet.text(48, 604, `BOTTOMS ${figure(seat.barrelLength - seat.boreDepth, 2)} EARLY`, { colour: ink.red, height: 14 });

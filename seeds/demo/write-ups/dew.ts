@@ -19,7 +19,7 @@ export const dewWriteUps: readonly DemoWriteUp[] = [
       }),
       fix('strip-instead-of-the-ring', 'A strip in place of the ring', 'swap', 'reversible', { why: 'A strip closes round any diameter.', materials: 'Dew strip 60 Rev B or C', steps: ['Close it just behind the shield’s front edge, ends side by side.', 'Never let the heated length lie double.'], accept: atLeast('lens warmer than the air (°C)', 1.5, 'deg'), cautions: 'heater-hot', trials: 'h h h' }),
     ],
-    drawings: [drawing(barrelSection({ title: 'DEW SHIELD IN THE DEW RING', outer: 'DEW RING', inner: 'DEW SHIELD', barrel: 80.4, bore: 80.2, barrelLength: 40, boreDepth: 40 }), 'Section: dew shield of 80.40 mm against a bore of 80.20 mm; overlap in red.', 'A press fit nobody wants.')],
+    drawings: [drawing(barrelSection({ title: 'DEW SHIELD IN THE DEW RING', outer: 'DEW RING', inner: 'DEW SHIELD', barrel: 80.4, bore: 80.2, barrelLength: 16, boreDepth: 16, through: true }), 'Section: dew shield of 80.40 mm against a bore of 80.20 mm; overlap in red.', 'A press fit nobody wants.')],
   }),
   writeUp('dew-strip-60-leaves-a-cold-spot-at-its-ends', 'Dew strip 60 leaves a cold spot at its ends', {
     by: 'xenia', daysAgo: 660,

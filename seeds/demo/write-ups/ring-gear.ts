@@ -26,7 +26,7 @@ export const ringGearWriteUps: readonly DemoWriteUp[] = [
       }),
     ],
     drawings: [
-      drawing(meshPlan({ title: 'CLAMP SCREW IN THE RING’S WAY'.replace('’', "'"), ring: 'RING GEAR', pinion: 'PINION', ringTeeth: 110, pinionTeeth: 16, module: 0.8, centres: 50.4, screw: { angle: 60, reach: 3 } }), 'Plan: ring gear and pinion in mesh; the focuser’s clamp screw stands in the rim’s way at 60 degrees.', 'Once a turn the rim meets the screw.'),
+      drawing(meshPlan({ title: "CLAMP SCREW IN THE RING'S WAY", ring: 'RING GEAR', pinion: 'PINION', ringTeeth: 110, pinionTeeth: 16, module: 0.8, centres: 50.4, screw: { angle: 60, reach: 3 } }), 'Plan: ring gear and pinion in mesh; the focuser’s clamp screw stands in the rim’s way at 60 degrees.', 'Once a turn the rim meets the screw.'),
       drawing(envelopePlan({ title: 'TRAVEL KEPT AWAY FROM THE SCREW', hub: 'FOCUS RING', taken: [{ from: 20, to: 40, name: 'CLAMP SCREW' }], wanted: { from: 80, to: 320, name: 'TRAVEL USED' } }), 'End view: the travel used from 80 to 320 degrees leaves out the clamp screw at 20 to 40 degrees.', 'The travel that is used misses the screw.'),
     ],
     later: [
@@ -65,7 +65,7 @@ export const ringGearWriteUps: readonly DemoWriteUp[] = [
         why: 'Kits Rev A and B are bored 75.6 mm and clamp without shims.', tools: 'Hex key 2 mm', materials: 'Ring Rev A or B', steps: ['Ask the maker: he keeps a few.', 'Fit it and set the mesh with a strip of newspaper.'], after: ['focus-offsets'], accept: atMost('run-out at the teeth', 0.2, 'mm'),
       }),
     ],
-    drawings: [drawing(barrelSection({ title: 'GRIP RING IN THE RING GEAR', outer: 'RING GEAR', inner: 'GRIP RING', barrel: 75.4, bore: 76.9, barrelLength: 15, boreDepth: 15, shim: 'BRASS 2 × 0.35' }), 'Section: grip ring of 75.40 mm in a bore of 76.90 mm with brass strip in the gap.', 'What the strip has to fill.')],
+    drawings: [drawing(barrelSection({ title: 'GRIP RING IN THE RING GEAR', outer: 'RING GEAR', inner: 'GRIP RING', barrel: 75.4, bore: 76.9, barrelLength: 15, boreDepth: 15, shim: 'BRASS 2 × 0.35', through: true }), 'Section: grip ring of 75.40 mm in a bore of 76.90 mm with brass strip in the gap.', 'What the strip has to fill.')],
     later: [
       edition('kaja', 260, 'Two layers instead of one; run-out told.', (earlier) => ({
         ...withFix(earlier, 'brass-strip-under-the-ring', { steps: ['Degrease the knurl with a dry brush.', 'Cut two strips of 236 mm; snips leave edges as sharp as a knife, so break them with a file and wear gloves.', 'Wrap them one over the other with the joints on opposite sides, a spot of tape at each end.', 'Slip the ring over and clamp it with a quarter turn less than you would like.', 'Turn it by hand against the pinion: where it binds, the strip lies double. Run-out under 0.2 mm is good.'] }),
@@ -107,7 +107,7 @@ export const ringGearWriteUps: readonly DemoWriteUp[] = [
         steps: ['Take the motor off and out of the room. Seal its bearing with clay round the shaft and wrap the body in a bag: filings in the gearbox are its end.', 'Clamp by the shaft’s end only, in soft jaws.', 'File a flat 8 mm long until the caliper reads 4.6 mm across.', 'Brush, tape the dust off, then take the clay away.', 'Mount the pinion with a screw on the flat.'], accept: atMost('chalk lines apart after 100 reversals', 0.1, 'mm'), cautions: 'swarf dust', trials: 'h0 h0 h', madeRight: 'tarn-m1:D',
       }),
     ],
-    drawings: [drawing(barrelSection({ title: 'SHAFT IN THE PINION', outer: 'PINION', inner: 'SHAFT', barrel: 4.99, bore: 5.06, barrelLength: 14, boreDepth: 12 }), 'Section: shaft of 4.99 mm in a pinion bore of 5.06 mm.', 'A slip fit: the screw does all the work.')],
+    drawings: [drawing(barrelSection({ title: 'SHAFT IN THE PINION', outer: 'PINION', inner: 'SHAFT', barrel: 4.99, bore: 5.06, barrelLength: 12, boreDepth: 12, through: true, solid: true }), 'Section: shaft of 4.99 mm in a pinion bore of 5.06 mm.', 'A slip fit: the screw does all the work.')],
     later: [
       edition('author', 120, 'M1 Rev D has a flat: marked as not concerned, and the flat as made right.', (earlier) => withFix(earlier, 'file-a-flat-on-the-shaft', { why: 'On a flat the screw cannot plough: it would have to lift. 0.4 mm is enough. **M1 Rev D comes with such a flat**; on an older one ask yourself whether a new motor is not the better way.' })),
     ],

@@ -1,6 +1,6 @@
 import { holePlan } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { barrelSection, seatSection, stackSection, tiltSection } from '../../drawing/sections.js';
+import { barrelSection, stackSection, tiltSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Back focus, spacers, reducers, tilt. */
@@ -66,7 +66,7 @@ export const spacerWriteUps: readonly DemoWriteUp[] = [
       fix('five-mm-pull-screws', 'Pull screws of 5 mm', 'swap', 'reversible', { why: 'One millimetre less and the head clamps.', tools: 'Hex key 2 mm', materials: 'Three M2.5 × 5 screws', steps: ['Camera off, cap on, over a towel.', 'Change one screw at a time so that the tilt stays.', 'Tighten by turns, then try each push screw: it must resist.'], after: ['flats', 'back-focus'], accept: atMost('best focus of opposite corners apart', 12, 'um'), trials: 'h6 h8 h h7 n15', madeRight: 'hollin-tilt-plate:C' }),
       fix('washers-under-the-heads', 'Washers under the heads', 'shim', 'reversible', { why: 'Half a millimetre under the head does the same.', tools: 'Tweezers', materials: 'Three washers 2.5 × 5 × 0.5 mm', steps: ['As above, a washer under each head.', 'Check that heads do not stand proud of the ring.'], after: ['flats'], accept: atMost('best focus of opposite corners apart', 12, 'um') }),
     ],
-    drawings: [drawing(seatSection({ title: 'PULL SCREW IN ITS HOLE', upper: 'TILT PLATE', lower: 'CAMERA FLANGE', boss: 24, bossHeight: 5.6, recess: 25, recessDepth: 5.2 }), 'Section: what is 5.6 mm long stands in a hole of 5.2 mm and keeps the faces apart.', 'It bottoms before it pulls.')],
+    drawings: [drawing(barrelSection({ title: 'PULL SCREW IN ITS HOLE', outer: 'CAMERA FLANGE', inner: 'PULL SCREW', barrel: 2.5, bore: 2.5, barrelLength: 5.6, boreDepth: 5.2, solid: true }), 'Section: a screw that reaches 5.6 mm in a hole 5.2 mm deep bottoms before its head clamps.', 'It bottoms before it pulls.')],
   }),
   writeUp('printed-spacer-has-crept-and-tilts-the-camera', 'Printed spacer has crept and tilts the camera', {
     by: 'edda', daysAgo: 700,
