@@ -1,4 +1,4 @@
-import { MeilisearchApiError, MeilisearchError } from 'meilisearch';
+import { MeilisearchError } from 'meilisearch';
 import { ProblemError } from '../http/problems.js';
 
 /** The engine does not answer, or not yet; nothing of the caller's is wrong. */
@@ -17,11 +17,11 @@ export class SearchUnavailable extends ProblemError {
   }
 }
 
-/** Whether the engine could not be asked, as against having refused a question as wrongly put. */
+/**
+ * Whether an error is the engine's. Its refusals count too: every question is put together here out of checked pieces, so
+ * one that is refused meets an index without its settings, which the worker is about to mend.
+ */
 export function isUnavailable(error: unknown): boolean {
-  if (error instanceof MeilisearchApiError) return error.response.status !== 400;
-  return (
-    error instanceof MeilisearchError ||
-    (error instanceof Error && (error.name === 'AbortError' || error.name === 'TimeoutError'))
-  );
+  if (error instanceof MeilisearchError) return true;
+  return error instanceof Error && (error.name === 'AbortError' || error.name === 'TimeoutError');
 }
