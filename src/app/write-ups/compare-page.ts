@@ -59,9 +59,6 @@ import { WriteUps } from './write-ups';
     }
   `,
   styles: `
-    h1 a {
-      color: inherit;
-    }
     .editions {
       display: grid;
       grid-template-columns: repeat(auto-fit, minmax(14rem, 1fr));
