@@ -52,23 +52,26 @@ export class Lexicon {
   }
 
   /**
-   * Other words within `limit` typos (1 or 2). The map measures swaps as two edits, so it is asked for one
-   * edit more and the answer is sifted.
+   * Other words within `limit` typos (1 or 2). Only words with the same first letter are measured: the map takes
+   * swaps for two edits, so it is asked for one edit more and the answer is sifted. A wrong first letter uses up
+   * two typos by itself, so such words are looked up directly.
    */
   lookAlikes(typed: string, limit: number): LikeWord[] {
     if (limit < 1) return [];
-    const found: (LikeWord & { documents: number })[] = [];
-    for (const [word, [documents]] of this.words.fuzzyGet(typed, limit + 1)) {
-      if (word === typed || /\d/.test(word)) continue;
-      const typos = typosBetween(typed, word, limit);
-      if (typos <= limit) found.push({ word, typos, documents });
+    const found: Counted[] = [];
+    const [first = ''] = typed;
+    for (const [rest, [documents]] of this.words.atPrefix(first).fuzzyGet(typed.slice(1), limit + 1)) {
+      const word = first + rest;
+      const typos = word === typed ? 0 : typosBetween(typed, word, limit);
+      if (typos > 0 && typos <= limit && !/\d/.test(word)) found.push({ word, typos, documents });
     }
+    if (limit >= 2) found.push(...this.otherwiseBegun(typed));
     return closest(found);
   }
 
   /** Words whose beginning is within one typo of what was typed so far. Cost: words with its first letter. */
   lookAlikePrefixes(typed: string): LikeWord[] {
-    const found: (LikeWord & { documents: number })[] = [];
+    const found: Counted[] = [];
     for (const [word, documents] of this.words.atPrefix(typed.slice(0, 1))) {
       if (word.length < typed.length - 1 || /\d/.test(word)) continue;
       const near = [0, 1, -1].some(
@@ -78,9 +81,26 @@ export class Lexicon {
     }
     return closest(found);
   }
+
+  /** Words that differ at their beginning only: a letter wrong, missing, too many, or the first two swapped. */
+  private otherwiseBegun(typed: string): Counted[] {
+    const rest = typed.slice(1);
+    const swapped = `${typed.slice(1, 2)}${typed.slice(0, 1)}${typed.slice(2)}`;
+    const letters = Array.from({ length: 26 }, (_, at) => String.fromCharCode(97 + at));
+    const words = new Set([rest, swapped, ...letters.flatMap((letter) => [letter + rest, letter + typed])]);
+    words.delete(typed);
+    return [...words].flatMap((word) => {
+      const documents = this.frequency(word);
+      return documents > 0 && word[0] !== typed[0] ? [{ word, typos: 2, documents }] : [];
+    });
+  }
 }
 
-function closest(found: (LikeWord & { documents: number })[]): LikeWord[] {
+interface Counted extends LikeWord {
+  readonly documents: number;
+}
+
+function closest(found: Counted[]): LikeWord[] {
   found.sort((left, right) => left.typos - right.typos || right.documents - left.documents);
   return found.slice(0, maxLookAlikes).map(({ word, typos }) => ({ word, typos }));
 }
