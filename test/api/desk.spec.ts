@@ -3,6 +3,7 @@ import type { DeskLine, FoundHazard } from '../../shared/contract/moderation.js'
 import type { FieldProblem } from '../../shared/contract/problem.js';
 import type { Caution, Draft } from '../../shared/contract/write-ups.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
+import { throughAllPages } from './support/pages.js';
 import {
   cautionFor,
   completeContent,
@@ -49,16 +50,7 @@ describe('the queue', () => {
     );
     const second = await onDesk(completeContent(joint, { title: 'Waits less long' }));
     await saveNewDraft(author, completeContent(joint, { title: 'Still a draft' }));
-    const lines: DeskLine[] = [];
-    let cursor: string | null = '';
-    for (let pages = 0; cursor !== null && pages < 99; pages += 1) {
-      const { body } = await moderator
-        .get('/api/desk')
-        .query({ limit: 1, ...(cursor ? { cursor } : {}) })
-        .expect(200);
-      lines.push(...body.items);
-      cursor = body.next;
-    }
+    const lines = await throughAllPages<DeskLine>(moderator, '/api/desk');
     const ids = lines.map((line) => line.editionId);
     expect(new Set(ids).size).toBe(ids.length);
     expect(ids.slice(-2)).toEqual([first.id, second.id]);

@@ -1,8 +1,9 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { emptyContent, type EditionContent } from '../../shared/contract/edition-content.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
-import type { Draft } from '../../shared/contract/write-ups.js';
+import type { Draft, MyWriteUp } from '../../shared/contract/write-ups.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
+import { throughAllPages } from './support/pages.js';
 import { insertPart } from './support/catalogue.js';
 import {
   completeContent,
@@ -378,16 +379,7 @@ describe('my list', () => {
       drafts.push(await saveNewDraft(me, { ...emptyContent, title }));
     await me.delete(`/api/drafts/${drafts[2]!.id}`).expect(204);
     await saveDraft(me, drafts[0]!, { ...emptyContent, title: 'One again' });
-    const titles: string[] = [];
-    let cursor: string | null = '';
-    for (let pages = 0; cursor !== null && pages < 9; pages += 1) {
-      const { body } = await me
-        .get('/api/my/write-ups')
-        .query({ limit: 1, ...(cursor ? { cursor } : {}) })
-        .expect(200);
-      titles.push(...body.items.map((item: { title: string }) => item.title));
-      cursor = body.next;
-    }
+    const titles = (await throughAllPages<MyWriteUp>(me, '/api/my/write-ups')).map((line) => line.title);
     expect(titles).toEqual(['One again', 'Four', 'Two']);
   });
 

@@ -1,5 +1,7 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import type { PartSummary } from '../../shared/contract/hardware.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
+import { throughAllPages } from './support/pages.js';
 import { insertPart, insertSymptom } from './support/catalogue.js';
 import { completeContent, insertJoint, publishNew, saveNewDraft } from './support/write-ups.js';
 
@@ -19,14 +21,8 @@ describe('the list of parts', () => {
     await insertPart(app.knex, { name: 'Paged beta' });
     await insertPart(app.knex, { name: 'Paged beta', maker: 'Another maker' });
     await insertPart(app.knex, { name: 'Paged gamma' });
-    const names: string[] = [];
-    let cursor: string | null = '';
-    for (let pages = 0; cursor !== null && pages < 9; pages += 1) {
-      const query: Record<string, string> = { q: 'paged', limit: '1', ...(cursor ? { cursor } : {}) };
-      const { body } = await app.visitor().get('/api/parts').query(query).expect(200);
-      names.push(...body.items.map((part: { name: string }) => part.name));
-      cursor = body.next;
-    }
+    const parts = await throughAllPages<PartSummary>(app.visitor(), '/api/parts', { q: 'paged' });
+    const names = parts.map((part) => part.name);
     expect(names).toEqual(['Paged alpha', 'Paged beta', 'Paged beta', 'Paged gamma']);
   });
 
