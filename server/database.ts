@@ -23,6 +23,8 @@ export function openDatabase(url: string): Knex {
     },
     pool: { min: 0, max: 10, afterCreate: prepareSession },
     acquireConnectionTimeout: 15_000,
+    // Values of a statement that fails stay out of the error, and so out of the log.
+    compileSqlOnError: false,
   });
 }
 
