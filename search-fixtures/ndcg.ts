@@ -16,7 +16,8 @@ export type Grades = Readonly<Record<string, number>>;
 export function ndcg(returned: readonly string[], grades: Grades, depth = 10): number {
   if (!Number.isInteger(depth) || depth < 1) throw new RangeError('The depth takes a positive whole number.');
   const given = Object.values(grades);
-  if (given.some((grade) => !Number.isFinite(grade) || grade < 0)) throw new RangeError('A grade takes 0 or more.');
+  if (given.some((grade) => !Number.isFinite(grade) || grade < 0))
+    throw new RangeError('A grade takes 0 or more.');
   const ideal = discounted([...given].sort((one, other) => other - one).slice(0, depth));
   if (ideal === 0) throw new RangeError('At least one result needs a grade above 0.');
   const seen = new Set<string>();

@@ -29,7 +29,9 @@ export function revision(letter: string, when: string, tell: string, changed: st
 }
 
 /** Mating features: `{ boss: 'raised lip', 'hole-pattern': ['motor holes', 'foot holes'] }`. */
-export function features(named: Partial<Record<FeatureKind, string | readonly string[]>>): DemoPart['features'] {
+export function features(
+  named: Partial<Record<FeatureKind, string | readonly string[]>>,
+): DemoPart['features'] {
   return Object.entries(named).flatMap(([kind, value]) =>
     (typeof value === 'string' ? [value] : value).map((name) => ({ kind: kind as FeatureKind, name })),
   );

@@ -6,4 +6,10 @@ import { opticsParts } from './parts/optics.js';
 import { spacerParts } from './parts/spacers.js';
 
 /** The whole catalogue of the demo. */
-export const demoParts: readonly DemoPart[] = [...opticsParts, ...driveParts, ...spacerParts, ...cameraParts, ...clampParts];
+export const demoParts: readonly DemoPart[] = [
+  ...opticsParts,
+  ...driveParts,
+  ...spacerParts,
+  ...cameraParts,
+  ...clampParts,
+];

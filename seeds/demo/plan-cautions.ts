@@ -12,8 +12,18 @@ export interface PlannedCaution {
 
 /** What a moderator takes from the library for a hazard that nothing answers yet. */
 const usual: Record<HazardKind, string> = {
-  blade: 'blade', 'power-tool': 'rotary-tool', dust: 'dust', solvent: 'solvent', adhesive: 'epoxy', heat: 'heat', 'lithium-cell': 'lithium',
-  mains: 'mains', sun: 'sun', 'swarf-near-optics': 'swarf', pinch: 'pinch', magnet: 'magnet',
+  blade: 'blade',
+  'power-tool': 'rotary-tool',
+  dust: 'dust',
+  solvent: 'solvent',
+  adhesive: 'epoxy',
+  heat: 'heat',
+  'lithium-cell': 'lithium',
+  mains: 'mains',
+  sun: 'sun',
+  'swarf-near-optics': 'swarf',
+  pinch: 'pinch',
+  magnet: 'magnet',
 };
 
 export const libraryEntry = (slug: string) => {
@@ -27,7 +37,8 @@ export const libraryEntry = (slug: string) => {
  * write-up and its new fixes, then the usual one for every hazard that the rules find unanswered.
  */
 export function planCautions(
-  forWriteUp: readonly string[], editions: readonly { readonly content: EditionContent; readonly told: DemoContent }[],
+  forWriteUp: readonly string[],
+  editions: readonly { readonly content: EditionContent; readonly told: DemoContent }[],
 ): PlannedCaution[][] {
   const placed: PlannedCaution[] = [];
   const seen = new Set<string>();
@@ -41,7 +52,10 @@ export function planCautions(
       seen.add(fix.key);
       fix.cautions.forEach((slug) => place(slug, fix.key));
     }
-    const found = answerHazards(findHazards(content), placed.map(({ slug, fixKey }) => ({ fixKey, hazards: [...libraryEntry(slug).hazards] })));
+    const found = answerHazards(
+      findHazards(content),
+      placed.map(({ slug, fixKey }) => ({ fixKey, hazards: [...libraryEntry(slug).hazards] })),
+    );
     for (const hazard of found.filter((item) => !item.answered)) place(usual[hazard.hazard], hazard.fixKey);
     return placed.slice(before);
   });

@@ -17,30 +17,52 @@ export function resolveContent(content: DemoContent, catalogue: Catalogue, photo
     noticed: content.noticed,
     cause: content.cause,
     readings: content.readings.map(({ of, ...reading }, index) => ({
-      key: `reading-${index + 1}`.padEnd(10, '0'), revisionId: of === '' ? null : revisionId(of), ...reading,
+      key: `reading-${index + 1}`.padEnd(10, '0'),
+      revisionId: of === '' ? null : revisionId(of),
+      ...reading,
     })),
     fixes: content.fixes.map((item) => ({
-      key: item.key, title: item.title, kind: item.kind, permanence: item.permanence, why: item.why,
-      tools: [...item.tools], materials: [...item.materials],
+      key: item.key,
+      title: item.title,
+      kind: item.kind,
+      permanence: item.permanence,
+      why: item.why,
+      tools: [...item.tools],
+      materials: [...item.materials],
       steps: item.steps.map((text, index) => ({
-        key: `${item.key.slice(0, 30)}-s${index + 1}`, text, photoId: photoIds[item.stepDrawings[index] ?? -1] ?? null,
+        key: `${item.key.slice(0, 30)}-s${index + 1}`,
+        text,
+        photoId: photoIds[item.stepDrawings[index] ?? -1] ?? null,
       })),
       revisionIds: item.only.flatMap((mark) => lettersOf(mark).map(revisionId)),
-      afterwards: [...item.afterwards], afterwardsNote: item.afterwardsNote, acceptance: item.acceptance,
+      afterwards: [...item.afterwards],
+      afterwardsNote: item.afterwardsNote,
+      acceptance: item.acceptance,
     })),
-    photos: content.drawings.map((item, index) => ({ photoId: photoIds[index]!, alt: item.alt, caption: item.caption })),
+    photos: content.drawings.map((item, index) => ({
+      photoId: photoIds[index]!,
+      alt: item.alt,
+      caption: item.caption,
+    })),
     sources: content.sources,
   };
 
   function resolveSide(side: DemoSide): JointSide {
     const marks = (letters: string, holds: boolean) =>
       lettersOf(`${side.part}:${letters}`).map((key) => ({ revisionId: revisionId(key), holds }));
-    return { partId: known(catalogue.parts, side.part), feature: side.feature, revisions: [...marks(side.holds, true), ...marks(side.not, false)] };
+    return {
+      partId: known(catalogue.parts, side.part),
+      feature: side.feature,
+      revisions: [...marks(side.holds, true), ...marks(side.not, false)],
+    };
   }
 }
 
 /** `part:A B` and `part:A,B` become `part:A` and `part:B`. */
 export function lettersOf(mark: string): string[] {
   const [part = '', letters = ''] = mark.split(':');
-  return letters.split(/[ ,]+/).filter((letter) => letter !== '').map((letter) => `${part}:${letter}`);
+  return letters
+    .split(/[ ,]+/)
+    .filter((letter) => letter !== '')
+    .map((letter) => `${part}:${letter}`);
 }

@@ -18,30 +18,67 @@ export interface Catalogue {
 /** Inserts makers, parts, revisions, features, symptoms and the caution library. */
 export async function seedCatalogue(knex: Knex, partPhotos: ReadonlyMap<string, number>): Promise<Catalogue> {
   const makers = await identified(knex, 'makers', demoMakers);
-  await insertRows(knex, 'makers', demoMakers.map(({ slug, name, about }) => ({ id: makers.get(slug), slug, name, about })));
+  await insertRows(
+    knex,
+    'makers',
+    demoMakers.map(({ slug, name, about }) => ({ id: makers.get(slug), slug, name, about })),
+  );
 
   const parts = await identified(knex, 'parts', demoParts);
-  await insertRows(knex, 'parts', demoParts.map((part) => ({
-    id: parts.get(part.slug), slug: part.slug, maker_id: known(makers, part.maker), name: part.name, kind: part.kind, about: part.about,
-    photo_id: partPhotos.get(part.slug) ?? null,
-  })));
+  await insertRows(
+    knex,
+    'parts',
+    demoParts.map((part) => ({
+      id: parts.get(part.slug),
+      slug: part.slug,
+      maker_id: known(makers, part.maker),
+      name: part.name,
+      kind: part.kind,
+      about: part.about,
+      photo_id: partPhotos.get(part.slug) ?? null,
+    })),
+  );
 
   const revisions = await seedRevisions(knex, parts);
   const features = demoParts.flatMap((part) =>
-    part.features.map(({ kind, name }) => ({ part_id: parts.get(part.slug), slug: slugOf(name), name, kind })),
+    part.features.map(({ kind, name }) => ({
+      part_id: parts.get(part.slug),
+      slug: slugOf(name),
+      name,
+      kind,
+    })),
   );
   await insertRows(knex, 'features', features);
 
   const symptoms = await identified(knex, 'symptoms', demoSymptoms);
-  await insertRows(knex, 'symptoms', demoSymptoms.map(({ slug, label, group }, position) => ({
-    id: symptoms.get(slug), slug, label, group_name: group, position,
-  })));
+  await insertRows(
+    knex,
+    'symptoms',
+    demoSymptoms.map(({ slug, label, group }, position) => ({
+      id: symptoms.get(slug),
+      slug,
+      label,
+      group_name: group,
+      position,
+    })),
+  );
 
   const cautions = await identified(knex, 'caution_library', demoCautionLibrary);
-  await insertRows(knex, 'caution_library', demoCautionLibrary.map((entry, position) => ({
-    id: cautions.get(entry.slug), slug: entry.slug, name: entry.name, signal_word: entry.signalWord, hazards: JSON.stringify(entry.hazards),
-    hazard: entry.hazard, consequence: entry.consequence, avoidance: entry.avoidance, position,
-  })));
+  await insertRows(
+    knex,
+    'caution_library',
+    demoCautionLibrary.map((entry, position) => ({
+      id: cautions.get(entry.slug),
+      slug: entry.slug,
+      name: entry.name,
+      signal_word: entry.signalWord,
+      hazards: JSON.stringify(entry.hazards),
+      hazard: entry.hazard,
+      consequence: entry.consequence,
+      avoidance: entry.avoidance,
+      position,
+    })),
+  );
   return { parts, revisions, symptoms, cautions };
 }
 
@@ -53,8 +90,14 @@ async function seedRevisions(knex: Knex, parts: ReadonlyMap<string, number>): Pr
       const id = nextId();
       ids.set(`${part.slug}:${revision.label.replace('Rev ', '')}`, id);
       return {
-        id, part_id: parts.get(part.slug), label: revision.label, position, sold_from: revision.from, sold_to: revision.to,
-        how_to_tell: revision.tell, what_changed: revision.changed,
+        id,
+        part_id: parts.get(part.slug),
+        label: revision.label,
+        position,
+        sold_from: revision.from,
+        sold_to: revision.to,
+        how_to_tell: revision.tell,
+        what_changed: revision.changed,
       };
     }),
   );
@@ -62,7 +105,11 @@ async function seedRevisions(knex: Knex, parts: ReadonlyMap<string, number>): Pr
   return ids;
 }
 
-async function identified(knex: Knex, table: string, items: readonly { readonly slug: string }[]): Promise<Map<string, number>> {
+async function identified(
+  knex: Knex,
+  table: string,
+  items: readonly { readonly slug: string }[],
+): Promise<Map<string, number>> {
   const nextId = await idsFrom(knex, table);
   return new Map(items.map((item) => [item.slug, nextId()]));
 }

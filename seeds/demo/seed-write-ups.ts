@@ -34,15 +34,29 @@ interface Rows {
 
 /** Inserts write-ups with editions, links, fixes, cautions, trials, desk decisions and the rows that have them indexed. */
 export async function seedWriteUps(
-  trx: Knex, parts: { accounts: ReadonlyMap<string, number>; catalogue: Catalogue; photos: PhotoIds; now: Date },
+  trx: Knex,
+  parts: { accounts: ReadonlyMap<string, number>; catalogue: Catalogue; photos: PhotoIds; now: Date },
 ): Promise<void> {
   const { accounts, catalogue, photos, now } = parts;
-  const [writeUpId, editionId, fixId, trialId] = await Promise.all(
+  const [writeUpId, editionId, fixId, trialId] = (await Promise.all(
     ['write_ups', 'editions', 'fixes', 'trials'].map((table) => idsFrom(trx, table)),
-  ) as [() => number, () => number, () => number, () => number];
+  )) as [() => number, () => number, () => number, () => number];
   const rows: Rows = {
-    writeUps: [], publishedEditions: [], editions: [], sides: [], revisions: [], symptoms: [], photos: [], fixes: [], editionFixes: [],
-    fixRevisions: [], cautions: [], trials: [], trialRevisions: [], decisions: [], outbox: [],
+    writeUps: [],
+    publishedEditions: [],
+    editions: [],
+    sides: [],
+    revisions: [],
+    symptoms: [],
+    photos: [],
+    fixes: [],
+    editionFixes: [],
+    fixRevisions: [],
+    cautions: [],
+    trials: [],
+    trialRevisions: [],
+    decisions: [],
+    outbox: [],
   };
   const next = seededNumbers(60);
   const moderator = known(accounts, 'moderator');
@@ -53,10 +67,23 @@ export async function seedWriteUps(
     const editions = editionsOf(writeUp);
     const first = editions[0]!;
     const published = editions.filter((item) => item.state === 'published');
-    const cautions = planCautions(writeUp.cautions, published.map((item) => ({ content: resolveContent(item.content, catalogue, photos), told: item.content })));
+    const cautions = planCautions(
+      writeUp.cautions,
+      published.map((item) => ({
+        content: resolveContent(item.content, catalogue, photos),
+        told: item.content,
+      })),
+    );
     const created = new Date(now.getTime() - first.daysAgo * day - 9 * day);
     const firstPublished = published.length > 0 ? instant(first) : null;
-    rows.writeUps.push({ id, slug: writeUp.slug, created_by: known(accounts, first.by), published_edition_id: null, first_published_at: firstPublished, created_at: created });
+    rows.writeUps.push({
+      id,
+      slug: writeUp.slug,
+      created_by: known(accounts, first.by),
+      published_edition_id: null,
+      first_published_at: firstPublished,
+      created_at: created,
+    });
     editions.forEach((item, index) => addEdition(item, index + 1));
     if (published.length > 0) {
       rows.outbox.push({ write_up_id: id, created_at: now, attempts: 0, next_try_at: now });
@@ -70,32 +97,70 @@ export async function seedWriteUps(
       const waits = item.state === 'submitted' || item.state === 'returned' || item.state === 'published';
       const submitted = waits ? new Date(at.getTime() - 30 * hour) : null;
       rows.editions.push({
-        id: edition_id, write_up_id: id, number, state: item.state, author_id: known(accounts, item.by), title: content.title,
-        content: JSON.stringify(content), change_note: item.note, version: 2 + (number % 5), return_reason: item.returnReason,
-        created_at: new Date(at.getTime() - 6 * day), updated_at: at, submitted_at: submitted, published_at: item.state === 'published' ? at : null,
+        id: edition_id,
+        write_up_id: id,
+        number,
+        state: item.state,
+        author_id: known(accounts, item.by),
+        title: content.title,
+        content: JSON.stringify(content),
+        change_note: item.note,
+        version: 2 + (number % 5),
+        return_reason: item.returnReason,
+        created_at: new Date(at.getTime() - 6 * day),
+        updated_at: at,
+        submitted_at: submitted,
+        published_at: item.state === 'published' ? at : null,
       });
       if (item.state === 'published') {
         addLinks(edition_id, content);
-        rows.publishedEditions = rows.publishedEditions.filter((entry) => entry.id !== id).concat({ id, edition: edition_id });
+        rows.publishedEditions = rows.publishedEditions
+          .filter((entry) => entry.id !== id)
+          .concat({ id, edition: edition_id });
         addCautions(edition_id, cautions[number - 1] ?? [], new Date(at.getTime() - hour));
-        rows.decisions.push({ edition_id, moderator_id: moderator, decision: 'published', reason: '', created_at: at });
+        rows.decisions.push({
+          edition_id,
+          moderator_id: moderator,
+          decision: 'published',
+          reason: '',
+          created_at: at,
+        });
       }
       if (item.state === 'returned') {
-        rows.decisions.push({ edition_id, moderator_id: moderator, decision: 'returned', reason: item.returnReason ?? '', created_at: at });
+        rows.decisions.push({
+          edition_id,
+          moderator_id: moderator,
+          decision: 'returned',
+          reason: item.returnReason ?? '',
+          created_at: at,
+        });
       }
     }
 
     function addLinks(edition_id: number, content: EditionContent): void {
       const links = editionLinks(content);
-      rows.sides.push(...links.sides.map((item) => ({ edition_id, joint: item.joint, side: item.side, part_id: item.partId })));
-      rows.revisions.push(...links.revisions.map((item) => ({ edition_id, revision_id: item.revisionId, holds: item.holds })));
-      rows.symptoms.push(...links.symptomSlugs.map((slug) => ({ edition_id, symptom_id: known(catalogue.symptoms, slug) })));
+      rows.sides.push(
+        ...links.sides.map((item) => ({
+          edition_id,
+          joint: item.joint,
+          side: item.side,
+          part_id: item.partId,
+        })),
+      );
+      rows.revisions.push(
+        ...links.revisions.map((item) => ({ edition_id, revision_id: item.revisionId, holds: item.holds })),
+      );
+      rows.symptoms.push(
+        ...links.symptomSlugs.map((slug) => ({ edition_id, symptom_id: known(catalogue.symptoms, slug) })),
+      );
       rows.photos.push(...links.photoIds.map((photo_id) => ({ edition_id, photo_id })));
       for (const item of links.fixes) {
         const fix_id = fixIds.get(item.key) ?? fixId();
         fixIds.set(item.key, fix_id);
         rows.editionFixes.push({ edition_id, fix_id, position: item.position });
-        rows.fixRevisions.push(...item.revisionIds.map((revision_id) => ({ edition_id, fix_id, revision_id })));
+        rows.fixRevisions.push(
+          ...item.revisionIds.map((revision_id) => ({ edition_id, fix_id, revision_id })),
+        );
       }
     }
 
@@ -103,31 +168,72 @@ export async function seedWriteUps(
       for (const { slug, fixKey } of planned) {
         const entry = libraryEntry(slug);
         rows.cautions.push({
-          write_up_id: id, fix_id: fixKey === null ? null : known(fixIds, fixKey), library_id: known(catalogue.cautions, slug),
-          signal_word: entry.signalWord, hazards: JSON.stringify(entry.hazards), hazard: entry.hazard, consequence: entry.consequence,
-          avoidance: entry.avoidance, placed_by: moderator, placed_at: at,
+          write_up_id: id,
+          fix_id: fixKey === null ? null : known(fixIds, fixKey),
+          library_id: known(catalogue.cautions, slug),
+          signal_word: entry.signalWord,
+          hazards: JSON.stringify(entry.hazards),
+          hazard: entry.hazard,
+          consequence: entry.consequence,
+          avoidance: entry.avoidance,
+          placed_by: moderator,
+          placed_at: at,
         });
-        rows.decisions.push({ edition_id, moderator_id: moderator, decision: 'caution-placed', reason: entry.name, created_at: at });
+        rows.decisions.push({
+          edition_id,
+          moderator_id: moderator,
+          decision: 'caution-placed',
+          reason: entry.name,
+          created_at: at,
+        });
       }
     }
 
     function addFixes(latest: PlannedEdition): void {
       const authors = new Set(published.map((item) => item.by));
-      const people = [...accounts].filter(([key]) => !authors.has(key) && !['moderator', 'administrator', 'maker'].includes(key)).map(([, account]) => account);
-      const everyFix = new Map(published.flatMap((item) => item.content.fixes).map((entry) => [entry.key, entry]));
+      const people = [...accounts]
+        .filter(([key]) => !authors.has(key) && !['moderator', 'administrator', 'maker'].includes(key))
+        .map(([, account]) => account);
+      const everyFix = new Map(
+        published.flatMap((item) => item.content.fixes).map((entry) => [entry.key, entry]),
+      );
       for (const [key, fix_id] of fixIds) {
         const entry = everyFix.get(key)!;
-        const trials = planTrials({ fix: entry, content: latest.content, people, since: instant(first), now, next });
+        const trials = planTrials({
+          fix: entry,
+          content: latest.content,
+          people,
+          since: instant(first),
+          now,
+          next,
+        });
         for (const planned of trials) {
           const trial_id = trialId();
           rows.trials.push({
-            id: trial_id, fix_id, account_id: planned.accountId, outcome: planned.outcome, note: planned.note, figure: planned.figure, created_at: planned.createdAt,
+            id: trial_id,
+            fix_id,
+            account_id: planned.accountId,
+            outcome: planned.outcome,
+            note: planned.note,
+            figure: planned.figure,
+            created_at: planned.createdAt,
           });
-          rows.trialRevisions.push(...planned.revisions.map((revision) => ({ trial_id, revision_id: known(catalogue.revisions, revision) })));
+          rows.trialRevisions.push(
+            ...planned.revisions.map((revision) => ({
+              trial_id,
+              revision_id: known(catalogue.revisions, revision),
+            })),
+          );
         }
         rows.fixes.push({
-          id: fix_id, write_up_id: id, fix_key: key,
-          standing: standingOf(trials.map((planned) => ({ ...planned, byAuthor: false })), entry.acceptance, entry.madeRight !== null),
+          id: fix_id,
+          write_up_id: id,
+          fix_key: key,
+          standing: standingOf(
+            trials.map((planned) => ({ ...planned, byAuthor: false })),
+            entry.acceptance,
+            entry.madeRight !== null,
+          ),
           made_right_from: entry.madeRight === null ? null : known(catalogue.revisions, entry.madeRight),
         });
       }
@@ -145,7 +251,8 @@ type PlannedEdition = Omit<DemoEdition, 'change'> & { readonly content: DemoCont
 function editionsOf(writeUp: DemoWriteUp): PlannedEdition[] {
   const { by, daysAgo, state, returnReason, content } = writeUp;
   const editions: PlannedEdition[] = [{ by, daysAgo, state, returnReason, content, note: '' }];
-  for (const { change, ...rest } of writeUp.later) editions.push({ ...rest, content: change(editions.at(-1)!.content) });
+  for (const { change, ...rest } of writeUp.later)
+    editions.push({ ...rest, content: change(editions.at(-1)!.content) });
   return editions;
 }
 
@@ -153,9 +260,15 @@ async function insertAll(trx: Knex, rows: Rows): Promise<void> {
   await insertRows(trx, 'write_ups', rows.writeUps);
   await insertRows(trx, 'editions', rows.editions);
   await trx('write_ups')
-    .whereIn('id', rows.publishedEditions.map((entry) => entry.id))
+    .whereIn(
+      'id',
+      rows.publishedEditions.map((entry) => entry.id),
+    )
     .update({
-      published_edition_id: trx('editions').where('write_up_id', trx.ref('write_ups.id')).where('state', 'published').max('id'),
+      published_edition_id: trx('editions')
+        .where('write_up_id', trx.ref('write_ups.id'))
+        .where('state', 'published')
+        .max('id'),
     });
   await insertRows(trx, 'edition_sides', rows.sides);
   await insertRows(trx, 'edition_revisions', rows.revisions);

@@ -16,7 +16,7 @@ const groups: Record<string, Record<string, string>> = {
     'fouls-tube': 'It hits the tube or another part',
     'cable-in-the-way': 'A cable or plug is in the way',
   },
-  'Drive': {
+  Drive: {
     'belt-slips': 'The belt slips or jumps teeth',
     'belt-slips-one-way': 'The belt slips in one direction only',
     'belt-walks-off': 'The belt walks off the pulley',
@@ -42,7 +42,7 @@ const groups: Record<string, Record<string, string>> = {
     'wont-reach-focus': 'It does not reach focus',
     'image-shifts': 'The image shifts when focus reverses',
     'star-trails-guiding-good': 'Stars trail although guiding looks good',
-    'vignetting': 'Corners are dark',
+    vignetting: 'Corners are dark',
     'flats-do-not-match': 'Flats no longer match',
     'reflection-halo': 'Halos or reflections round bright stars',
   },
@@ -53,7 +53,7 @@ const groups: Record<string, Record<string, string>> = {
     'rotates-by-itself': 'The camera turns by itself',
     'lock-screw-dents': 'The lock screw dents what it holds',
     'part-creeps': 'A printed part has crept out of shape',
-    'rattles': 'Something rattles',
+    rattles: 'Something rattles',
   },
   'Dew and heat': {
     'dew-on-lens': 'Dew on the lens although the heater is on',

@@ -30,8 +30,14 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Half a millimetre more than told to get room on mine; wall still thick enough.',
       'Two seasons on, no cracks where I cut.',
     ],
-    'held-for-a-while': ['Flush for a season; then the thin wall cracked at one screw. Leave more than I did.', 'Good until the plate warped in the sun on the window sill.'],
-    'did-not-help': ['I took too much off one side and it now sits crooked the other way.', 'Mine was already short. Nothing left to take off; measure first.'],
+    'held-for-a-while': [
+      'Flush for a season; then the thin wall cracked at one screw. Leave more than I did.',
+      'Good until the plate warped in the sun on the window sill.',
+    ],
+    'did-not-help': [
+      'I took too much off one side and it now sits crooked the other way.',
+      'Mine was already short. Nothing left to take off; measure first.',
+    ],
   },
   reposition: {
     held: [
@@ -41,8 +47,14 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Had to move the finder too, but it works.',
       'No change in a year. Marked the place with a scribe line.',
     ],
-    'held-for-a-while': ['Crept back after a month because the clamp screw was not tight enough.', 'Fine until I changed cameras; the new one wants another angle.'],
-    'did-not-help': ['There is no free angle with my off-axis guider in the way.', 'Clears, but the cable now pulls. Not a gain for me.'],
+    'held-for-a-while': [
+      'Crept back after a month because the clamp screw was not tight enough.',
+      'Fine until I changed cameras; the new one wants another angle.',
+    ],
+    'did-not-help': [
+      'There is no free angle with my off-axis guider in the way.',
+      'Clears, but the cable now pulls. Not a gain for me.',
+    ],
   },
   remake: {
     held: [
@@ -51,7 +63,10 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'The first print was too tight by 0.1; scaled the bore and the second one fits.',
       'Held a summer in the car without creeping.',
     ],
-    'held-for-a-while': ['Printed it in the easy plastic and it sagged on a hot day. Use what the write-up says.', 'Cracked along the layers at the clamp after three months.'],
+    'held-for-a-while': [
+      'Printed it in the easy plastic and it sagged on a hot day. Use what the write-up says.',
+      'Cracked along the layers at the clamp after three months.',
+    ],
     'did-not-help': ['My print shrank more than I thought; the bore is off by 0.3. Will try again.'],
   },
   swap: {
@@ -73,7 +88,15 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Checked again after a month: same figure within what I can read.',
       'Quiet now, and it starts from cold.',
     ],
-    'held-for-a-while': ['Held till the first frost, then I had to do it again.', 'Works loose in about three weeks on mine.', 'Good at 15 °C, less so at minus 5 °C.'],
-    'did-not-help': ['No difference at all. I think my trouble is further down.', 'Better one way, worse the other.', 'Ran out of travel before it got good.'],
+    'held-for-a-while': [
+      'Held till the first frost, then I had to do it again.',
+      'Works loose in about three weeks on mine.',
+      'Good at 15 °C, less so at minus 5 °C.',
+    ],
+    'did-not-help': [
+      'No difference at all. I think my trouble is further down.',
+      'Better one way, worse the other.',
+      'Ran out of travel before it got good.',
+    ],
   },
 };

@@ -16,7 +16,12 @@ export interface PlannedTrial {
 
 /** Gives a fix's trials their people, days, revisions and words; nobody tries the same fix twice. */
 export function planTrials(parts: {
-  fix: DemoFix; content: DemoContent; people: readonly number[]; since: Date; now: Date; next: () => number;
+  fix: DemoFix;
+  content: DemoContent;
+  people: readonly number[];
+  since: Date;
+  now: Date;
+  next: () => number;
 }): PlannedTrial[] {
   const { fix, content, people, since, now, next } = parts;
   const joint = content.joints[0];

@@ -1,5 +1,12 @@
 import type { Acceptance } from '../../shared/contract/edition-content.js';
-import type { Afterwards, FixKind, Instrument, Permanence, ReadingUnit, TrialOutcome } from '../../shared/contract/vocabulary.js';
+import type {
+  Afterwards,
+  FixKind,
+  Instrument,
+  Permanence,
+  ReadingUnit,
+  TrialOutcome,
+} from '../../shared/contract/vocabulary.js';
 
 /** A side of a joint: `holds` and `not` are letters of revisions with blanks between them; the rest is not mentioned. */
 export interface DemoSide {
@@ -86,17 +93,36 @@ export interface DemoWriteUp {
 }
 
 /** `side('tarn-m1', 'recess round the shaft', 'C D', 'A')`. */
-export const side = (part: string, feature: string, holds: string, not = ''): DemoSide => ({ part, feature, holds, not });
+export const side = (part: string, feature: string, holds: string, not = ''): DemoSide => ({
+  part,
+  feature,
+  holds,
+  not,
+});
 export const joint = (a: DemoSide, b: DemoSide): DemoJoint => ({ a, b });
 
 /** A reading in millimetres with a caliper (standard uncertainty 0.02 mm) unless said otherwise. */
 export const read = (
-  of: string, dimension: string, value: number, unit: ReadingUnit = 'mm', instrument: Instrument = 'caliper',
+  of: string,
+  dimension: string,
+  value: number,
+  unit: ReadingUnit = 'mm',
+  instrument: Instrument = 'caliper',
   uncertainty: number | null = unit === 'mm' && instrument === 'caliper' ? 0.02 : null,
 ): DemoReading => ({ of, dimension, value, unit, instrument, uncertainty });
 
-export const atMost = (quantity: string, value: number, unit: ReadingUnit): Acceptance => ({ quantity, comparison: 'at-most', value, unit });
-export const atLeast = (quantity: string, value: number, unit: ReadingUnit): Acceptance => ({ quantity, comparison: 'at-least', value, unit });
+export const atMost = (quantity: string, value: number, unit: ReadingUnit): Acceptance => ({
+  quantity,
+  comparison: 'at-most',
+  value,
+  unit,
+});
+export const atLeast = (quantity: string, value: number, unit: ReadingUnit): Acceptance => ({
+  quantity,
+  comparison: 'at-least',
+  value,
+  unit,
+});
 
 interface FixParts {
   why: string;
@@ -115,9 +141,18 @@ interface FixParts {
 }
 
 /** A remedy; lists of tools and materials are split at semicolons, cautions at blanks. */
-export function fix(key: string, title: string, kind: FixKind, permanence: Permanence, parts: FixParts): DemoFix {
+export function fix(
+  key: string,
+  title: string,
+  kind: FixKind,
+  permanence: Permanence,
+  parts: FixParts,
+): DemoFix {
   return {
-    key, title, kind, permanence,
+    key,
+    title,
+    kind,
+    permanence,
     why: parts.why,
     tools: listed(parts.tools, ';'),
     materials: listed(parts.materials, ';'),
@@ -140,7 +175,10 @@ function trial(word: string): DemoTrial {
   return { outcome, figure: word.length > 1 ? Number(word.slice(1)) : null };
 }
 const listed = (text: string | undefined, separator: string): string[] =>
-  (text ?? '').split(separator).map((item) => item.trim()).filter((item) => item !== '');
+  (text ?? '')
+    .split(separator)
+    .map((item) => item.trim())
+    .filter((item) => item !== '');
 
 export const drawing = (svg: string, alt: string, caption: string): DemoDrawing => ({ svg, alt, caption });
 
@@ -161,22 +199,44 @@ export function writeUp(slug: string, title: string, parts: WriteUpParts): DemoW
 }
 
 /** One that has not been published: a draft, on the desk, or returned with a reason. */
-export function unpublished(state: 'draft' | 'submitted' | 'returned', title: string, parts: WriteUpParts, returnReason: string | null = null): DemoWriteUp {
+export function unpublished(
+  state: 'draft' | 'submitted' | 'returned',
+  title: string,
+  parts: WriteUpParts,
+  returnReason: string | null = null,
+): DemoWriteUp {
   return { slug: null, state, returnReason, ...shared(title, parts) };
 }
 
-function shared(title: string, parts: WriteUpParts): Pick<DemoWriteUp, 'by' | 'daysAgo' | 'content' | 'later' | 'cautions'> {
+function shared(
+  title: string,
+  parts: WriteUpParts,
+): Pick<DemoWriteUp, 'by' | 'daysAgo' | 'content' | 'later' | 'cautions'> {
   const { by, daysAgo, later, cautions, symptoms, sources, ...rest } = parts;
-  return { by, daysAgo, later: later ?? [], cautions: listed(cautions, ' '), content: { ...rest, title, symptoms: listed(symptoms, ' '), sources: sources ?? practice } };
+  return {
+    by,
+    daysAgo,
+    later: later ?? [],
+    cautions: listed(cautions, ' '),
+    content: { ...rest, title, symptoms: listed(symptoms, ' '), sources: sources ?? practice },
+  };
 }
 
 /** A later edition, made from the one before it. */
 export const edition = (
-  by: string, daysAgo: number, note: string, change: DemoEdition['change'], state: DemoEdition['state'] = 'published',
+  by: string,
+  daysAgo: number,
+  note: string,
+  change: DemoEdition['change'],
+  state: DemoEdition['state'] = 'published',
 ): DemoEdition => ({ by, daysAgo, note, change, state, returnReason: null });
 
 /** The same content with one fix written anew; throws when there is no such fix. */
 export function withFix(content: DemoContent, key: string, change: Partial<DemoFix>): DemoContent {
-  if (!content.fixes.some((item) => item.key === key)) throw new Error(`There is no fix “${key}” in “${content.title}”.`);
-  return { ...content, fixes: content.fixes.map((item) => (item.key === key ? { ...item, ...change } : item)) };
+  if (!content.fixes.some((item) => item.key === key))
+    throw new Error(`There is no fix “${key}” in “${content.title}”.`);
+  return {
+    ...content,
+    fixes: content.fixes.map((item) => (item.key === key ? { ...item, ...change } : item)),
+  };
 }

@@ -9,7 +9,13 @@ import { spacerWriteUps } from './write-ups/spacers.js';
 import { openEditions, unpublishedWriteUps } from './write-ups/unpublished.js';
 
 const published = [
-  ...beltBracketWriteUps, ...ringGearWriteUps, ...motorWriteUps, ...clampWriteUps, ...dewWriteUps, ...spacerWriteUps, ...cameraWriteUps,
+  ...beltBracketWriteUps,
+  ...ringGearWriteUps,
+  ...motorWriteUps,
+  ...clampWriteUps,
+  ...dewWriteUps,
+  ...spacerWriteUps,
+  ...cameraWriteUps,
 ];
 
 /** Every write-up of the demo, by topic. */

@@ -18,7 +18,10 @@ describe('the lettering', () => {
 
 describe('the sheets of the demo', () => {
   it('are all different', () => {
-    const sheets = [...demoParts.map((part) => part.drawing), ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg))];
+    const sheets = [
+      ...demoParts.map((part) => part.drawing),
+      ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg)),
+    ];
     expect(new Set(sheets).size).toBe(sheets.length);
     expect(sheets.length).toBeGreaterThanOrEqual(85);
   });
@@ -29,13 +32,24 @@ describe('the sheets of the demo', () => {
   });
 
   it('hold no length that is not a number', () => {
-    const sheets = [...demoParts.map((part) => part.drawing), ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg))];
+    const sheets = [
+      ...demoParts.map((part) => part.drawing),
+      ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg)),
+    ];
     expect(sheets.filter((svg) => /NaN|undefined|Infinity/.test(svg))).toEqual([]);
   });
 });
 
 describe('a seat section', () => {
-  const seat = { title: 'SEAT', upper: 'PLATE', lower: 'BODY', boss: 22.5, bossHeight: 1.7, recess: 19.5, recessDepth: 2 };
+  const seat = {
+    title: 'SEAT',
+    upper: 'PLATE',
+    lower: 'BODY',
+    boss: 22.5,
+    bossHeight: 1.7,
+    recess: 19.5,
+    recessDepth: 2,
+  };
 
   it('marks an overlap where the boss is wider than the recess, and none where it enters', () => {
     expect(seatSection(seat)).toContain('fill="url(#clash)"');

@@ -1,7 +1,15 @@
 import { type LetteringStyle, lettering, letteringWidth } from './lettering.js';
 
 /** Inks of the sheet: outlines and text, measured values, what collides, and the faint lines. */
-export const ink = { blue: '#1d3f72', brass: '#8a5d0b', red: '#c0202a', faint: '#8fa3c2', tint: '#e9eef6', glass: '#d5e6f2', paper: '#ffffff' };
+export const ink = {
+  blue: '#1d3f72',
+  brass: '#8a5d0b',
+  red: '#c0202a',
+  faint: '#8fa3c2',
+  tint: '#e9eef6',
+  glass: '#d5e6f2',
+  paper: '#ffffff',
+};
 
 /** Size of every sheet in pixels, landscape 3 : 2. */
 export const sheetSize = { width: 960, height: 640 } as const;
@@ -19,7 +27,13 @@ const lines: Record<Line, string> = {
   red: `stroke="${ink.red}" stroke-width="2.2"`,
   brass: `stroke="${ink.brass}" stroke-width="1.2"`,
 };
-const fills: Record<Hatch, string> = { steel: 'url(#steel)', print: 'url(#print)', shim: 'url(#shim)', glass: ink.glass, none: ink.paper };
+const fills: Record<Hatch, string> = {
+  steel: 'url(#steel)',
+  print: 'url(#print)',
+  shim: 'url(#shim)',
+  glass: ink.glass,
+  none: ink.paper,
+};
 
 const definitions = `<defs>
 <pattern id="steel" width="11" height="11" patternUnits="userSpaceOnUse" patternTransform="rotate(45)"><rect width="11" height="11" fill="${ink.paper}"/><path d="M0 0V11" stroke="${ink.blue}" stroke-width="1.2"/></pattern>
@@ -47,7 +61,9 @@ export class Sheet {
   }
 
   path(d: string, kind: Line = 'outline', fill: Hatch | 'open' = 'open'): this {
-    return this.add(`<path d="${d}" fill="${fill === 'open' ? 'none' : fills[fill]}" ${lines[kind]} stroke-linejoin="round"/>`);
+    return this.add(
+      `<path d="${d}" fill="${fill === 'open' ? 'none' : fills[fill]}" ${lines[kind]} stroke-linejoin="round"/>`,
+    );
   }
 
   /** A closed outline, hatched where it is cut. */
@@ -56,7 +72,16 @@ export class Sheet {
   }
 
   box(x: number, y: number, width: number, height: number, hatch: Hatch, kind: Line = 'outline'): this {
-    return this.cut([[x, y], [x + width, y], [x + width, y + height], [x, y + height]], hatch, kind);
+    return this.cut(
+      [
+        [x, y],
+        [x + width, y],
+        [x + width, y + height],
+        [x, y + height],
+      ],
+      hatch,
+      kind,
+    );
   }
 
   circle(centre: Point, radius: number, kind: Line = 'outline', fill: Hatch | 'open' = 'open'): this {
@@ -87,14 +112,26 @@ export class Sheet {
     const leftwards = stand[0] < on[0];
     const y = stand[1];
     const x = leftwards ? Math.max(stand[0], 54 + width) : Math.min(stand[0], sheetSize.width - 54 - width);
-    this.add(`<path d="M${at(on)}L${at([x, y])}H${n(leftwards ? x - 8 : x + 8)}" fill="none" stroke="${colour}" stroke-width="1.1"/>`);
+    this.add(
+      `<path d="M${at(on)}L${at([x, y])}H${n(leftwards ? x - 8 : x + 8)}" fill="none" stroke="${colour}" stroke-width="1.1"/>`,
+    );
     this.add(`<circle cx="${n(on[0])}" cy="${n(on[1])}" r="3" fill="${colour}"/>`);
     this.add(backing(leftwards ? x - 14 - width : x + 14, y - 8, width, 18));
-    return this.text(leftwards ? x - 14 : x + 14, y + 6, text, { colour, anchor: leftwards ? 'end' : 'start' });
+    return this.text(leftwards ? x - 14 : x + 14, y + 6, text, {
+      colour,
+      anchor: leftwards ? 'end' : 'start',
+    });
   }
 
   /** Horizontal dimension between two x, its line at `y`; extension lines start at `fromY`. Values stand in brass. */
-  across(x1: number, x2: number, y: number, text: string, fromY: number | readonly [number, number], colour: string = ink.brass): this {
+  across(
+    x1: number,
+    x2: number,
+    y: number,
+    text: string,
+    fromY: number | readonly [number, number],
+    colour: string = ink.brass,
+  ): this {
     const [one, other] = typeof fromY === 'number' ? [fromY, fromY] : fromY;
     this.#extension([x1, one], [x1, y]).#extension([x2, other], [x2, y]);
     const width = letteringWidth(text, 13);
@@ -106,7 +143,14 @@ export class Sheet {
   }
 
   /** Vertical dimension between two y, its line at `x`; the figure reads from the right-hand side. */
-  down(y1: number, y2: number, x: number, text: string, fromX: number | readonly [number, number], colour: string = ink.brass): this {
+  down(
+    y1: number,
+    y2: number,
+    x: number,
+    text: string,
+    fromX: number | readonly [number, number],
+    colour: string = ink.brass,
+  ): this {
     const [one, other] = typeof fromX === 'number' ? [fromX, fromX] : fromX;
     this.#extension([one, y1], [x, y1]).#extension([other, y2], [x, y2]);
     const height = Math.abs(y2 - y1);

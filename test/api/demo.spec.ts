@@ -11,12 +11,22 @@ const now = new Date('2026-11-30T12:00:00Z');
 
 /** Keeps a photo's row without making its files, which takes most of the time and is tested elsewhere. */
 const storePhoto: DemoSurroundings['storePhoto'] = async (bytes, alt, ownerId) => {
-  const photo = { hash: createHash('sha256').update(bytes).digest('hex'), width: 960, height: 640, placeholder: 'data:image/webp;base64,', alt };
-  const [id] = await app.knex('photos').insert({ ...photo, widths: '[480,960]', owner_id: ownerId, created_at: now });
+  const photo = {
+    hash: createHash('sha256').update(bytes).digest('hex'),
+    width: 960,
+    height: 640,
+    placeholder: 'data:image/webp;base64,',
+    alt,
+  };
+  const [id] = await app
+    .knex('photos')
+    .insert({ ...photo, widths: '[480,960]', owner_id: ownerId, created_at: now });
   return { id: id!, ...photo, widths: [480, 960] };
 };
 const seed = (): Promise<void> => seedDemo({ knex: app.knex, storePhoto, now, hashPassword });
-const published = demoWriteUps.flatMap((writeUp) => (writeUp.state === 'published' && writeUp.slug ? [writeUp.slug] : []));
+const published = demoWriteUps.flatMap((writeUp) =>
+  writeUp.state === 'published' && writeUp.slug ? [writeUp.slug] : [],
+);
 
 beforeAll(async () => {
   app = await startTestApp();
@@ -32,16 +42,22 @@ describe('the seeded demo', () => {
       expect(body.view.fixes.length, slug).toBeGreaterThan(0);
       expect(body.view.photos.length, slug).toBeGreaterThan(0);
     }
-    const { body } = await visitor.get('/api/write-ups/belt-bracket-lip-does-not-enter-the-m1-recess').expect(200);
+    const { body } = await visitor
+      .get('/api/write-ups/belt-bracket-lip-does-not-enter-the-m1-recess')
+      .expect(200);
     const trim = body.view.fixes.find((fix: { key: string }) => fix.key === 'trim-the-lip-off');
-    expect(trim.cautions.flatMap((caution: { hazards: string[] }) => caution.hazards)).toContain('power-tool');
+    expect(trim.cautions.flatMap((caution: { hazards: string[] }) => caution.hazards)).toContain(
+      'power-tool',
+    );
     expect(body.editionCount).toBe(4);
   });
 
   it('has fixes of every standing, and at least one that a maker has made right', async () => {
     const standings = await app.knex('fixes').distinct('standing').pluck('standing');
     expect(standings.sort()).toEqual(['made-right', 'measured', 'told', 'tried']);
-    expect(await app.knex('fixes').whereNotNull('made_right_from').where('standing', '!=', 'made-right')).toEqual([]);
+    expect(
+      await app.knex('fixes').whereNotNull('made_right_from').where('standing', '!=', 'made-right'),
+    ).toEqual([]);
   });
 
   it('points each write-up at its last published edition and asks for it to be indexed', async () => {
@@ -60,22 +76,38 @@ describe('the seeded demo', () => {
   it('leaves nothing dated after now or more than four years before', async () => {
     const earliest = new Date(now.getTime() - 4 * 365 * 86_400_000);
     for (const table of ['accounts', 'write_ups', 'editions', 'trials', 'bench_items', 'desk_decisions']) {
-      const range = await app.knex(table).min({ first: 'created_at' }).max({ last: 'created_at' }).first<{ first: Date; last: Date }>();
+      const range = await app
+        .knex(table)
+        .min({ first: 'created_at' })
+        .max({ last: 'created_at' })
+        .first<{ first: Date; last: Date }>();
       expect(range.first.getTime(), table).toBeGreaterThan(earliest.getTime());
       expect(range.last.getTime(), table).toBeLessThanOrEqual(now.getTime());
     }
   });
 
   it('has three editions on the desk, one returned with its reason and four drafts', async () => {
-    const count = async (state: string): Promise<number> => (await app.knex('editions').where({ state })).length;
-    expect({ submitted: await count('submitted'), returned: await count('returned'), draft: await count('draft') }).toEqual({ submitted: 3, returned: 1, draft: 4 });
+    const count = async (state: string): Promise<number> =>
+      (await app.knex('editions').where({ state })).length;
+    expect({
+      submitted: await count('submitted'),
+      returned: await count('returned'),
+      draft: await count('draft'),
+    }).toEqual({ submitted: 3, returned: 1, draft: 4 });
     expect(await app.knex('editions').where({ state: 'returned' }).whereNull('return_reason')).toEqual([]);
   });
 
-  it.each(demoAccounts.map((account) => [account.key, account] as const))('lets the %s sign in', async (_key, account) => {
-    const { body } = await app.visitor().post('/api/account/sign-in').send({ email: account.email, password: account.password }).expect(200);
-    expect(body.account).toMatchObject({ displayName: account.displayName, role: account.role });
-  });
+  it.each(demoAccounts.map((account) => [account.key, account] as const))(
+    'lets the %s sign in',
+    async (_key, account) => {
+      const { body } = await app
+        .visitor()
+        .post('/api/account/sign-in')
+        .send({ email: account.email, password: account.password })
+        .expect(200);
+      expect(body.account).toMatchObject({ displayName: account.displayName, role: account.role });
+    },
+  );
 
   it('refuses to be made twice', async () => {
     await expect(seed()).rejects.toThrow(/already there/);

@@ -1,4 +1,4 @@
-import { beltPlan } from '../../drawing/plans.js';
+import { beltPlan } from '../../drawing/drive-plans.js';
 import { plotSheet } from '../../drawing/plots.js';
 import { seatSection, tiltSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, writeUp, type DemoWriteUp } from '../write-up-shape.js';

@@ -1,6 +1,8 @@
-import { envelopePlan, meshPlan, ringClampSection } from '../../drawing/plans.js';
+import { meshPlan } from '../../drawing/drive-plans.js';
+import { barrelSection, dovetailSection } from '../../drawing/mating-sections.js';
+import { envelopePlan, ringClampSection } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { barrelSection, dovetailSection, seatSection, tiltSection } from '../../drawing/sections.js';
+import { seatSection, tiltSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Cameras, wheels, rotators. */

@@ -1,6 +1,7 @@
+import { dovetailSection } from '../../drawing/mating-sections.js';
 import { envelopePlan, holePlan, ringClampSection } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { dovetailSection, tiltSection } from '../../drawing/sections.js';
+import { tiltSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Clamps, feet, guide scopes. */

@@ -1,6 +1,6 @@
+import { barrelSection } from '../../drawing/mating-sections.js';
 import { envelopePlan } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { barrelSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Dew heaters and what they disturb. */

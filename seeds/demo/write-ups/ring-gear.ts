@@ -1,6 +1,7 @@
-import { envelopePlan, meshPlan } from '../../drawing/plans.js';
+import { meshPlan } from '../../drawing/drive-plans.js';
+import { barrelSection } from '../../drawing/mating-sections.js';
+import { envelopePlan } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { barrelSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Ring gears and pinions. */

@@ -1,6 +1,7 @@
+import { barrelSection } from '../../drawing/mating-sections.js';
 import { holePlan } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
-import { barrelSection, stackSection, tiltSection } from '../../drawing/sections.js';
+import { stackSection, tiltSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, withFix, writeUp, type DemoWriteUp } from '../write-up-shape.js';
 
 /** Back focus, spacers, reducers, tilt. */

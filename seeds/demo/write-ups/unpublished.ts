@@ -1,5 +1,6 @@
-import { beltPlan } from '../../drawing/plans.js';
-import { barrelSection, seatSection } from '../../drawing/sections.js';
+import { beltPlan } from '../../drawing/drive-plans.js';
+import { barrelSection } from '../../drawing/mating-sections.js';
+import { seatSection } from '../../drawing/sections.js';
 import { atLeast, atMost, drawing, edition, fix, joint, read, side, unpublished, type DemoEdition, type DemoWriteUp } from '../write-up-shape.js';
 
 /**
