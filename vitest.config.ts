@@ -11,6 +11,7 @@ export default defineConfig({
             'shared/**/*.spec.ts',
             'server/**/*.spec.ts',
             'seeds/**/*.spec.ts',
+            'search-fixtures/**/*.spec.ts',
             'test/reference/**/*.spec.ts',
             'test/lint/**/*.spec.ts',
           ],
