@@ -31,6 +31,11 @@ export const appRoutes: Routes = [
     title: 'Bench',
     loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
   },
+  {
+    path: 'mail/unsubscribe',
+    title: 'Stop notice mail',
+    loadComponent: () => import('./account/unsubscribe').then((m) => m.Unsubscribe),
+  },
   { path: 'account', loadChildren: () => import('./account/account.routes').then((m) => m.routes) },
   {
     path: 'desk',

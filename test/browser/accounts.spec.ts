@@ -90,7 +90,7 @@ describe('an account', () => {
 
   it('when a confirmation link is spent, then the page says so and mails a new one', async () => {
     const { page, visit } = await open();
-    await visit(`/account/confirm-email?token=${'a'.repeat(43)}`);
+    await visit(`/account/confirm?token=${'a'.repeat(43)}`);
     await page.getByRole('heading', { name: 'The address is not confirmed' }).waitFor();
     await expectAccessible(page);
 

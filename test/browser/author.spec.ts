@@ -33,7 +33,7 @@ async function signUp({ page, visit }: TestPage, name: string): Promise<void> {
   await page.getByLabel('Password', { exact: true }).fill('shim behind the plate');
   await page.getByRole('button', { name: 'Make the account' }).click();
   await page.getByText('A mail is on its way').waitFor();
-  await visit(`/account/confirm-email?token=${await browser.mailbox.tokenFor(email)}`);
+  await visit(`/account/confirm?token=${await browser.mailbox.tokenFor(email)}`);
   await page.getByRole('heading', { name: `Welcome, ${name}` }).waitFor();
 }
 
@@ -59,7 +59,7 @@ describe('an author', () => {
     await visit(draftPath);
     expect(await page.getByLabel('Title').inputValue()).toBe(title);
     expect(await page.getByLabel('Caption').inputValue()).toBe('Gap of 1.2 mm');
-    expect(await page.getByLabel('Step 1').inputValue()).toContain('Put the coin');
+    expect(await page.getByRole('textbox', { name: 'Step 1' }).inputValue()).toContain('Put the coin');
 
     await page.getByRole('link', { name: 'Preview' }).click();
     await page.getByRole('heading', { name: title }).waitFor();

@@ -10,7 +10,7 @@ export const routes: Routes = [
     loadComponent: () => import('./sign-up').then((m) => m.SignUp),
   },
   {
-    path: 'confirm-email',
+    path: 'confirm',
     title: 'Confirm your address',
     loadComponent: () => import('./confirm').then((m) => m.Confirm),
   },
@@ -20,14 +20,9 @@ export const routes: Routes = [
     loadComponent: () => import('./ask-reset').then((m) => m.AskReset),
   },
   {
-    path: 'reset-password',
+    path: 'reset',
     title: 'New password',
     loadComponent: () => import('./reset').then((m) => m.Reset),
-  },
-  {
-    path: 'unsubscribe',
-    title: 'Stop notice mail',
-    loadComponent: () => import('./unsubscribe').then((m) => m.Unsubscribe),
   },
   {
     path: 'profile',

@@ -46,7 +46,7 @@ export async function writeWriteUp({ page, visit }: TestPage, title: string, ste
   await page.getByLabel('What the remedy is called').fill('Coin behind the plate');
   await page.getByRole('radio', { name: /^Shim/ }).check();
   await page.getByRole('radio', { name: /^Reversible/ }).check();
-  await page.getByLabel('Step 1').fill(step);
+  await page.getByRole('textbox', { name: 'Step 1' }).fill(step);
   await untilSaved(page);
 }
 
