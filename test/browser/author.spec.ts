@@ -145,6 +145,7 @@ describe('an author', () => {
     await page.getByRole('button', { name: 'Start writing' }).click();
     await page.waitForURL(/\/drafts\/\d+$/);
     const path = new URL(page.url()).pathname;
+    await page.getByLabel('What touches what, and why').waitFor();
     await context.setOffline(true);
     await page.getByLabel('What touches what, and why').fill('Typed without a connection.');
     await page.getByText('Not saved: The server cannot be reached.').waitFor();
