@@ -17,14 +17,12 @@ import { timeLineOf } from './revision-line';
         </div>
         @for (span of line.spans; track span.revision.id) {
           <div class="row">
-            <a
+            <span
               class="span"
-              [href]="path() + '#rev-' + span.revision.id"
               [class.sold]="span.sold"
               [style.inset-inline-start.%]="span.start"
               [style.inline-size.%]="span.length"
-              tabindex="-1"
-            ></a>
+            ></span>
             <b [style.inset-inline-start.%]="span.start">{{ span.revision.label }}</b>
           </div>
         }
@@ -81,7 +79,6 @@ import { timeLineOf } from './revision-line';
 export class RevisionTimeLine {
   readonly revisions = input.required<readonly Revision[]>();
   readonly now = input.required<Date>();
-  readonly path = input.required<string>();
 
   protected readonly timeLine = computed(() => timeLineOf(this.revisions(), this.now()));
   protected readonly words = computed(() =>

@@ -25,7 +25,7 @@ const shownAtOnce = 8;
             ><input
               type="checkbox"
               [checked]="value.chosen"
-              (change)="toggle.emit({ name: group.name, value: value.value })"
+              (change)="toggled.emit({ name: group.name, value: value.value })"
             /><span>{{ value.label }}</span
             ><span class="count">{{ value.count }}</span></label
           >
@@ -38,7 +38,7 @@ const shownAtOnce = 8;
                 ><input
                   type="checkbox"
                   [checked]="value.chosen"
-                  (change)="toggle.emit({ name: group.name, value: value.value })"
+                  (change)="toggled.emit({ name: group.name, value: value.value })"
                 /><span>{{ value.label }}</span
                 ><span class="count">{{ value.count }}</span></label
               >
@@ -112,7 +112,7 @@ const shownAtOnce = 8;
 export class FilterPanel {
   readonly state = input.required<SearchState>();
   readonly facets = input.required<SearchResults['facets'] | undefined>();
-  readonly toggle = output<{ name: FilterName; value: string }>();
+  readonly toggled = output<{ name: FilterName; value: string }>();
   readonly cleared = output();
 
   protected readonly anyChosen = computed(() => chosenCount(this.state()) > 0);
