@@ -1,5 +1,6 @@
 import type { Knex } from 'knex';
 import type { Photo } from '../shared/contract/photos.js';
+import { seedMeasured } from './demo/measured/seed-measured.js';
 import { seedAccounts } from './demo/seed-accounts.js';
 import { seedBenches } from './demo/seed-benches.js';
 import { seedCatalogue } from './demo/seed-catalogue.js';
@@ -29,5 +30,6 @@ export async function seedDemo({ knex, storePhoto, now, hashPassword }: DemoSurr
     const catalogue = await seedCatalogue(trx, partPhotos);
     await seedWriteUps(trx, { accounts, catalogue, photos, now });
     await seedBenches(trx, { accounts, catalogue, now });
+    await seedMeasured(trx, { accounts, catalogue, now });
   });
 }

@@ -2,6 +2,8 @@ import type { Knex } from 'knex';
 import { demoCautionLibrary } from './caution-library.js';
 import { idsFrom, insertRows } from './ids.js';
 import { demoMakers } from './makers.js';
+import { priceBands } from './measured/prices.js';
+import { processOf } from './measured/process.js';
 import { demoParts } from './parts.js';
 import { slugOf } from './slug.js';
 import { demoSymptoms } from './symptoms.js';
@@ -11,6 +13,8 @@ export interface Catalogue {
   readonly parts: ReadonlyMap<string, number>;
   /** By `part:letter`. */
   readonly revisions: ReadonlyMap<string, number>;
+  /** By `part/name`. */
+  readonly features: ReadonlyMap<string, number>;
   readonly symptoms: ReadonlyMap<string, number>;
   readonly cautions: ReadonlyMap<string, number>;
 }
@@ -36,19 +40,12 @@ export async function seedCatalogue(knex: Knex, partPhotos: ReadonlyMap<string, 
       kind: part.kind,
       about: part.about,
       photo_id: partPhotos.get(part.slug) ?? null,
+      price_band: priceBands[part.slug] ?? null,
     })),
   );
 
   const revisions = await seedRevisions(knex, parts);
-  const features = demoParts.flatMap((part) =>
-    part.features.map(({ kind, name }) => ({
-      part_id: parts.get(part.slug),
-      slug: slugOf(name),
-      name,
-      kind,
-    })),
-  );
-  await insertRows(knex, 'features', features);
+  const features = await seedFeatures(knex, parts);
 
   const symptoms = await identified(knex, 'symptoms', demoSymptoms);
   await insertRows(
@@ -79,7 +76,7 @@ export async function seedCatalogue(knex: Knex, partPhotos: ReadonlyMap<string, 
       position,
     })),
   );
-  return { parts, revisions, symptoms, cautions };
+  return { parts, revisions, features, symptoms, cautions };
 }
 
 async function seedRevisions(knex: Knex, parts: ReadonlyMap<string, number>): Promise<Map<string, number>> {
@@ -102,6 +99,27 @@ async function seedRevisions(knex: Knex, parts: ReadonlyMap<string, number>): Pr
     }),
   );
   await insertRows(knex, 'revisions', rows);
+  return ids;
+}
+
+async function seedFeatures(knex: Knex, parts: ReadonlyMap<string, number>): Promise<Map<string, number>> {
+  const nextId = await idsFrom(knex, 'features');
+  const ids = new Map<string, number>();
+  const rows = demoParts.flatMap((part) =>
+    part.features.map(({ kind, name }) => {
+      const id = nextId();
+      ids.set(`${part.slug}/${name}`, id);
+      return {
+        id,
+        part_id: parts.get(part.slug),
+        slug: slugOf(name),
+        name,
+        kind,
+        process: processOf(part),
+      };
+    }),
+  );
+  await insertRows(knex, 'features', rows);
   return ids;
 }
 

@@ -21,7 +21,7 @@ export const cameraParts: readonly DemoPart[] = [
     slug: 'quillback-q26', maker: 'quillback', kind: 'camera', name: 'Q26',
     about: 'Cooled camera with a sensor of 28 mm diagonal.',
     outline: { shape: 'box', width: 90, height: 90, depth: 112, opening: 54 },
-    features: features({ thread: 'M54 flange', 'hole-pattern': 'six flange holes', envelope: 'fan' }),
+    features: features({ thread: 'M54 flange', 'hole-pattern': 'six flange holes', recess: 'opening of the flange', envelope: 'fan' }),
     revisions: [
       revision('A', '2022-05-01..2024-01-01', 'Fan grille round.', 'First batch.'),
       revision('B', '2024-01-01..', 'Fan grille square.', 'Heavier cooler, 720 g.'),

@@ -10,7 +10,7 @@ export const clampParts: readonly DemoPart[] = [
     slug: 'larkfield-tube-ring-70', maker: 'larkfield-optics', kind: 'clamp', name: 'Tube ring 70',
     about: 'Hinged ring for 66 mm tubes, lined with felt.',
     outline: { shape: 'ring', outer: 86, inner: 70, length: 18 },
-    features: features({ bore: 'lined bore', 'hole-pattern': 'top holes' }),
+    features: features({ bore: 'lined bore', 'hole-pattern': 'top holes', envelope: 'hinge' }),
     revisions: [revision('A', '2021-03-01..2023-09-01', 'Black felt, 2 mm.', 'First batch.'), revision('B', '2023-09-01..', 'Grey felt, 1.5 mm, in three strips.', 'Three strips of felt.')],
   }),
   drawn({

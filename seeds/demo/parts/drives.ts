@@ -10,7 +10,7 @@ export const driveParts: readonly DemoPart[] = [
     slug: 'tarn-m1', maker: 'tarn-motion', kind: 'focus-motor', name: 'M1',
     about: 'Stepper focus motor with a planetary gear, 5 mm shaft and a recess round it that centres brackets.',
     outline: { shape: 'motor', body: 42, length: 52, shaft: 5 },
-    features: features({ recess: 'recess round the shaft', shaft: 'output shaft', 'hole-pattern': 'face holes', envelope: 'cable outlet' }),
+    features: features({ recess: 'recess round the shaft', shaft: 'output shaft', 'hole-pattern': 'face holes', envelope: ['cable outlet', 'body'] }),
     revisions: [
       revision('A', '2021-02-01..2022-05-01', 'Label with a blue stripe; recess Ø 23.0.', 'First batch.'),
       revision('B', '2022-05-01..2023-07-01', 'Blue stripe, letter B; recess Ø 23.0, plug at the side.', 'Plug moved from the rear to the side.'),
@@ -22,7 +22,7 @@ export const driveParts: readonly DemoPart[] = [
     slug: 'tarn-m2', maker: 'tarn-motion', kind: 'focus-motor', name: 'M2',
     about: 'Stronger focus motor for rack focusers and 80 mm helicals.',
     outline: { shape: 'motor', body: 47, length: 61, shaft: 6 },
-    features: features({ recess: 'recess round the shaft', shaft: 'output shaft', 'hole-pattern': 'face holes', envelope: 'cable outlet' }),
+    features: features({ recess: 'recess round the shaft', shaft: 'output shaft', 'hole-pattern': 'face holes', envelope: ['cable outlet', 'body'] }),
     revisions: [
       revision('A', '2022-02-01..2023-03-01', 'No letter.', 'First batch; face holes on Ø 31.0.'),
       revision('B', '2023-03-01..2024-09-01', 'Letter B.', 'Face holes on Ø 33.0; shaft Ø 6.35.'),
@@ -77,7 +77,7 @@ export const driveParts: readonly DemoPart[] = [
     slug: 'cotterpin-ring-gear-kit-80', maker: 'cotterpin-works', kind: 'gear-kit', name: 'Ring-gear kit 80',
     about: 'Ring gear of 126 teeth for the Wren 80 with a 16-tooth pinion on an eccentric bush.',
     outline: { shape: 'gear', teeth: 126, module: 0.8, width: 9 },
-    features: features({ gear: ['ring gear', 'pinion'], bore: 'bore of the ring', slot: 'eccentric bush' }),
+    features: features({ gear: ['ring gear', 'pinion'], bore: ['bore of the ring', 'bore of the pinion'], slot: 'eccentric bush' }),
     revisions: [
       revision('A', '2022-09-01..2023-05-01', 'Bush without marks.', 'First batch.'),
       revision('B', '2023-05-01..2024-09-15', 'Bush with one mark.', 'Bush throws 1.0 mm instead of 0.6.'),
@@ -98,7 +98,7 @@ export const driveParts: readonly DemoPart[] = [
     slug: 'thornapple-belt-kit-60', maker: 'thornapple-drives', kind: 'belt-kit', name: 'Belt kit 60',
     about: 'Toothed ring for the Wren 60, 20-tooth pulley and a closed belt of 2 mm pitch.',
     outline: { shape: 'gear', teeth: 60, module: 0.64, width: 7 },
-    features: features({ pulley: ['ring pulley', 'motor pulley'], bore: 'bore of the motor pulley', slot: 'idler slot' }),
+    features: features({ pulley: ['ring pulley', 'motor pulley'], bore: ['bore of the motor pulley', 'bore of the ring pulley'], slot: 'idler slot' }),
     revisions: [
       revision('A', '2022-01-01..2023-01-01', 'Belt marked 300.', 'First batch; belt of 150 teeth.'),
       revision('B', '2023-01-01..2024-07-01', 'Belt marked 294; idler with one flange.', 'Belt of 147 teeth, idler added.'),
@@ -109,7 +109,7 @@ export const driveParts: readonly DemoPart[] = [
     slug: 'thornapple-belt-kit-80', maker: 'thornapple-drives', kind: 'belt-kit', name: 'Belt kit 80',
     about: 'Belt kit for the Wren 80.',
     outline: { shape: 'gear', teeth: 72, module: 0.64, width: 9 },
-    features: features({ pulley: ['ring pulley', 'motor pulley'], bore: 'bore of the motor pulley' }),
+    features: features({ pulley: ['ring pulley', 'motor pulley'], bore: ['bore of the motor pulley', 'bore of the ring pulley'] }),
     revisions: [
       revision('A', '2022-10-01..2024-02-01', 'Belt marked 366.', 'First batch.'),
       revision('B', '2024-02-01..', 'Belt marked 360.', 'Belt three teeth shorter.'),

@@ -10,7 +10,7 @@ export const opticsParts: readonly DemoPart[] = [
     slug: 'larkfield-wren-60', maker: 'larkfield-optics', kind: 'telescope', name: 'Wren 60',
     about: '60 mm refractor, f/5.5, with a helical focuser whose grip ring takes a belt or a ring gear.',
     outline: { shape: 'tube', diameter: 66, length: 248, shield: 80 },
-    features: features({ envelope: 'room round the focus ring', gear: 'grip ring of the focuser', dovetail: 'foot', thread: 'rear thread M48', barrel: 'dew shield' }),
+    features: features({ envelope: ['room round the focus ring', 'clamp screw of the focuser'], gear: 'grip ring of the focuser', dovetail: 'foot', thread: 'rear thread M48', barrel: ['dew shield', 'tube', 'grip ring over the knurl'] }),
     revisions: [
       revision('A', '2021-03-01..2022-04-01', 'Batch ring says 1 to 4; grip ring with straight knurls.', 'First batch.'),
       revision('B', '2022-04-01..2023-06-15', 'Batch ring 5 to 9; clamp screw of the focuser at two o’clock, seen from the camera.', 'Clamp screw moved from six to two o’clock; M3 became M4.'),
@@ -22,7 +22,7 @@ export const opticsParts: readonly DemoPart[] = [
     slug: 'larkfield-wren-80', maker: 'larkfield-optics', kind: 'telescope', name: 'Wren 80',
     about: '80 mm refractor, f/6, heavier helical focuser with two lead starts.',
     outline: { shape: 'tube', diameter: 88, length: 395, shield: 104 },
-    features: features({ envelope: 'room round the focus ring', gear: 'grip ring of the focuser', thread: 'rear thread M54', barrel: 'dew shield' }),
+    features: features({ envelope: 'room round the focus ring', gear: 'grip ring of the focuser', thread: 'rear thread M54', barrel: ['dew shield', 'grip ring over the knurl'] }),
     revisions: [
       revision('A', '2022-01-10..2023-02-01', 'Grey lens cell.', 'First batch.'),
       revision('B', '2023-02-01..2024-08-01', 'Blue lens cell, focus scale engraved.', 'Grip ring from Ø 92 to Ø 94; longer travel.'),
