@@ -33,6 +33,7 @@ function resolve(told: DemoContent): EditionContent {
   const catalogue = {
     parts: numbered(demoParts.map((part) => part.slug)),
     revisions: numbered(revisions),
+    features: numbered([]),
     symptoms: numbered(demoSymptoms.map((item) => item.slug)),
     cautions: numbered(demoCautionLibrary.map((item) => item.slug)),
   };

@@ -56,7 +56,7 @@ export function withWrongEntries(
     const place = placeOf(reading);
     const fitting =
       reading.unit === 'mm' && reading.value > 3 && sizes.get(place)! >= fewest && !spoilt.has(place);
-    if (!fitting || next() > 0.03) return reading;
+    if (!fitting || next() > 0.042) return reading;
     const slip = slips[made % slips.length]!;
     const typed = slip.typed(reading);
     if (!typed || typed.entered.some((value) => !(value > 0))) return reading;

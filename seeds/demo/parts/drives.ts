@@ -102,7 +102,7 @@ export const driveParts: readonly DemoPart[] = [
     revisions: [
       revision('A', '2022-01-01..2023-01-01', 'Belt marked 300.', 'First batch; belt of 150 teeth.'),
       revision('B', '2023-01-01..2024-07-01', 'Belt marked 294; idler with one flange.', 'Belt of 147 teeth, idler added.'),
-      revision('C', '2024-07-01..', 'Idler with two flanges.', 'Second flange on the idler.'),
+      revision('C', '2024-07-01..', 'Idler with two flanges.', 'Second flange on the idler; pulley bored with a flat for the M1 Rev D.'),
     ],
   }),
   drawn({

@@ -44,7 +44,7 @@ export const cameraSizes: readonly MeasuredFeature[] = [
   measured(
     'pallister-fw5',
     'M48 on the telescope side',
-    { length: { ABC: 4.2 } },
+    { length: { ABC: 4.8 } },
     { designation: { ABC: 'M48x0.75' }, sex: { ABC: 'female' } },
   ),
   measured('pallister-fw7', 'case', {
@@ -73,11 +73,10 @@ export const cameraSizes: readonly MeasuredFeature[] = [
     { length: { ABC: 4.7 } },
     { designation: { ABC: 'M54x0.75' }, sex: { ABC: 'female' } },
   ),
-  // Rev A was cut with a pitch of 1 mm.
   measured(
     'brackwater-hand-rotator',
     'M48 on both sides',
     { length: { AB: 4 } },
-    { designation: { A: 'M48x1', B: 'M48x0.75' }, sex: { AB: 'male' } },
+    { designation: { AB: 'M48x0.75' }, sex: { AB: 'male' } },
   ),
 ];

@@ -3,8 +3,8 @@ import { measured, type MeasuredFeature } from '../measured-shape.js';
 /** Clamps, feet, the guide scope and dew rings. */
 export const clampSizes: readonly MeasuredFeature[] = [
   measured('larkfield-tube-ring-70', 'lined bore', {
-    diameter: { A: 67.4, B: 69 },
-    closedDiameter: { A: 64.6, B: 67 },
+    diameter: { A: 67.4, B: 67.6 },
+    closedDiameter: { A: 64.6, B: 66.5 },
   }),
   measured(
     'larkfield-tube-ring-70',
@@ -68,5 +68,5 @@ export const clampSizes: readonly MeasuredFeature[] = [
     diameter: { ABC: 31.82 },
     depth: { ABC: 26 },
   }),
-  measured('emberfell-dew-ring', 'bore', { diameter: { AB: 80.2, C: 82 }, depth: { ABC: 16 } }),
+  measured('emberfell-dew-ring', 'bore', { diameter: { AB: 80.2, C: 82 }, depth: { ABC: 16 } }, {}, { C: 2 }),
 ];

@@ -32,11 +32,14 @@ export const motorSizes: readonly MeasuredFeature[] = [
     angle: { ABCD: 180 },
     width: { ABCD: 40 },
   }),
-  measured('tarn-m2', 'recess round the shaft', {
-    diameter: { A: 27, B: 27.02 },
-    depth: { AB: 2.2 },
-    outerDiameter: { AB: 33 },
-  }),
+  // One person has measured Rev B, nobody Rev C.
+  measured(
+    'tarn-m2',
+    'recess round the shaft',
+    { diameter: { A: 27, B: 27.02 }, depth: { AB: 2.2 }, outerDiameter: { AB: 33 } },
+    {},
+    { B: 1 },
+  ),
   measured(
     'tarn-m2',
     'output shaft',
