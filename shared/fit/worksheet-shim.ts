@@ -1,5 +1,5 @@
 import type { OwnPiece, ShimInputs, WorksheetFigure, WorksheetSummary } from '../contract/worksheet.js';
-import { coverage95 } from './dimension.js';
+import { coverage95, millimetresPerInch } from './dimension.js';
 import { usualUncertainty } from './instruments.js';
 import {
   bestStacks,
@@ -31,7 +31,7 @@ export interface ShimSheet {
   readonly summary: WorksheetSummary;
 }
 
-/** The question that the inputs put, or what is out of range. Finding the stacks is the dear part: `answerShim`. */
+/** The question that the inputs put, or what is out of range. Finding the stacks is the dear part: `findLines`. */
 export function askShim(inputs: ShimInputs): Outcome<ShimQuestion> {
   const check = new InputCheck(inputs.unit);
   const gap = check.neededLength('gap', 'gap to fill', inputs.gap, ranges.gap);
@@ -65,24 +65,32 @@ export function stockOf(inputs: ShimInputs): readonly StockKind[] {
   return [...library, ...inputs.own.map(ownKind)];
 }
 
-/** The best stacks for the question, and the chosen one among them. */
-export function answerShim(inputs: ShimInputs, question: ShimQuestion): ShimSheet {
+/** The best stacks for a question, each with where it stands on three points. The dear part: see `bestStacks`. */
+export function findLines(inputs: ShimInputs, question: ShimQuestion): readonly ShimLine[] {
   const boltCircle =
     inputs.layout === 'three-points' && inputs.boltCircle !== null
-      ? inputs.boltCircle * (inputs.unit === 'in' ? 25.4 : 1)
+      ? inputs.boltCircle * (inputs.unit === 'in' ? millimetresPerInch : 1)
       : null;
-  const lines = bestStacks(question).map((stack) => ({
+  return bestStacks(question).map((stack) => ({
     key: stack.pieces.map((piece) => `${piece.stock.id}.${piece.count}`).join('_'),
     stack,
     points: boltCircle === null ? null : threePoints(boltCircle, stackUncertainty(stack)),
   }));
-  const chosen = lines.find((line) => line.key === inputs.chosen) ?? lines[0] ?? null;
+}
+
+/** The sheet with the stack of that key chosen, or the first where none has it. */
+export function chooseLine(question: ShimQuestion, lines: readonly ShimLine[], key: string): ShimSheet {
+  const chosen = lines.find((line) => line.key === key) ?? lines[0] ?? null;
   return { question, lines, chosen, summary: summaryOf(question, chosen) };
 }
 
 export function runShim(inputs: ShimInputs): Outcome<ShimSheet> {
   const asked = askShim(inputs);
-  return { ...asked, result: asked.result && answerShim(inputs, asked.result) };
+  const question = asked.result;
+  return {
+    ...asked,
+    result: question && chooseLine(question, findLines(inputs, question), inputs.chosen),
+  };
 }
 
 /** Pieces in words: "1 US cent + 2 shim ring 0.10 mm". */

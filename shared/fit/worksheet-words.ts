@@ -87,3 +87,30 @@ export const worksheetWords: Record<WorksheetKind, WorksheetWords> = {
     ],
   },
 };
+
+/** What each input is called, where it is named away from its field. */
+export const inputLabels: Record<string, string> = {
+  bossDiameter: 'Diameter of the boss or barrel',
+  bossHeight: 'Height or length of the boss or barrel',
+  plateWidth: 'Width of the plate',
+  recessDiameter: 'Diameter of the recess or bore',
+  recessDepth: 'Depth of the recess or bore',
+  recessOuter: 'Outer diameter of the wall round the recess',
+  faceWidth: 'Face width',
+  gap: 'Gap',
+  gapUncertainty: 'Uncertainty of the gap',
+  tolerance: 'Tolerance',
+  mostPieces: 'Most pieces',
+  boltCircle: 'Bolt circle',
+  families: 'Stock',
+  allowance: 'Allowance',
+  clearanceWanted: 'Clearance wanted',
+};
+
+/** Name of an input for a reader: "Uncertainty of: diameter of the boss or barrel". */
+export function inputLabel(field: string): string {
+  const own = inputLabels[field];
+  if (own) return own;
+  const of = inputLabels[field.replace(/Uncertainty$/, '')];
+  return of ? `Uncertainty of: ${of.charAt(0).toLowerCase()}${of.slice(1)}` : field;
+}

@@ -26,6 +26,7 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./hardware/hardware-page').then((m) => m.HardwarePage),
   },
   { path: 'parts/:slug', loadComponent: () => import('./hardware/part-page').then((m) => m.PartPage) },
+  { path: 'worksheets', loadChildren: () => import('./worksheets/worksheets.routes').then((m) => m.routes) },
   {
     path: 'bench',
     title: 'Bench',
