@@ -14,12 +14,13 @@ import { PhotoView } from '../ui/photo/photo';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
 import { Hardware } from './hardware';
+import { MeasurementSection } from './measurements/measurement-section';
 import { RevisionTimeLine } from './revision-time-line';
 
 /** A part: its revisions on a time line, how to tell which one is on the bench, what changed, and what is written about it. */
 @Component({
   selector: 'sl-part-page',
-  imports: [Icon, LoadStateView, PhotoView, ProblemNote, RevisionTimeLine, RouterLink],
+  imports: [Icon, LoadStateView, MeasurementSection, PhotoView, ProblemNote, RevisionTimeLine, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './part-page.html',
   styleUrl: './part-page.scss',
