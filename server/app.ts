@@ -23,9 +23,11 @@ import { createMail } from './mail/mail.js';
 import { createMeasurements } from './measurements/measurements.js';
 import { createModeration } from './moderation/moderation.js';
 import { createPhotos } from './photos/photos.js';
+import { createProposals } from './proposals/proposals.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
 import { renderText } from './text/render-text.js';
+import { createWhichOne } from './which-one/which-one.js';
 import type { Worker } from './worker.js';
 import { createWorksheets } from './worksheets/worksheets.js';
 import { createWriteUps } from './write-ups/write-ups.js';
@@ -102,6 +104,15 @@ export function createApp(around: Surroundings): Composition {
     searchOutbox: search.outbox,
   });
   const measurements = createMeasurements({ knex, clock, limits });
+  const whichOne = createWhichOne({ knex, clock, hardware: hardware.service });
+  const proposals = createProposals({
+    knex,
+    clock,
+    limits,
+    mail: mail.queue,
+    measurements: measurements.service,
+    searchOutbox: search.outbox,
+  });
   const joints = createJoints({
     knex,
     clock,
@@ -122,6 +133,8 @@ export function createApp(around: Surroundings): Composition {
     ...mail.bindings,
     ...photos.bindings,
     ...hardware.bindings,
+    ...whichOne.bindings,
+    ...proposals.bindings,
     ...bench.bindings,
     ...search.bindings,
     ...writeUps.bindings,

@@ -51,12 +51,18 @@ export function createHardwareService(store: HardwareStore, pages: PartPageStore
       return { items: await summariesOf(page.items), next: page.next };
     },
 
-    /** NotFound for a slug that no part has. */
+    /**
+     * The address of a part that was merged into another leads to that one, which tells its own. NotFound for a slug that
+     * no part has or had.
+     */
     async readPart(slug: string): Promise<PartPage> {
-      const page = await pages.partPage(slug);
-      if (!page) throw new NotFound('There is no part of that name in the catalogue.');
+      const page = await pages.partPage((await partBySlug(slug)).slug);
+      if (!page) throw noSuchPart();
       return page;
     },
+
+    /** As `readPart`, without what only the page shows. */
+    partBySlug,
 
     /** Parts that are not there are missing from the map; so with all look-ups below. */
     partsByIds(ids: readonly number[]): Promise<Map<number, PartRef>> {
@@ -86,6 +92,13 @@ export function createHardwareService(store: HardwareStore, pages: PartPageStore
     },
   };
 
+  async function partBySlug(slug: string): Promise<PartRef> {
+    const part = await store.partBySlug(slug);
+    if (!part) throw noSuchPart();
+    const { about: _, ...ref } = part;
+    return ref;
+  }
+
   async function summariesOf(parts: readonly (PartRef & { about: string })[]): Promise<PartSummary[]> {
     if (parts.length === 0) return [];
     const ids = parts.map((part) => part.id);
@@ -97,6 +110,10 @@ export function createHardwareService(store: HardwareStore, pages: PartPageStore
       writeUps: counts.get(part.id) ?? 0,
     }));
   }
+}
+
+function noSuchPart(): NotFound {
+  return new NotFound('There is no part of that name in the catalogue.');
 }
 
 async function byId<T extends { id: number }>(

@@ -35,7 +35,9 @@ export function createHardwareStore(knex: Knex) {
       if (maker !== undefined) void query.where('m.slug', maker);
       for (const word of words) {
         const pattern = `%${word.replace(/[\\%_]/g, '\\$&')}%`;
-        void query.where((either) => either.where('p.name', 'like', pattern).orWhere('m.name', 'like', pattern));
+        void query.where((either) =>
+          either.where('p.name', 'like', pattern).orWhere('m.name', 'like', pattern),
+        );
       }
       if (after) {
         void query
@@ -47,6 +49,14 @@ export function createHardwareStore(knex: Knex) {
 
     async partsByIds(ids: readonly number[]): Promise<PartRow[]> {
       return (await partQuery(knex).whereIn('p.id', ids)).map(toPart);
+    },
+
+    /** The part at that address, or the one into which the part that was there has been merged. */
+    async partBySlug(slug: string): Promise<PartRow | undefined> {
+      const here = knex('parts').where({ slug }).select('id');
+      const moved = knex('part_redirects').where({ slug }).select('part_id');
+      const rows = await partQuery(knex).where('p.id', knex.raw('COALESCE((?), (?))', [here, moved]));
+      return rows.map(toPart)[0];
     },
 
     /** Oldest first within each part. */

@@ -16,6 +16,8 @@ const limits = {
   photo: { points: 120, duration: 60 * 60 },
   /** Readings recorded by one account. */
   measurement: { points: 300, duration: 60 * 60 },
+  /** Proposals for the catalogue by one account. */
+  proposal: { points: 30, duration: 60 * 60 },
 } as const;
 export type LimitName = keyof typeof limits;
 

@@ -86,6 +86,36 @@ export function createLetters(publicAddress: string) {
       };
     },
 
+    proposalDecided(to: {
+      displayName: string;
+      /** What was proposed, in words: "revision Rev E of M1". */
+      what: string;
+      /** Page of the part it is on now; null where it was declined. */
+      slug: string | null;
+      reason: string | null;
+      turnOffUrl: string;
+    }): Letter {
+      if (to.slug !== null) {
+        return {
+          subject: `Taken into the catalogue: ${to.what}`,
+          greeting: `Hello ${to.displayName},`,
+          paragraphs: [`the desk has taken your proposal into the catalogue: ${to.what}.`],
+          action: { label: 'See it there', url: page(`/parts/${to.slug}`) },
+          turnOffUrl: to.turnOffUrl,
+        };
+      }
+      return {
+        subject: `Not taken into the catalogue: ${to.what}`,
+        greeting: `Hello ${to.displayName},`,
+        paragraphs: [
+          `the desk has read your proposal, ${to.what}, and does not take it. The reason:`,
+          to.reason ?? '',
+        ],
+        action: { label: 'See what you proposed', url: page('/my/proposals') },
+        turnOffUrl: to.turnOffUrl,
+      };
+    },
+
     /** Page that asks before it turns notices off. */
     turnOffPage: (token: string): string => page('/mail/unsubscribe', { token }),
     /** Address of the one-click unsubscribe (RFC 8058). */

@@ -26,6 +26,16 @@ export interface MailQueue {
     trx: Knex,
     edition: { authorId: number; editionId: number; number: number; title: string; reason: string },
   ): Promise<void>;
+  queueProposalDecided(
+    trx: Knex,
+    proposal: {
+      accountId: number;
+      proposalId: number;
+      what: string;
+      slug: string | null;
+      reason: string | null;
+    },
+  ): Promise<void>;
   queueEmailConfirmation(trx: Knex, letter: AccountLetter): Promise<void>;
   queuePasswordReset(trx: Knex, letter: AccountLetter): Promise<void>;
   queueAlreadyHasAccount(
@@ -100,6 +110,11 @@ export function createMailQueue(needs: { letters: Letters; secret: string; clock
         letters.editionReturned({ ...edition, ...to }),
       );
     },
+
+    queueProposalDecided: (trx, proposal) =>
+      queueNotice(trx, `proposal-decided:${proposal.proposalId}`, proposal.accountId, (to) =>
+        letters.proposalDecided({ ...proposal, ...to }),
+      ),
 
     queueEmailConfirmation: (trx, letter) =>
       queueAccountMail(trx, `confirm-email:${letter.tokenId}`, letter, letters.emailConfirmation(letter)),

@@ -140,12 +140,7 @@ export function createMeasurementStore(knex: Knex) {
       await trx('consensus')
         .insert({
           ...columnsOf(place),
-          count: consensus.count,
-          mean: consensus.mean,
-          uncertainty: consensus.uncertainty,
-          prediction_spread: consensus.predictionSpread,
-          thin: consensus.thin,
-          unit_slips: consensus.unitSlips,
+          ...figuresOf(consensus),
         })
         .onConflict(['feature_id', 'revision_id', 'dimension'])
         .merge();
@@ -153,6 +148,35 @@ export function createMeasurementStore(knex: Knex) {
 
     async dropConsensus(place: Place, trx: Knex): Promise<void> {
       await trx('consensus').where(columnsOf(place)).delete();
+    },
+
+    /** The features, held like one of them, in the order of their identities. */
+    async holdFeatures(ids: readonly number[], trx: Knex): Promise<FeatureRow[]> {
+      return features(trx).whereIn('f.id', ids).orderBy('f.id').forUpdate();
+    },
+
+    /** Readings that have a say, on every place of the features, in the order they came. */
+    async countedOfFeatures(
+      featureIds: readonly number[],
+      trx: Knex,
+    ): Promise<(Place & { value: number; uncertainty: number })[]> {
+      return trx('measurements')
+        .whereIn('feature_id', featureIds)
+        .whereNull('set_aside_at')
+        .select('dimension', 'value', 'uncertainty', { featureId: 'feature_id', revisionId: 'revision_id' })
+        .orderBy('id');
+    },
+
+    async replaceConsensus(
+      featureIds: readonly number[],
+      entries: readonly { place: Place; consensus: DimensionConsensus }[],
+      trx: Knex,
+    ): Promise<void> {
+      await trx('consensus').whereIn('feature_id', featureIds).delete();
+      if (entries.length === 0) return;
+      await trx('consensus').insert(
+        entries.map(({ place, consensus }) => ({ ...columnsOf(place), ...figuresOf(consensus) })),
+      );
     },
 
     async setAside(
@@ -184,6 +208,17 @@ export function createMeasurementStore(knex: Knex) {
 
 function columnsOf(place: Place): Record<string, unknown> {
   return { feature_id: place.featureId, revision_id: place.revisionId, dimension: place.dimension };
+}
+
+function figuresOf(consensus: DimensionConsensus): Record<string, unknown> {
+  return {
+    count: consensus.count,
+    mean: consensus.mean,
+    uncertainty: consensus.uncertainty,
+    prediction_spread: consensus.predictionSpread,
+    thin: consensus.thin,
+    unit_slips: consensus.unitSlips,
+  };
 }
 
 interface ConsensusRecord extends Place {

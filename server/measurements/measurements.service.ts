@@ -169,6 +169,24 @@ export function createMeasurementService(around: { knex: Knex; clock: () => Date
       });
     },
 
+    /** Makes every consensus of the features anew, after their readings or revisions have moved. */
+    async remakeConsensus(featureIds: readonly number[], trx: Knex): Promise<void> {
+      if (featureIds.length === 0) return;
+      const features = new Map((await store.holdFeatures(featureIds, trx)).map((row) => [row.id, row]));
+      const places = groupBy(
+        await store.countedOfFeatures(featureIds, trx),
+        ({ featureId, revisionId, dimension }) => `${featureId}/${revisionId}/${dimension}`,
+      );
+      const entries = [...places.values()].flatMap((readings) => {
+        const place = readings[0]!;
+        const { kind, process } = features.get(place.featureId)!;
+        const unit = dimensionSpec(kind, place.dimension)?.unit ?? 'mm';
+        const consensus = dimensionConsensus(readings, unit, process);
+        return consensus ? [{ place, consensus }] : [];
+      });
+      await store.replaceConsensus(featureIds, entries, trx);
+    },
+
     setAside(
       id: number,
       accountId: number,

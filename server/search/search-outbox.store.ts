@@ -3,15 +3,21 @@ import type { Knex } from 'knex';
 /** Notes, in the caller's transaction, that a write-up's document must be made anew. */
 export interface SearchOutbox {
   add(trx: Knex, writeUpId: number): Promise<void>;
+  addAll(trx: Knex, writeUpIds: readonly number[]): Promise<void>;
 }
 
 export function createSearchOutbox({ clock }: { clock: () => Date }): SearchOutbox {
   return {
-    async add(trx, writeUpId) {
-      const now = clock();
-      await trx('search_outbox').insert({ write_up_id: writeUpId, created_at: now, next_try_at: now });
-    },
+    add: (trx, writeUpId) => addNotes(trx, [writeUpId], clock()),
+    addAll: (trx, writeUpIds) => addNotes(trx, writeUpIds, clock()),
   };
+}
+
+async function addNotes(db: Knex, writeUpIds: readonly number[], now: Date): Promise<void> {
+  if (writeUpIds.length === 0) return;
+  await db('search_outbox').insert(
+    writeUpIds.map((id) => ({ write_up_id: id, created_at: now, next_try_at: now })),
+  );
 }
 
 /** A note that a worker has taken on. */
@@ -80,12 +86,7 @@ export function createSearchOutboxStore(knex: Knex) {
         });
     },
 
-    async addAll(writeUpIds: readonly number[], now: Date): Promise<void> {
-      if (writeUpIds.length === 0) return;
-      await knex('search_outbox').insert(
-        writeUpIds.map((id) => ({ write_up_id: id, created_at: now, next_try_at: now })),
-      );
-    },
+    addAll: (writeUpIds: readonly number[], now: Date): Promise<void> => addNotes(knex, writeUpIds, now),
 
     async count(): Promise<number> {
       const row = await knex('search_outbox').count({ count: '*' }).first();

@@ -5,8 +5,10 @@ import { measurementRoutes } from './measurements.js';
 import { deskRoutes } from './moderation.js';
 import { ownStockRoutes } from './own-stock.js';
 import { photoRoutes } from './photos.js';
+import { proposalRoutes } from './proposals.js';
 import { searchRoutes } from './search.js';
 import { systemRoutes } from './system.js';
+import { whichOneRoutes } from './which-one.js';
 import { writeUpRoutes } from './write-ups.js';
 
 /** Every route of the API, and who may call it. A route that does not stand here is not served. */
@@ -14,6 +16,8 @@ export const routes = {
   ...systemRoutes,
   ...accountRoutes,
   ...hardwareRoutes,
+  ...whichOneRoutes,
+  ...proposalRoutes,
   ...benchRoutes,
   ...measurementRoutes,
   ...jointRoutes,

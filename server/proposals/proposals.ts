@@ -1,0 +1,21 @@
+import type { Knex } from 'knex';
+import type { RouteBinding } from '../http/binding.js';
+import type { RateLimits } from '../http/rate-limits.js';
+import type { MeasurementService } from '../measurements/measurements.js';
+import { createMergeService, type IndexNotices } from './merge.service.js';
+import { createProposalStore } from './proposal.store.js';
+import { proposalBindings } from './proposals.routes.js';
+import { createProposalService, type ProposalMail } from './proposals.service.js';
+
+/** What members propose for the catalogue, what the desk makes of it, and the merging of what is there twice. */
+export function createProposals(around: {
+  knex: Knex;
+  clock: () => Date;
+  limits: RateLimits;
+  mail: ProposalMail;
+  measurements: MeasurementService;
+  searchOutbox: IndexNotices;
+}): { bindings: RouteBinding[] } {
+  const proposals = createProposalService({ ...around, store: createProposalStore(around.knex) });
+  return { bindings: proposalBindings(proposals, createMergeService(around), around.limits) };
+}
