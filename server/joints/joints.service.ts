@@ -1,4 +1,4 @@
-import type { RevisionRef } from '../../shared/contract/hardware.js';
+import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type {
   ComparedPart,
   FitCell,
@@ -163,6 +163,13 @@ export function createJointService(around: {
     },
 
     checkFit,
+
+    /** The parts and revisions of these identities; unknown ones are left out. */
+    async stands(revisionIds: readonly number[]): Promise<{ part: PartRef; revision: RevisionRef }[]> {
+      const revisions = await store.revisionsByIds(revisionIds);
+      const parts = await store.partRefs([...new Set(revisions.map((revision) => revision.partId))]);
+      return revisions.map((revision) => ({ revision, part: parts.get(revision.partId)! }));
+    },
 
     /** Parts in the order asked, each with its newest revision (or the one among `revisionIds`) against the revisions named. */
     async compare(slugs: readonly string[], revisionIds: readonly number[]): Promise<ComparedPart[]> {

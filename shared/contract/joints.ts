@@ -162,7 +162,11 @@ export const jointRoutes = {
     access: anyone,
     summary: 'Every known joint between the revisions named, worst first',
     query: z.strictObject({ revision: Revisions.default([]) }),
-    response: z.object({ items: z.array(FitCheckLine) }),
+    response: z.object({
+      items: z.array(FitCheckLine),
+      /** What the revisions named are, in the order of their identities; those that do not exist are left out. */
+      stands: z.array(z.object({ part: PartRef, revision: RevisionRef })),
+    }),
   }),
   compareParts: route({
     method: 'get',

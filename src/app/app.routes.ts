@@ -33,6 +33,17 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./bench/bench-page').then((m) => m.BenchPage),
   },
   {
+    path: 'bench/check',
+    title: 'Fit check',
+    loadComponent: () => import('./bench/fit-check-page').then((m) => m.FitCheckPage),
+  },
+  { path: 'joints', loadChildren: () => import('./joints/joints.routes').then((m) => m.routes) },
+  {
+    path: 'compare',
+    title: 'Side by side',
+    loadComponent: () => import('./joints/compare-parts-page').then((m) => m.ComparePartsPage),
+  },
+  {
     path: 'mail/unsubscribe',
     title: 'Stop notice mail',
     loadComponent: () => import('./account/unsubscribe').then((m) => m.Unsubscribe),

@@ -24,6 +24,7 @@ const outlines = {
   remove: 'M5 7h14M9 7V4h6v3M7 7l1 13h8l1-13M10.5 11v5M13.5 11v5',
   up: 'M12 20V5M6 11l6-6 6 6',
   photo: 'M4 6h4l1.5-2h5L16 6h4v13H4zM12 9a3.5 3.5 0 1 0 0 7 3.5 3.5 0 0 0 0-7z',
+  joint: 'M2 12h5v8h10v-8h5M9 3h6v13H9z',
   measure: 'M3 8h18v8H3zM7 8v4M11 8v3M15 8v4M19 8v3',
 } as const;
 
