@@ -36,7 +36,13 @@ const most = 12;
           </div>
         </div>
       } @empty {
-        <p class="sl-quiet">The list cannot be fetched at the moment; your own words below do as well.</p>
+        <p class="sl-quiet" role="status">
+          {{
+            symptoms() === null
+              ? 'Fetching the list …'
+              : 'The list cannot be fetched at the moment; your own words below do as well.'
+          }}
+        </p>
       }
     </fieldset>
   `,
@@ -74,16 +80,17 @@ export class SymptomsFields {
   readonly chosen = input.required<FormControl<string[]>>();
   protected readonly fieldId = fieldId;
   protected readonly most = most;
-  private readonly symptoms = toSignal(
+  /** Null until it is known. */
+  protected readonly symptoms = toSignal(
     inject(PartDirectory)
       .symptoms()
       .pipe(catchError(() => of<Symptom[]>([]))),
-    { initialValue: [] },
+    { initialValue: null },
   );
 
   protected readonly groups = computed(() => {
     const groups = new Map<string, Symptom[]>();
-    for (const symptom of this.symptoms())
+    for (const symptom of this.symptoms() ?? [])
       groups.set(symptom.group, [...(groups.get(symptom.group) ?? []), symptom]);
     return [...groups].map(([name, symptoms]) => ({ name, symptoms }));
   });
