@@ -10,8 +10,9 @@ export const driveSizes: readonly MeasuredFeature[] = [
   measured(
     'cotterpin-ring-gear-kit',
     'bore of the pinion',
-    { diameter: { AB: 5.05, CD: 5.03 }, depth: { ABCD: 12 } },
+    { diameter: { ABCD: 5.06 }, depth: { ABCD: 12 } },
     { form: { ABCD: 'round' } },
+    { ABCD: 8 },
   ),
   // The travel that is used, 240 degrees, counts as the angle it fills.
   measured('cotterpin-ring-gear-kit', 'clamp screw of the ring', {
@@ -35,8 +36,9 @@ export const driveSizes: readonly MeasuredFeature[] = [
   measured(
     'cotterpin-pinion-set',
     'bore',
-    { diameter: { A: 5.06, B: 5.03 }, depth: { AB: 12 } },
+    { diameter: { A: 5.06, B: 5.05 }, depth: { AB: 12 } },
     { form: { AB: 'round' } },
+    { AB: 9 },
   ),
   measured(
     'thornapple-belt-kit-60',

@@ -14,6 +14,7 @@ export const motorSizes: readonly MeasuredFeature[] = [
     'output shaft',
     { diameter: { ABCD: 4.99 }, driveSize: { D: 4.5 }, length: { ABCD: 20 } },
     { form: { ABC: 'round', D: 'flat' } },
+    { ABCD: 10 },
   ),
   measured('tarn-m1', 'face holes', { circle: { ABCD: 31 }, count: { ABCD: 4 } }, { screw: { ABCD: 'M3' } }),
   measured('tarn-m1', 'cable outlet', {

@@ -78,10 +78,14 @@ export const opticsSizes: readonly MeasuredFeature[] = [
     { circle: { AB: 31, C: 33 }, count: { AB: 3, C: 4 } },
     { screw: { ABC: 'M3' } },
   ),
-  measured('dunlin-micro-helical', 'inch-and-a-quarter bore', {
-    diameter: { AB: 31.72 },
-    depth: { AB: 22 },
-  }),
+  // Nobody has read the bore of Rev C.
+  measured(
+    'dunlin-micro-helical',
+    'inch-and-a-quarter bore',
+    { diameter: { AB: 31.72 }, depth: { AB: 22 } },
+    {},
+    { AB: 12 },
+  ),
   measured('greywether-heron-72', 'bar', {
     width: { ABC: 43.8 },
     referenceHeight: { ABC: 3 },
