@@ -9,13 +9,7 @@ export function jointBindings(joints: JointService): RouteBinding[] {
     bind(routes.reportFit, ({ params, caller, body }) =>
       joints.report(params.slug, memberOf(caller).accountId, body),
     ),
-    bind(routes.checkFit, async ({ query }) => {
-      const [items, stands] = await Promise.all([
-        joints.checkFit(query.revision),
-        joints.stands(query.revision),
-      ]);
-      return { items, stands };
-    }),
+    bind(routes.checkFit, ({ query }) => joints.check(query.revision)),
     bind(routes.compareParts, async ({ query }) => ({
       items: await joints.compare(query.part, query.revision),
     })),

@@ -162,13 +162,19 @@ export function createJointService(around: {
       return cellOf(joint, a, b, await knowledgeOf([joint]));
     },
 
-    checkFit,
-
-    /** The parts and revisions of these identities; unknown ones are left out. */
-    async stands(revisionIds: readonly number[]): Promise<{ part: PartRef; revision: RevisionRef }[]> {
-      const revisions = await store.revisionsByIds(revisionIds);
+    /** Every joint between the revisions named, worst first, and what those revisions are; unknown ones are left out. */
+    async check(
+      revisionIds: readonly number[],
+    ): Promise<{ items: FitCheckLine[]; stands: { part: PartRef; revision: RevisionRef }[] }> {
+      const [items, revisions] = await Promise.all([
+        checkFit(revisionIds),
+        store.revisionsByIds(revisionIds),
+      ]);
       const parts = await store.partRefs([...new Set(revisions.map((revision) => revision.partId))]);
-      return revisions.map((revision) => ({ revision, part: parts.get(revision.partId)! }));
+      return {
+        items,
+        stands: revisions.map((revision) => ({ revision, part: parts.get(revision.partId)! })),
+      };
     },
 
     /** Parts in the order asked, each with its newest revision (or the one among `revisionIds`) against the revisions named. */

@@ -36,7 +36,9 @@ export class ComparePartsPage {
   private readonly router = inject(Router);
   protected readonly bench = inject(BenchStore);
 
-  private readonly query = toSignal(this.route.queryParamMap, { requireSync: true });
+  private readonly query = toSignal(this.route.queryParamMap, {
+    requireSync: true,
+  });
   protected readonly slugs = computed(() => [...new Set(this.query().getAll('part'))].slice(0, mostParts));
   /** Revisions that the address names go before the reader's bench, so that a link shows what its sender saw. */
   private readonly revisions = computed(() => {

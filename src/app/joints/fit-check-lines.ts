@@ -23,7 +23,8 @@ import { PairFixes } from './pair-fixes';
               }}</a>
             </p>
             <p class="sl-quiet">
-              {{ entry.line.joint.a.name }} {{ entry.line.revisionA.label }} and {{ entry.line.joint.b.name }}
+              {{ entry.line.joint.a.name }} {{ entry.line.revisionA.label }} and
+              {{ entry.line.joint.b.name }}
               {{ entry.line.revisionB.label }}
             </p>
             <p>{{ entry.line.sentence }}</p>

@@ -7,7 +7,10 @@ import type { JointWriteUp } from '../../../shared/contract/joints';
 export function fixesForPair(
   writeUps: readonly JointWriteUp[],
   pair: { readonly revisionA: number; readonly revisionB: number },
-  revisionsOf: { readonly a: readonly number[]; readonly b: readonly number[] } | null,
+  revisionsOf: {
+    readonly a: readonly number[];
+    readonly b: readonly number[];
+  } | null,
 ): JointWriteUp[] {
   const { revisionA, revisionB } = pair;
   /** A fix that names revisions of a part holds for those alone; one that names none of them holds for all. */

@@ -70,7 +70,9 @@ export class JointPageView {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
   });
-  private readonly query = toSignal(this.route.queryParamMap, { requireSync: true });
+  private readonly query = toSignal(this.route.queryParamMap, {
+    requireSync: true,
+  });
   protected readonly mine = computed(() =>
     this.bench.items().flatMap(({ revision }) => (revision ? [revision.id] : [])),
   );
@@ -115,7 +117,10 @@ export class JointPageView {
     const [joint, cell] = [this.joint(), this.cell()];
     if (!joint || !cell) return [];
     const ids = (side: JointSidePage): number[] => side.revisions.map(({ revision }) => revision.id);
-    return fixesForPair(joint.writeUps, cell, { a: ids(joint.sideA), b: ids(joint.sideB) });
+    return fixesForPair(joint.writeUps, cell, {
+      a: ids(joint.sideA),
+      b: ids(joint.sideB),
+    });
   });
   /** Write-ups about these parts that were found for other revisions. */
   protected readonly others = computed(() => {
@@ -179,7 +184,10 @@ export class JointPageView {
     this.lastWritten = JSON.stringify(address);
     void this.router.navigate([], {
       relativeTo: this.route,
-      queryParams: { ...address, ...(cell ? { a: cell.revisionA, b: cell.revisionB } : {}) },
+      queryParams: {
+        ...address,
+        ...(cell ? { a: cell.revisionA, b: cell.revisionB } : {}),
+      },
       queryParamsHandling: 'merge',
       replaceUrl: true,
     });

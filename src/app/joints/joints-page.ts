@@ -21,9 +21,14 @@ export class JointsPage {
   private readonly joints = inject(Joints);
   private readonly route = inject(ActivatedRoute);
   private readonly router = inject(Router);
-  private readonly query = toSignal(this.route.queryParamMap, { requireSync: true });
+  private readonly query = toSignal(this.route.queryParamMap, {
+    requireSync: true,
+  });
 
-  protected readonly kinds = jointKindNames.map((value) => ({ value, words: jointKinds[value].label }));
+  protected readonly kinds = jointKindNames.map((value) => ({
+    value,
+    words: jointKinds[value].label,
+  }));
   protected readonly kindWords = jointKinds;
   protected readonly part = computed(() => this.query().get('part') ?? '');
   protected readonly kind = computed(() => this.query().get('kind') ?? '');
@@ -55,7 +60,11 @@ export class JointsPage {
     const queryParams = Object.fromEntries(
       Object.entries(change).map(([name, value]) => [name, value === '' ? null : value]),
     );
-    void this.router.navigate([], { relativeTo: this.route, queryParams, queryParamsHandling: 'merge' });
+    void this.router.navigate([], {
+      relativeTo: this.route,
+      queryParams,
+      queryParamsHandling: 'merge',
+    });
   }
 
   private isAsked(joint: JointRef): boolean {

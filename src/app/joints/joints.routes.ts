@@ -7,5 +7,8 @@ export const routes: Routes = [
     title: 'Joints',
     loadComponent: () => import('./joints-page').then((m) => m.JointsPage),
   },
-  { path: ':slug', loadComponent: () => import('./joint-page').then((m) => m.JointPageView) },
+  {
+    path: ':slug',
+    loadComponent: () => import('./joint-page').then((m) => m.JointPageView),
+  },
 ];

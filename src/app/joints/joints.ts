@@ -29,7 +29,10 @@ export class Joints {
 
   /** One voice a person and pair; a second one replaces the first. */
   report(slug: string, report: CallOf<typeof jointRoutes.reportFit>['body']): Observable<FitCell> {
-    return this.api.call(jointRoutes.reportFit, { params: { slug }, body: report });
+    return this.api.call(jointRoutes.reportFit, {
+      params: { slug },
+      body: report,
+    });
   }
 
   check(revision: number[]): Observable<FitCheck> {
@@ -37,6 +40,8 @@ export class Joints {
   }
 
   compare(part: string[], revision: number[]): Observable<{ items: ComparedPart[] }> {
-    return this.api.call(jointRoutes.compareParts, { query: { part, revision } });
+    return this.api.call(jointRoutes.compareParts, {
+      query: { part, revision },
+    });
   }
 }

@@ -55,7 +55,11 @@ function predicted(consensus: DimensionConsensus): Dimension {
   return {
     value: consensus.mean,
     uncertainty: consensus.predictionSpread,
-    source: { kind: 'consensus', readings: consensus.count, thin: consensus.thin },
+    source: {
+      kind: 'consensus',
+      readings: consensus.count,
+      thin: consensus.thin,
+    },
   };
 }
 

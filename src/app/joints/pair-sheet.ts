@@ -77,8 +77,16 @@ export class PairSheet {
   });
   protected readonly inputs = computed(() =>
     [
-      { side: this.joint().sideA, hand: this.a(), revision: this.cell().revisionA },
-      { side: this.joint().sideB, hand: this.b(), revision: this.cell().revisionB },
+      {
+        side: this.joint().sideA,
+        hand: this.a(),
+        revision: this.cell().revisionA,
+      },
+      {
+        side: this.joint().sideB,
+        hand: this.b(),
+        revision: this.cell().revisionB,
+      },
     ].map(({ side, hand, revision }) => ({
       name: `${side.part.name} ${side.revisions.find((entry) => entry.revision.id === revision)?.revision.label ?? ''}`,
       feature: side.feature.name,

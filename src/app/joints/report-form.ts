@@ -76,7 +76,10 @@ export class ReportForm {
   protected readonly working = signal(false);
   protected readonly problem = signal<Problem | null>(null);
   private readonly pair = () => `${this.cell().revisionA}/${this.cell().revisionB}`;
-  protected readonly note = linkedSignal({ source: this.pair, computation: () => '' });
+  protected readonly note = linkedSignal({
+    source: this.pair,
+    computation: () => '',
+  });
   protected readonly said = linkedSignal<string, boolean | null>({
     source: this.pair,
     computation: () => null,
@@ -88,7 +91,12 @@ export class ReportForm {
     const { revisionA, revisionB } = this.cell();
     try {
       const cell = await firstValueFrom(
-        this.joints.report(this.slug(), { revisionA, revisionB, sat, note: this.note() }),
+        this.joints.report(this.slug(), {
+          revisionA,
+          revisionB,
+          sat,
+          note: this.note(),
+        }),
       );
       this.reported.emit(cell);
       const before = this.said();
