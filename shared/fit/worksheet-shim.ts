@@ -93,9 +93,11 @@ export function runShim(inputs: ShimInputs): Outcome<ShimSheet> {
   };
 }
 
-/** Pieces in words: "1 US cent + 2 shim ring 0.10 mm". */
+/** Pieces in words: "US cent + 2 × shim ring 0.10 mm". */
 export function piecesText(stack: ShimStack): string {
-  return stack.pieces.map((piece) => `${piece.count} × ${piece.stock.name}`).join(' + ');
+  return stack.pieces
+    .map(({ stock, count }) => (count > 1 ? `${count} × ${stock.name}` : stock.name))
+    .join(' + ');
 }
 
 /** Standard uncertainty of the stack's own thickness, without the gap's, mm. */
@@ -128,7 +130,7 @@ function summaryOf(question: ShimQuestion, line: ShimLine | null): WorksheetSumm
     ? `within the ${question.tolerance.toFixed(2)} mm wanted`
     : `which is more than the ${question.tolerance.toFixed(2)} mm wanted`;
   return {
-    sentence: `${piecesText(stack)}${places} may fill the gap of ${question.gap.toFixed(2)} mm: ${miss.toFixed(2)} mm${side} (± ${half.toFixed(2)} mm at 95 %), ${fit}.`,
+    sentence: `${begun(piecesText(stack))}${places} may fill the gap of ${question.gap.toFixed(2)} mm: ${miss.toFixed(2)} mm${side} (± ${half.toFixed(2)} mm at 95 %), ${fit}.`,
     figures: [
       {
         name: 'thickness',
@@ -147,6 +149,10 @@ function summaryOf(question: ShimQuestion, line: ShimLine | null): WorksheetSumm
       ...(points ? pointFigures(points) : []),
     ],
   };
+}
+
+function begun(words: string): string {
+  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 function pointFigures(points: ThreePoints): WorksheetFigure[] {
