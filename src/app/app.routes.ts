@@ -1,5 +1,5 @@
 import type { CanMatchFn, Routes } from '@angular/router';
-import { mustBe } from './core/guards';
+import { mustBe, mustSignIn } from './core/guards';
 
 /** Addresses of the editor and of what is not published yet; tested before its code is fetched. */
 const isEditorAddress: CanMatchFn = (_route, segments) =>
@@ -15,6 +15,12 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./library/search-page').then((m) => m.SearchPage),
   },
   {
+    path: 'my/proposals',
+    title: 'What you proposed',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./hardware/propose/my-proposals-page').then((m) => m.MyProposalsPage),
+  },
+  {
     path: '',
     canMatch: [isEditorAddress],
     loadChildren: () => import('./write-ups/editor/editor.routes').then((m) => m.routes),
@@ -24,6 +30,16 @@ export const appRoutes: Routes = [
     path: 'hardware',
     title: 'Hardware',
     loadComponent: () => import('./hardware/hardware-page').then((m) => m.HardwarePage),
+  },
+  {
+    path: 'hardware/propose',
+    title: 'Propose for the catalogue',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./hardware/propose/propose-page').then((m) => m.ProposePage),
+  },
+  {
+    path: 'parts/:slug/which-one',
+    loadComponent: () => import('./hardware/which-one/which-one-page').then((m) => m.WhichOnePage),
   },
   { path: 'parts/:slug', loadComponent: () => import('./hardware/part-page').then((m) => m.PartPage) },
   { path: 'worksheets', loadChildren: () => import('./worksheets/worksheets.routes').then((m) => m.routes) },

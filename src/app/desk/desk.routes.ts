@@ -8,6 +8,11 @@ export const routes: Routes = [
     loadComponent: () => import('./queue-page').then((m) => m.QueuePage),
   },
   {
+    path: 'hardware',
+    title: 'Hardware at the desk',
+    loadComponent: () => import('./hardware-desk-page').then((m) => m.HardwareDeskPage),
+  },
+  {
     path: 'editions/:id',
     title: 'On the desk',
     loadComponent: () => import('./desk-edition-page').then((m) => m.DeskEditionPage),

@@ -7,6 +7,12 @@ import {
   type LibraryCaution,
   type PlaceCaution,
 } from '../../../shared/contract/moderation';
+import {
+  proposalRoutes,
+  type DeskProposal,
+  type Merge,
+  type Proposed,
+} from '../../../shared/contract/proposals';
 import type { Caution } from '../../../shared/contract/write-ups';
 import { Api } from '../core/api';
 
@@ -43,6 +49,23 @@ export class Desk {
 
   publish(id: number, note: string): Observable<{ slug: string; number: number }> {
     return this.api.call(deskRoutes.publishEdition, { params: { id }, body: { note } });
+  }
+
+  proposals(cursor?: string): Observable<{ items: DeskProposal[]; next: string | null }> {
+    return this.api.call(proposalRoutes.listDeskProposals, { query: { cursor } });
+  }
+
+  /** `entry`: what the moderator made of it; null takes it as it is. */
+  take(id: number, entry: Proposed | null): Observable<{ slug: string }> {
+    return this.api.call(proposalRoutes.takeProposal, { params: { id }, body: { entry } });
+  }
+
+  decline(id: number, reason: string): Observable<unknown> {
+    return this.api.call(proposalRoutes.declineProposal, { params: { id }, body: { reason } });
+  }
+
+  merge(body: Merge): Observable<{ slug: string }> {
+    return this.api.call(proposalRoutes.merge, { body });
   }
 
   giveBack(id: number, reason: string): Observable<unknown> {

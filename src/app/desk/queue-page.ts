@@ -7,15 +7,17 @@ import { toApiProblem } from '../core/api-problem';
 import { Icon } from '../ui/icon/icon';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Desk } from './desk';
+import { DeskTabs } from './desk-tabs';
 import { waitTime } from './wait-time';
 
 /** Editions that wait, the longest wait first. */
 @Component({
   selector: 'sl-queue-page',
-  imports: [Icon, ProblemNote, RouterLink],
+  imports: [DeskTabs, Icon, ProblemNote, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <h1>Desk</h1>
+    <sl-desk-tabs />
     <ul class="sl-plain-list">
       @for (line of lines(); track line.editionId) {
         <li>

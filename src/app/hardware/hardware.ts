@@ -8,6 +8,7 @@ import {
   type Symptom,
 } from '../../../shared/contract/hardware';
 import type { CallOf } from '../../../shared/contract/route';
+import { whichOneRoutes, type WhichOne } from '../../../shared/contract/which-one';
 import { Api } from '../core/api';
 
 /** The catalogue: makers, parts, symptoms. Failures are `ApiProblem`s. */
@@ -23,6 +24,10 @@ export class Hardware {
 
   part(slug: string): Observable<PartPage> {
     return this.api.call(hardwareRoutes.readPart, { params: { slug } });
+  }
+
+  whichOne(slug: string): Observable<WhichOne> {
+    return this.api.call(whichOneRoutes.readWhichOne, { params: { slug } });
   }
 
   makers(): Observable<{ items: MakerRef[] }> {

@@ -13,6 +13,7 @@ import { LoadStateView } from '../ui/load-state/load-state';
 import { PhotoView } from '../ui/photo/photo';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
+import { CanonicalPart } from './canonical-part';
 import { Hardware } from './hardware';
 import { MeasurementSection } from './measurements/measurement-section';
 import { RevisionTimeLine } from './revision-time-line';
@@ -46,10 +47,13 @@ export class PartPage {
   protected readonly newestFirst = computed(() => [...(this.part()?.revisions ?? [])].reverse());
 
   constructor() {
+    const canonical = inject(CanonicalPart);
     effect(() => {
       const now = this.loaded();
       if (now.state === 'failed') this.titles.failed(now.problem);
-      if (now.state === 'ready') this.describe(now.value);
+      if (now.state !== 'ready') return;
+      canonical.lead(now.value.slug);
+      this.describe(now.value);
     });
   }
 

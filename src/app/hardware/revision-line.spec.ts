@@ -14,7 +14,10 @@ const now = new Date('2026-01-01T00:00:00Z');
 
 describe('time line of revisions', () => {
   it('runs from the first day of the first revision to now', () => {
-    const { spans } = timeLineOf([revision(1, '2022-01-01', '2024-01-01'), revision(2, '2024-01-01', null)], now);
+    const { spans } = timeLineOf(
+      [revision(1, '2022-01-01', '2024-01-01'), revision(2, '2024-01-01', null)],
+      now,
+    );
     expect(spans[0]?.start).toBe(0);
     expect(spans[0]?.length).toBeCloseTo(50, 0);
     expect(spans[1]!.start + spans[1]!.length).toBeCloseTo(100, 6);
@@ -36,7 +39,10 @@ describe('time line of revisions', () => {
   });
 
   it('shows a revision that was sold for one day', () => {
-    const { spans } = timeLineOf([revision(1, '2025-01-01', '2025-01-02'), revision(2, '2025-01-02', null)], now);
+    const { spans } = timeLineOf(
+      [revision(1, '2025-01-01', '2025-01-02'), revision(2, '2025-01-02', null)],
+      now,
+    );
     expect(spans[0]!.length).toBeGreaterThanOrEqual(1);
   });
 });

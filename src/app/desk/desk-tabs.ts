@@ -1,0 +1,40 @@
+import { ChangeDetectionStrategy, Component } from '@angular/core';
+import { RouterLink, RouterLinkActive } from '@angular/router';
+
+/** What lies on the desk: editions of write-ups, and the catalogue of hardware. */
+@Component({
+  selector: 'sl-desk-tabs',
+  imports: [RouterLink, RouterLinkActive],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  template: `
+    <nav aria-label="On the desk">
+      <a
+        routerLink="/desk"
+        routerLinkActive="here"
+        ariaCurrentWhenActive="page"
+        [routerLinkActiveOptions]="{ exact: true }"
+        >Write-ups</a
+      >
+      <a routerLink="/desk/hardware" routerLinkActive="here" ariaCurrentWhenActive="page">Hardware</a>
+    </nav>
+  `,
+  styles: `
+    nav {
+      display: flex;
+      gap: 1.5rem;
+      margin-block-end: 1rem;
+    }
+    a {
+      display: inline-flex;
+      align-items: center;
+      min-block-size: 2.75rem;
+      font: 600 1.15rem/1.2 var(--sl-heading);
+      text-decoration: none;
+      border-block-end: 3px solid transparent;
+    }
+    .here {
+      border-color: currentColor;
+    }
+  `,
+})
+export class DeskTabs {}
