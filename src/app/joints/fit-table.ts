@@ -13,6 +13,8 @@ interface Cell {
   readonly measure: string;
 }
 
+let drawn = 0;
+
 /** The fit table: revisions of A down, revisions of B across. Every cell chooses its pair. */
 @Component({
   selector: 'sl-fit-table',
@@ -28,6 +30,7 @@ export class FitTable {
   readonly mine = input<readonly number[]>([]);
   readonly choose = output<FitCell>();
 
+  protected readonly id = `sl-fit-table-${(drawn += 1)}`;
   protected readonly columns = computed(() => this.joint().sideB.revisions);
   protected readonly rows = computed(() => {
     const joint = this.joint();

@@ -34,6 +34,9 @@ describe('a chance in words', () => {
       }),
     ).toBe('predicted 50 %, no reports yet');
     expect(chanceWords(silent)).toBe('no prediction, no reports');
+    expect(chanceWords({ ...silent, predicted: 1, sat: 2, chance: 1, interval: [0.999, 1] })).toBe(
+      'predicted over 99 %, 2 say it sat → over 99 %',
+    );
     expect(
       chanceWords({
         ...silent,

@@ -25,8 +25,11 @@ export function chanceWords(chance: FitChance): string {
   return `${[prior, ...counted].join(', ')}${after}`;
 }
 
+/** Nothing where both ends come to the same words. */
 function intervalWords({ interval }: FitChance): string {
-  return interval ? ` (${percent(interval[0]).replace(' %', '')} to ${percent(interval[1])})` : '';
+  if (!interval) return '';
+  const [low, high] = [percent(interval[0]), percent(interval[1])];
+  return low === high ? '' : ` (${low.replace(' %', '')} to ${high})`;
 }
 
 /** The counts of a table's cell: "4 sat, 1 did not". */

@@ -52,7 +52,7 @@ describe('the page of a joint', () => {
   it('draws and judges anew when own readings are typed, and puts them into the address', async () => {
     const { type, word, drawn, query, root } = await open('/joints/lip-in-m1?a=11&b=22');
     const before = drawn();
-    await type('own-a-diameter', '19,40');
+    await type('own-a-diameter', '19,41');
     expect(word()).toBe('seats snugly');
     expect(drawn()).not.toBe(before);
     expect(root.querySelector('figcaption')?.textContent).toContain('your own readings');
@@ -60,7 +60,7 @@ describe('the page of a joint', () => {
     expect(query()).toMatchObject({
       a: '11',
       b: '22',
-      own: 'a.diameter:19,40',
+      own: 'a.diameter:19,41',
     });
   });
 

@@ -44,13 +44,15 @@ export class PairSheet {
     const margin = this.verdict()?.margin;
     return margin ? figureText(margin, this.unit()) : null;
   });
+  /** Where the faces meet there is neither gap nor tilt to speak of. */
+  private readonly standsOff = computed(() => (this.verdict()?.gap?.value ?? 0) > 0);
   protected readonly gap = computed(() => {
     const gap = this.verdict()?.gap;
-    return gap ? figureText(gap, this.unit()) : null;
+    return gap && this.standsOff() ? figureText(gap, this.unit()) : null;
   });
   protected readonly tilt = computed(() => {
     const tilt = this.verdict()?.tilt;
-    if (!tilt) return null;
+    if (!tilt || !this.standsOff()) return null;
     const best = tiltText(tilt.best);
     return tilt.worst
       ? `${best} pulled evenly, up to ${tiltText(tilt.worst)} pulled on one side`
