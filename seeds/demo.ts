@@ -5,6 +5,7 @@ import { seedAccounts } from './demo/seed-accounts.js';
 import { seedBenches } from './demo/seed-benches.js';
 import { seedCatalogue } from './demo/seed-catalogue.js';
 import { storePartDrawings, storeWriteUpDrawings } from './demo/seed-drawings.js';
+import { seedMarks } from './demo/seed-marks.js';
 import { seedWriteUps } from './demo/seed-write-ups.js';
 
 /** What the seeder is handed; nothing in it is made here. */
@@ -28,6 +29,7 @@ export async function seedDemo({ knex, storePhoto, now, hashPassword }: DemoSurr
   ]);
   await knex.transaction(async (trx) => {
     const catalogue = await seedCatalogue(trx, partPhotos);
+    await seedMarks(trx, catalogue);
     await seedWriteUps(trx, { accounts, catalogue, photos, now });
     await seedBenches(trx, { accounts, catalogue, now });
     await seedMeasured(trx, { accounts, catalogue, now });
