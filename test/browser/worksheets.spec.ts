@@ -108,7 +108,7 @@ describe('a member with the part in hand', () => {
       .filter({ hasText: 'n = ' })
       .filter({ has: page.getByRole('button', { name: label }) });
     await row.first().getByRole('button', { name: label }).click();
-    const panel = page.getByRole('region', { name: `Readings: ${label}` });
+    const panel = page.getByRole('region', { name: `Readings: ${label}`, exact: true });
     await panel.getByRole('img').first().waitFor();
     const plots = await panel.getByRole('img').count();
     expect(plots).toBeGreaterThan(0);
