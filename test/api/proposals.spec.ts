@@ -3,6 +3,7 @@ import type { DeskProposal, Proposal, Proposed } from '../../shared/contract/pro
 import type { PartPage } from '../../shared/contract/hardware.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
 import { insertPart, type TestPart } from './support/catalogue.js';
+import { throughAllPages } from './support/pages.js';
 
 let app: TestApp;
 let member: MemberAgent;
@@ -152,15 +153,9 @@ describe('a proposal', () => {
     expect([...first.items, ...second.items].map((item: Proposal) => item.id)).toEqual(ids.reverse());
     expect(second.next).toBeNull();
 
-    const waiting: number[] = [];
-    let next: string | null = '';
-    while (next !== null) {
-      const { body } = await moderator
-        .get(`/api/desk/proposals?limit=2${next && `&cursor=${next}`}`)
-        .expect(200);
-      waiting.push(...body.items.map((item: DeskProposal) => item.id));
-      next = body.next;
-    }
+    const waiting = (await throughAllPages<DeskProposal>(moderator, '/api/desk/proposals')).map(
+      (item) => item.id,
+    );
     expect(waiting).toEqual(
       await app.knex('hardware_proposals').where('state', 'waiting').orderBy('id').pluck('id'),
     );
