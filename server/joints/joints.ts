@@ -5,7 +5,7 @@ import type { WriteUpService } from '../write-ups/write-ups.js';
 import { createJointWriteUpStore } from './joint-write-ups.store.js';
 import { createJointStore } from './joint.store.js';
 import { jointBindings } from './joints.routes.js';
-import { createJointService } from './joints.service.js';
+import { createJointService, type JointService } from './joints.service.js';
 
 /** Joints of features, the fit table of their revisions, the fit check and the comparison. */
 export function createJoints(around: {
@@ -15,6 +15,7 @@ export function createJoints(around: {
   writeUps: WriteUpService;
 }): {
   bindings: RouteBinding[];
+  service: JointService;
 } {
   const { knex, clock, measurements, writeUps } = around;
   const service = createJointService({
@@ -24,5 +25,5 @@ export function createJoints(around: {
     measurements,
     writeUps,
   });
-  return { bindings: jointBindings(service) };
+  return { bindings: jointBindings(service), service };
 }
