@@ -50,6 +50,9 @@ export class ComparePartsPage {
       ? named
       : this.bench.items().flatMap(({ revision }) => (revision ? [revision.id] : []));
   });
+  protected readonly named = computed(() => this.query().has('revision'));
+  /** The same with the bench in it, for somebody else. */
+  protected readonly toSend = computed(() => ({ part: this.slugs(), revision: this.revisions() }));
   private readonly asked = computed(() => ({ parts: this.slugs(), revisions: this.revisions() }), {
     equal: (one, other) => JSON.stringify(one) === JSON.stringify(other),
   });

@@ -1,6 +1,7 @@
 import {
   ChangeDetectionStrategy,
   Component,
+  computed,
   inject,
   input,
   linkedSignal,
@@ -75,7 +76,8 @@ export class ReportForm {
   private readonly undo = inject(Undo);
   protected readonly working = signal(false);
   protected readonly problem = signal<Problem | null>(null);
-  private readonly pair = () => `${this.cell().revisionA}/${this.cell().revisionB}`;
+  /** Named by its revisions: counts that change leave the note and what was said alone. */
+  private readonly pair = computed(() => `${this.cell().revisionA}/${this.cell().revisionB}`);
   protected readonly note = linkedSignal({
     source: this.pair,
     computation: () => '',
