@@ -32,14 +32,12 @@ const onRevD: readonly (readonly [RegExp, string])[] = [
 
 /** Answers the question on the page; a dimension is passed over, since marks tell enough. */
 async function answerForRevD(page: Page): Promise<void> {
-  const heading = page.locator('#asked');
-  const question = await heading.innerText();
+  const question = await page.locator('#asked').innerText();
+  const said = page.locator('.said li');
+  const before = await said.count();
   const known = onRevD.find(([words]) => words.test(question));
   await page.getByRole('button', { name: known ? known[1] : 'I can’t read it', exact: true }).click();
-  await page.waitForFunction(
-    (before) => document.querySelector('#asked')?.textContent?.trim() !== before,
-    question,
-  );
+  await said.nth(before).waitFor();
 }
 
 describe('which one do I have', () => {
@@ -111,7 +109,10 @@ describe('a proposal', () => {
     const desk = await open();
     await desk.signInAs('moderator');
     await desk.visit('/desk');
-    await desk.page.getByRole('link', { name: 'Hardware', exact: true }).last().click();
+    await desk.page
+      .getByRole('navigation', { name: 'On the desk' })
+      .getByRole('link', { name: 'Hardware' })
+      .click();
     await desk.page.locator('summary').filter({ hasText: label }).click();
     await expectAccessible(desk.page);
     await desk.page.getByRole('button', { name: 'Take it into the catalogue' }).click();
