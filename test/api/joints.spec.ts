@@ -164,6 +164,20 @@ describe('the fit check', () => {
     expect(lines.find((line) => line.revisionA.id === v2)!.writeUps).toEqual([]);
   });
 
+  it('names every part asked about, so that one without a joint can be told', async () => {
+    const { parts, v1 } = await lipAndRecess();
+    const lonely = await insertPart(app.knex, { name: 'Lonely ring' });
+    const { body } = await app
+      .visitor()
+      .get('/api/fit-check')
+      .query({ revision: [v1, lonely.revisions[0]!.id] })
+      .expect(200);
+    expect(body.items).toEqual([]);
+    expect(body.stands.map((entry: { part: { slug: string } }) => entry.part.slug).sort()).toEqual(
+      [parts.bracket.slug, lonely.slug].sort(),
+    );
+  });
+
   it('of nothing, or of one part, is empty', async () => {
     const { v1 } = await lipAndRecess();
     expect(await check()).toEqual([]);
