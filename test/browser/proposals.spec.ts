@@ -66,7 +66,8 @@ describe('which one do I have', () => {
     await visit('/bench');
     const entries = page.getByRole('list', { name: 'Parts on your bench' }).getByRole('listitem');
     expect(await entries.count()).toBe(1);
-    expect(await entries.getByRole('combobox').locator('option:checked').innerText()).toBe('Rev D');
+    const chosen = await entries.getByRole('combobox').locator('option:checked').innerText();
+    expect(chosen.trim()).toBe('Rev D');
     expect(errors()).toEqual([]);
   });
 
