@@ -13,6 +13,7 @@ import { FieldNotValid, NotFound } from '../http/problems.js';
 import type { KnownDimensions, MeasurementService } from '../measurements/measurements.js';
 import { groupBy } from '../rows.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
+import { comparedPart } from './compared-part.js';
 import { chanceOf, verdictOfPair, type KnownFeature } from './fit-cell.js';
 import type { JointWriteUpStore, PairWriteUp } from './joint-write-ups.store.js';
 import type { JointFeature, JointRow, JointStore, ReportCount } from './joint.store.js';
@@ -62,7 +63,7 @@ export function createJointService(around: {
       store.reportCounts(
         joints.map((joint) => ({ id: joint.id, partA: joint.a.part.id, partB: joint.b.part.id })),
       ),
-      pairs.onParts(parts),
+      pairs.betweenParts(parts),
     ]);
     const cautions = await writeUps.cautionsOfMany([...new Set(found.map((writeUp) => writeUp.writeUpId))]);
     return {
@@ -197,51 +198,12 @@ export function createJointService(around: {
           (revision) => revision.id,
         ),
       );
-      const tried = groupBy(
-        await pairs.onParts([...partIds, ...others.map((revision) => revision.partId)]),
-        (writeUp) => writeUp.writeUpId,
-      );
+      const about = await pairs.onParts(partIds);
       return parts.map((part) =>
-        comparedPart(
-          part,
-          refs.get(part.id)!,
-          partIds,
-          lines,
-          [...tried.values()].map((found) => found[0]!),
-        ),
+        comparedPart({ part, ref: refs.get(part.id)!, compared: partIds, lines, about }),
       );
     },
   };
-}
-
-function comparedPart(
-  part: { id: number; about: string; price: string | null },
-  ref: ComparedPart['part'],
-  compared: readonly number[],
-  lines: readonly FitCheckLine[],
-  writeUps: readonly PairWriteUp[],
-): ComparedPart {
-  const own = lines.filter(
-    ({ joint }) => [joint.a.id, joint.b.id].includes(part.id) && isAgainstOthers(joint, part.id, compared),
-  );
-  const about = writeUps.filter((writeUp) => writeUp.partA === part.id || writeUp.partB === part.id);
-  const total = (outcome: keyof ComparedPart['trials']): number =>
-    about.reduce((sum, writeUp) => sum + writeUp.trials[outcome], 0);
-  return {
-    part: ref,
-    about: part.about,
-    price: part.price,
-    lines: own,
-    trials: { held: total('held'), heldForAWhile: total('heldForAWhile'), didNotHelp: total('didNotHelp') },
-    afterwards: [
-      ...new Set(about.flatMap((writeUp) => writeUp.content.fixes.flatMap((fix) => fix.afterwards))),
-    ].sort(),
-  };
-}
-
-/** A joint between two of the parts compared tells nothing about choosing between them. */
-function isAgainstOthers(joint: JointRef, partId: number, compared: readonly number[]): boolean {
-  return !compared.includes(joint.a.id === partId ? joint.b.id : joint.a.id);
 }
 
 function pairsOf(a: readonly RevisionRef[], b: readonly RevisionRef[]): [RevisionRef, RevisionRef][] {

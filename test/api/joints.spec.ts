@@ -203,6 +203,30 @@ describe('the comparison', () => {
     ]);
     expect(body.items[1].lines).toEqual([]);
   });
+
+  it('tells the trials of a part whatever stands on the reader’s bench', async () => {
+    const { parts, v1, revA } = await lipAndRecess();
+    const fix = plainFix();
+    const published = await publishNew(
+      member,
+      await app.as('moderator'),
+      completeContent(parts, { fixes: [fix] }),
+    );
+    await member
+      .post(`/api/write-ups/${published.slug}/trials`)
+      .send({ fixKey: fix.key, outcome: 'held', revisionIds: [v1, revA], note: '', figure: null })
+      .expect(201);
+    const { body } = await app
+      .visitor()
+      .get('/api/comparison')
+      .query({ part: [parts.bracket.slug] })
+      .expect(200);
+    expect(body.items[0]).toMatchObject({
+      lines: [],
+      trials: { held: 1, heldForAWhile: 0, didNotHelp: 0 },
+      afterwards: ['flats'],
+    });
+  });
 });
 
 describe('own stock', () => {
