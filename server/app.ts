@@ -103,7 +103,7 @@ export function createApp(around: Surroundings): Composition {
     mail: mail.queue,
     searchOutbox: search.outbox,
   });
-  const measurements = createMeasurements({ knex, clock, limits });
+  const measurements = createMeasurements({ knex, clock, hardware: hardware.service, limits });
   const whichOne = createWhichOne({ knex, clock, hardware: hardware.service });
   const proposals = createProposals({
     knex,

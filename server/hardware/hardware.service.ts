@@ -4,6 +4,7 @@ import type {
   PartPage,
   PartRef,
   PartSummary,
+  Revision,
   RevisionRef,
   Symptom,
 } from '../../shared/contract/hardware.js';
@@ -13,6 +14,7 @@ import { NotFound } from '../http/problems.js';
 import { groupBy } from '../rows.js';
 import type { HardwareStore } from './hardware.store.js';
 import type { PartPageStore } from './part-page.store.js';
+import type { RevisionStore } from './revision.store.js';
 
 const PlaceInParts = z.object({ name: z.string().max(120), id: z.number().int() });
 
@@ -26,7 +28,13 @@ export interface PartQuery {
 
 export type HardwareService = ReturnType<typeof createHardwareService>;
 
-export function createHardwareService(store: HardwareStore, pages: PartPageStore) {
+export function createHardwareService(around: {
+  store: HardwareStore;
+  pages: PartPageStore;
+  revisions: RevisionStore;
+}) {
+  const { store, pages, revisions } = around;
+
   return {
     listMakers(): Promise<MakerRef[]> {
       return store.makers();
@@ -63,6 +71,11 @@ export function createHardwareService(store: HardwareStore, pages: PartPageStore
 
     /** As `readPart`, without what only the page shows. */
     partBySlug,
+
+    /** All that is known of the part's revisions, from the oldest to the newest. */
+    revisionsOfPart(partId: number): Promise<Revision[]> {
+      return revisions.ofPart(partId);
+    },
 
     /** Parts that are not there are missing from the map; so with all look-ups below. */
     partsByIds(ids: readonly number[]): Promise<Map<number, PartRef>> {

@@ -4,6 +4,8 @@ import { createHardwareService, type HardwareService } from './hardware.service.
 import { createHardwareStore } from './hardware.store.js';
 import { createPartPageStore } from './part-page.store.js';
 import type { RouteBinding } from '../http/binding.js';
+import { createRevisionPhotoService } from './revision-photos.service.js';
+import { createRevisionStore } from './revision.store.js';
 
 export type { HardwareService };
 
@@ -12,6 +14,12 @@ export function createHardware({ knex }: { knex: Knex }): {
   bindings: RouteBinding[];
   service: HardwareService;
 } {
-  const service = createHardwareService(createHardwareStore(knex), createPartPageStore(knex));
-  return { bindings: hardwareBindings(service), service };
+  const revisions = createRevisionStore(knex);
+  const service = createHardwareService({
+    store: createHardwareStore(knex),
+    pages: createPartPageStore(knex, revisions),
+    revisions,
+  });
+  const photos = createRevisionPhotoService({ knex, store: revisions });
+  return { bindings: hardwareBindings(service, photos), service };
 }

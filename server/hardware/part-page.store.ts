@@ -1,11 +1,12 @@
 import type { Knex } from 'knex';
-import type { Feature, PartPage, Revision } from '../../shared/contract/hardware.js';
+import type { Feature, PartPage } from '../../shared/contract/hardware.js';
 import { fromJson, groupBy } from '../rows.js';
+import type { RevisionStore } from './revision.store.js';
 
 export type PartPageStore = ReturnType<typeof createPartPageStore>;
 
 /** Read model of the part's page: one query for the part, then three side by side. */
-export function createPartPageStore(knex: Knex) {
+export function createPartPageStore(knex: Knex, revisions: RevisionStore) {
   return {
     async partPage(slug: string): Promise<PartPage | undefined> {
       const part = await knex('parts as p')
@@ -24,8 +25,8 @@ export function createPartPageStore(knex: Knex) {
           placeholder: 'f.placeholder',
         });
       if (!part) return undefined;
-      const [revisions, features, writeUps] = await Promise.all([
-        revisionsOf(knex, part.id),
+      const [ofPart, features, writeUps] = await Promise.all([
+        revisions.ofPart(part.id),
         featuresOf(knex, part.id),
         writeUpsOn(knex, part.id),
       ]);
@@ -38,20 +39,12 @@ export function createPartPageStore(knex: Knex) {
         maker: { id: part.makerId, slug: part.makerSlug, name: part.makerName },
         about: part.about,
         photo: hash === null ? null : { hash, alt, width, height, widths: fromJson(widths), placeholder },
-        revisions,
+        revisions: ofPart,
         features,
         writeUps,
       };
     },
   };
-}
-
-async function revisionsOf(knex: Knex, partId: number): Promise<Revision[]> {
-  return knex('revisions')
-    .select('id', { partId: 'part_id' }, 'label', { soldFrom: 'sold_from', soldTo: 'sold_to' })
-    .select({ howToTell: 'how_to_tell', whatChanged: 'what_changed' })
-    .where('part_id', partId)
-    .orderBy('position');
 }
 
 async function featuresOf(knex: Knex, partId: number): Promise<Feature[]> {

@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import type { Feature, RevisionRef } from '../../shared/contract/hardware.js';
 import type { DimensionConsensus, MeasurementUnit } from '../../shared/contract/measurements.js';
+import type { Photo } from '../../shared/contract/photos.js';
 import type { Instrument } from '../../shared/contract/vocabulary.js';
 import type { Process } from '../../shared/statistics/consensus.js';
 import { fromJson } from '../rows.js';
@@ -27,6 +28,7 @@ export interface MeasurementRow extends Place {
   readonly accountId: number;
   readonly displayName: string;
   readonly createdAt: Date;
+  readonly photo: Photo | null;
   readonly setAside: {
     readonly reason: string;
     readonly byId: number;
@@ -53,15 +55,8 @@ export function createMeasurementStore(knex: Knex) {
     db('features as f').select('f.id', 'f.slug', 'f.name', 'f.kind', 'f.process', { partId: 'f.part_id' });
 
   return {
-    async featuresOfPart(slug: string): Promise<FeatureRow[]> {
-      return features(knex)
-        .join('parts as p', 'p.id', 'f.part_id')
-        .where('p.slug', slug)
-        .orderBy(['f.name', 'f.id']);
-    },
-
-    async partExists(slug: string): Promise<boolean> {
-      return (await knex('parts').where({ slug }).first('id')) !== undefined;
+    async featuresOfPart(partId: number): Promise<FeatureRow[]> {
+      return features(knex).where('f.part_id', partId).orderBy(['f.name', 'f.id']);
     },
 
     /** The feature, held against other writers until the transaction ends: its consensus is made one at a time. */
@@ -272,12 +267,20 @@ interface MeasurementRecord extends Place {
   setAsideBy: number | null;
   setAsideName: string | null;
   setAsideReason: string | null;
+  photoId: number | null;
+  hash: string;
+  width: number;
+  height: number;
+  widths: unknown;
+  placeholder: string;
+  alt: string;
 }
 
 function measurements(knex: Knex): Knex.QueryBuilder {
   return knex('measurements as m')
     .join('accounts as a', 'a.id', 'm.account_id')
     .leftJoin('accounts as b', 'b.id', 'm.set_aside_by')
+    .leftJoin('photos as f', 'f.id', 'm.photo_id')
     .select('m.id', 'm.dimension', 'm.value', 'm.uncertainty', 'm.entered', 'm.unit', 'm.instrument', {
       featureId: 'm.feature_id',
       revisionId: 'm.revision_id',
@@ -288,14 +291,21 @@ function measurements(knex: Knex): Knex.QueryBuilder {
       setAsideBy: 'b.id',
       setAsideName: 'b.display_name',
       setAsideReason: 'm.set_aside_reason',
-    });
+      photoId: 'f.id',
+    })
+    .select('f.hash', 'f.width', 'f.height', 'f.widths', 'f.placeholder', 'f.alt');
 }
 
 function toMeasurement(row: MeasurementRecord): MeasurementRow {
-  const { setAsideAt, setAsideBy, setAsideName, setAsideReason, entered, ...rest } = row;
+  const { setAsideAt, setAsideBy, setAsideName, setAsideReason, entered, ...others } = row;
+  const { photoId, hash, width, height, widths, placeholder, alt, ...rest } = others;
   return {
     ...rest,
     entered: fromJson(entered),
+    photo:
+      photoId === null
+        ? null
+        : { id: photoId, hash, width, height, widths: fromJson(widths), placeholder, alt },
     setAside: setAsideAt && {
       reason: setAsideReason!,
       byId: setAsideBy!,

@@ -11,6 +11,7 @@ import { dimensionSpec, type DimensionSpec } from '../../shared/fit/feature-dime
 import { usualUncertainty } from '../../shared/fit/instruments.js';
 import { isUnitSlip, sayOf } from '../../shared/statistics/consensus.js';
 import { typeA } from '../../shared/statistics/summary.js';
+import type { HardwareService } from '../hardware/hardware.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
 import { groupBy } from '../rows.js';
 import { dimensionConsensus } from './consensus.js';
@@ -26,8 +27,13 @@ export interface KnownDimensions {
 
 export type MeasurementService = ReturnType<typeof createMeasurementService>;
 
-export function createMeasurementService(around: { knex: Knex; clock: () => Date; store: MeasurementStore }) {
-  const { knex, clock, store } = around;
+export function createMeasurementService(around: {
+  knex: Knex;
+  clock: () => Date;
+  hardware: HardwareService;
+  store: MeasurementStore;
+}) {
+  const { knex, clock, hardware, store } = around;
 
   /** Makes the consensus of a place anew; the feature must be held. */
   async function refresh(place: Place, feature: FeatureRow, trx: Knex): Promise<DimensionConsensus | null> {
@@ -73,12 +79,12 @@ export function createMeasurementService(around: { knex: Knex; clock: () => Date
   return {
     knownOf,
 
-    /** Consensus of every dimension of a part that was read. NotFound for a slug that no part has. */
+    /** Consensus of every dimension of a part that was read. NotFound for a slug that no part has or had. */
     async partMeasurements(slug: string): Promise<PartMeasurements> {
-      const features = await store.featuresOfPart(slug);
-      if (features.length === 0 && !(await store.partExists(slug))) throw noPart();
+      const part = await hardware.partBySlug(slug);
+      const features = await store.featuresOfPart(part.id);
       const [revisions, known] = await Promise.all([
-        features[0] ? store.revisionsOfPart(features[0].partId) : [],
+        features.length > 0 ? store.revisionsOfPart(part.id) : [],
         knownOf(features.map((feature) => feature.id)),
       ]);
       return {
@@ -105,7 +111,8 @@ export function createMeasurementService(around: { knex: Knex; clock: () => Date
       featureSlug: string,
       dimension: string,
     ): Promise<DimensionReadings> {
-      const feature = (await store.featuresOfPart(slug)).find((candidate) => candidate.slug === featureSlug);
+      const part = await hardware.partBySlug(slug);
+      const feature = (await store.featuresOfPart(part.id)).find(({ slug: at }) => at === featureSlug);
       if (!feature || !dimensionSpec(feature.kind, dimension))
         throw new NotFound('The part has no such dimension.');
       const [revisions, consensus, newest] = await Promise.all([
@@ -205,10 +212,6 @@ function mapValues<Key, From, To>(map: Map<Key, From>, turn: (value: From) => To
   return new Map([...map].map(([key, value]) => [key, turn(value)]));
 }
 
-function noPart(): NotFound {
-  return new NotFound('There is no part of that name in the catalogue.');
-}
-
 /**
  * Mean and standard uncertainty in mm or degrees. Repeats give a type A part (s/√n), the instrument the rest: what repeats
  * cannot show, its error, stays however often one reads (JCGM 100:2008, 4.3.7 and 5.1.2).
@@ -251,6 +254,7 @@ function toMeasurement(row: MeasurementRow, consensus: DimensionConsensus | null
     instrument: row.instrument,
     person: { id: row.accountId, displayName: row.displayName },
     createdAt: row.createdAt.toISOString(),
+    photo: row.photo,
     setAside: row.setAside && {
       reason: row.setAside.reason,
       by: { id: row.setAside.byId, displayName: row.setAside.byName },

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
 import { createMeasurementStore } from './measurement.store.js';
@@ -12,7 +13,12 @@ import {
 export type { KnownDimensions, MeasurementService };
 
 /** Readings of dimensions, and the consensus kept of them. */
-export function createMeasurements(around: { knex: Knex; clock: () => Date; limits: RateLimits }): {
+export function createMeasurements(around: {
+  knex: Knex;
+  clock: () => Date;
+  hardware: HardwareService;
+  limits: RateLimits;
+}): {
   bindings: RouteBinding[];
   service: MeasurementService;
 } {

@@ -1,5 +1,5 @@
 import type { Knex } from 'knex';
-import type { PartRef, Revision } from '../../shared/contract/hardware.js';
+import type { PartRef } from '../../shared/contract/hardware.js';
 import type { TellingDimension, TellingMark } from '../../shared/contract/which-one.js';
 import { groupBy } from '../rows.js';
 
@@ -8,14 +8,6 @@ export type WhichOneStore = ReturnType<typeof createWhichOneStore>;
 /** Read model of the questions that tell the revisions of a part apart. */
 export function createWhichOneStore(knex: Knex) {
   return {
-    async revisionsOf(part: PartRef): Promise<Revision[]> {
-      return knex('revisions')
-        .select('id', 'label', { partId: 'part_id', soldFrom: 'sold_from', soldTo: 'sold_to' })
-        .select({ howToTell: 'how_to_tell', whatChanged: 'what_changed' })
-        .where('part_id', part.id)
-        .orderBy('position');
-    },
-
     /** Marks of the part in the order in which they were noted. */
     async marksOf(part: PartRef): Promise<TellingMark[]> {
       const rows: { id: number; text: string; revisionId: number; shows: number }[] = await knex(

@@ -14,7 +14,7 @@ export function createWhichOne(around: { knex: Knex; clock: () => Date; hardware
   async function readWhichOne(slug: string): Promise<WhichOne> {
     const part = await around.hardware.partBySlug(slug);
     const [revisions, marks, dimensions] = await Promise.all([
-      store.revisionsOf(part),
+      around.hardware.revisionsOfPart(part.id),
       store.marksOf(part),
       store.dimensionsOf(part),
     ]);

@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { Day, Id, IdText, PageQuery, Slug, line, pageOf } from './primitives.js';
-import { anyone, route, signedIn } from './route.js';
+import { Photo } from './photos.js';
+import { anyone, moderators, route, signedIn } from './route.js';
 import { FeatureKind, PartKind } from './vocabulary.js';
 
 export const MakerRef = z.object({ id: Id, slug: Slug, name: z.string() });
@@ -20,6 +21,12 @@ export const PartSummary = PartRef.extend({
 });
 export type PartSummary = z.infer<typeof PartSummary>;
 
+/** A photo that shows how to tell a revision, and what to look at in it. */
+export const RevisionPhoto = z.object({ photo: Photo, caption: z.string() });
+export type RevisionPhoto = z.infer<typeof RevisionPhoto>;
+
+export const mostRevisionPhotos = 6;
+
 export const Revision = RevisionRef.extend({
   /** Half-open: sold from this day on … */
   soldFrom: Day.nullable(),
@@ -27,6 +34,7 @@ export const Revision = RevisionRef.extend({
   soldTo: Day.nullable(),
   howToTell: z.string(),
   whatChanged: z.string(),
+  photos: z.array(RevisionPhoto),
 });
 export type Revision = z.infer<typeof Revision>;
 
@@ -95,6 +103,26 @@ export const hardwareRoutes = {
     access: anyone,
     summary: 'The controlled list of symptoms',
     response: z.object({ items: z.array(Symptom) }),
+  }),
+  addRevisionPhoto: route({
+    method: 'post',
+    path: '/api/revisions/:id/photos',
+    tag,
+    access: moderators,
+    status: 201,
+    summary: 'Show a photo of mine at how to tell a revision',
+    params: z.object({ id: IdText }),
+    body: z.strictObject({ photoId: Id, caption: line(200, 3) }),
+    response: RevisionPhoto,
+    problems: ['already-there'],
+  }),
+  removeRevisionPhoto: route({
+    method: 'delete',
+    path: '/api/revisions/:id/photos/:photoId',
+    tag,
+    access: moderators,
+    summary: 'Show a photo no longer at a revision',
+    params: z.object({ id: IdText, photoId: IdText }),
   }),
 };
 

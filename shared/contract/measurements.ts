@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { Id, IdText, Instant, Slug, line } from './primitives.js';
 import { Feature, RevisionRef } from './hardware.js';
+import { Photo } from './photos.js';
 import { anyone, moderators, route, signedIn } from './route.js';
 import { Instrument } from './vocabulary.js';
 import { PersonRef } from './write-ups.js';
@@ -41,6 +42,8 @@ export const Measurement = z.object({
   instrument: Instrument,
   person: PersonRef,
   createdAt: Instant,
+  /** Of the reading being taken. */
+  photo: Photo.nullable(),
   /** Set aside by a moderator: shown, but without a say. */
   setAside: z.object({ reason: z.string(), by: PersonRef, at: Instant }).nullable(),
   /** What its say in the consensus came down to, 0 to 1. */

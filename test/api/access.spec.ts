@@ -105,6 +105,8 @@ function accessTable(): Record<keyof typeof routes, readonly Role[]> {
     listParts: everybody,
     readPart: everybody,
     listSymptoms: everybody,
+    addRevisionPhoto: desk,
+    removeRevisionPhoto: desk,
     readWhichOne: everybody,
     propose: accounts,
     listMyProposals: accounts,

@@ -56,6 +56,21 @@ describe('merging a part into another', () => {
     }
   });
 
+  it('answers at the old address with the measurements and readings of the part that stays', async () => {
+    const { kept, gone, map } = await twice();
+    const recess = await insertFeature(app.knex, kept, 'recess');
+    await record(member, reading(recess, revisionId(kept, 0), 'diameter', 19.5));
+    await merge('part', gone.id, kept.id, map).expect(200);
+    for (const path of ['measurements', `features/${recess.slug}/dimensions/diameter`]) {
+      const [old, now] = await Promise.all(
+        [gone.slug, kept.slug].map((slug) => app.visitor().get(`/api/parts/${slug}/${path}`).expect(200)),
+      );
+      expect(old!.body).toEqual(now!.body);
+      expect(JSON.stringify(old!.body)).toContain('19.5');
+    }
+    await app.visitor().get('/api/parts/never-was-there/measurements').expect(404);
+  });
+
   it('moves revisions that are not the other’s behind them on the time line', async () => {
     const { kept, gone, map } = await twice();
     await merge('part', gone.id, kept.id, map).expect(200);

@@ -12,6 +12,7 @@ import { startMariaDb } from '../../server/local/mariadb.mjs';
 import { freePort } from '../../server/local/start/ports.mjs';
 import { createMeasurements } from '../../server/measurements/measurements.js';
 import { migrateToLatest } from '../../server/migration-source.js';
+import { createHardware } from '../../server/hardware/hardware.js';
 import { noRateLimits } from '../../server/http/rate-limits.js';
 import type { WriteUpService } from '../../server/write-ups/write-ups.js';
 import { makeDataFolder } from '../api/support/services.js';
@@ -53,7 +54,12 @@ interface Pages {
 }
 
 function pagesOn(knex: Knex): Pages {
-  const measurements = createMeasurements({ knex, clock, limits: noRateLimits });
+  const measurements = createMeasurements({
+    knex,
+    clock,
+    hardware: createHardware({ knex }).service,
+    limits: noRateLimits,
+  });
   const nobody = { cautionsOfMany: () => Promise.resolve([]) } as unknown as WriteUpService;
   const joints = createJoints({ knex, clock, measurements: measurements.service, writeUps: nobody });
   let turn = 0;

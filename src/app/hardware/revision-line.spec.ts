@@ -9,6 +9,7 @@ const revision = (id: number, soldFrom: string | null, soldTo: string | null): R
   soldTo,
   howToTell: '',
   whatChanged: '',
+  photos: [],
 });
 const now = new Date('2026-01-01T00:00:00Z');
 

@@ -25,6 +25,7 @@ function reading(id: number, value: number, change: Partial<Measurement> = {}): 
     instrument: 'caliper',
     person: { id: 1, displayName: 'Reader' },
     createdAt: '2026-01-01T00:00:00Z',
+    photo: null,
     setAside: null,
     weight: 1,
     unitSlip: false,
