@@ -4,6 +4,7 @@ import type { Photo } from '../../../../shared/contract/photos';
 import { redrawWith } from '../../core/redraw-with';
 import { Icon } from '../../ui/icon/icon';
 import { Field, Labelled } from '../../ui/labelled/labelled';
+import { NewPhoto } from '../../ui/new-photo/new-photo';
 import { PhotoView } from '../../ui/photo/photo';
 import { Undo } from '../../ui/undo/undo';
 import { DraftEditing } from './draft-editing';
@@ -11,7 +12,6 @@ import { photoForm, type EditionForm } from './edition-form';
 import { fieldId } from './field-names';
 import { ItemTools } from './item-tools';
 import { moveItem } from './move-item';
-import { NewPhoto } from './new-photo';
 
 const most = 24;
 

@@ -17,8 +17,8 @@ import { photoLimits, type Photo } from '../../../../shared/contract/photos';
 import type { Problem } from '../../../../shared/contract/problem';
 import { toApiProblem } from '../../core/api-problem';
 import { tellFields } from '../../core/told-fields';
-import { Field, Labelled } from '../../ui/labelled/labelled';
-import { ProblemNote } from '../../ui/problem-note/problem-note';
+import { Field, Labelled } from '../labelled/labelled';
+import { ProblemNote } from '../problem-note/problem-note';
 import { PhotoUpload } from './photo-upload';
 
 /** A photo on its way: shown from the file, stored once it is said what it shows. A refusal keeps the words. */
