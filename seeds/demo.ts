@@ -4,8 +4,9 @@ import { seedMeasured } from './demo/measured/seed-measured.js';
 import { seedAccounts } from './demo/seed-accounts.js';
 import { seedBenches } from './demo/seed-benches.js';
 import { seedCatalogue } from './demo/seed-catalogue.js';
-import { storePartDrawings, storeWriteUpDrawings } from './demo/seed-drawings.js';
+import { storePartDrawings, storeRevisionDrawings, storeWriteUpDrawings } from './demo/seed-drawings.js';
 import { seedMarks } from './demo/seed-marks.js';
+import { seedRevisionPhotos } from './demo/seed-revision-photos.js';
 import { seedWriteUps } from './demo/seed-write-ups.js';
 
 /** What the seeder is handed; nothing in it is made here. */
@@ -23,12 +24,14 @@ export interface DemoSurroundings {
 export async function seedDemo({ knex, storePhoto, now, hashPassword }: DemoSurroundings): Promise<void> {
   // Photos are stored outside the transaction below and need their owners.
   const accounts = await seedAccounts(knex, now, hashPassword);
-  const [partPhotos, photos] = await Promise.all([
+  const [partPhotos, revisionPhotos, photos] = await Promise.all([
     storePartDrawings(storePhoto, accounts),
+    storeRevisionDrawings(storePhoto, accounts),
     storeWriteUpDrawings(storePhoto, accounts),
   ]);
   await knex.transaction(async (trx) => {
     const catalogue = await seedCatalogue(trx, partPhotos);
+    await seedRevisionPhotos(trx, { catalogue, photos: revisionPhotos });
     await seedMarks(trx, catalogue);
     await seedWriteUps(trx, { accounts, catalogue, photos, now });
     await seedBenches(trx, { accounts, catalogue, now });

@@ -2,6 +2,7 @@ import type { Photo } from '../../shared/contract/photos.js';
 import { renderSheet } from '../drawing/render.js';
 import { sheetSize } from '../drawing/sheet.js';
 import { demoParts } from './parts.js';
+import { demoRevisionDrawings } from './revision-drawings.js';
 import { known } from './seed-catalogue.js';
 import { demoWriteUps } from './write-ups.js';
 
@@ -45,6 +46,22 @@ export function storePartDrawings(
     alt: `Outline drawing of ${part.name}: ${part.about}`.slice(0, 300),
     owner,
     width: partWidth,
+  }));
+  return storeAll(storePhoto, drawings);
+}
+
+/** Renders and stores what tells revisions apart; gives photo ids by `part:letter`. The first administrator owns them. */
+export function storeRevisionDrawings(
+  storePhoto: StorePhoto,
+  accounts: ReadonlyMap<string, number>,
+): Promise<Map<string, number>> {
+  const owner = known(accounts, 'administrator');
+  const drawings = demoRevisionDrawings.map(({ part, letter, alt, svg }) => ({
+    key: `${part}:${letter}`,
+    svg,
+    alt,
+    owner,
+    width: sheetSize.width,
   }));
   return storeAll(storePhoto, drawings);
 }

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import sharp from 'sharp';
 import { demoParts } from '../demo/parts.js';
+import { demoRevisionDrawings } from '../demo/revision-drawings.js';
 import { demoWriteUps } from '../demo/write-ups.js';
 import { lettering, letteringWidth } from './lettering.js';
 import { renderSheet } from './render.js';
@@ -20,6 +21,7 @@ describe('the sheets of the demo', () => {
   it('are all different', () => {
     const sheets = [
       ...demoParts.map((part) => part.drawing),
+      ...demoRevisionDrawings.map((drawing) => drawing.svg),
       ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg)),
     ];
     expect(new Set(sheets).size).toBe(sheets.length);
@@ -34,6 +36,7 @@ describe('the sheets of the demo', () => {
   it('hold no length that is not a number', () => {
     const sheets = [
       ...demoParts.map((part) => part.drawing),
+      ...demoRevisionDrawings.map((drawing) => drawing.svg),
       ...demoWriteUps.flatMap((writeUp) => writeUp.content.drawings.map((item) => item.svg)),
     ];
     expect(sheets.filter((svg) => /NaN|undefined|Infinity/.test(svg))).toEqual([]);
