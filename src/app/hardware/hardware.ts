@@ -5,6 +5,7 @@ import {
   type MakerRef,
   type PartPage,
   type PartSummary,
+  type RevisionPhoto,
   type Symptom,
 } from '../../../shared/contract/hardware';
 import type { CallOf } from '../../../shared/contract/route';
@@ -28,6 +29,20 @@ export class Hardware {
 
   whichOne(slug: string): Observable<WhichOne> {
     return this.api.call(whichOneRoutes.readWhichOne, { params: { slug } });
+  }
+
+  /** Shows a photo of mine at how to tell the revision. */
+  addRevisionPhoto(
+    revisionId: number,
+    body: { photoId: number; caption: string },
+  ): Observable<RevisionPhoto> {
+    return this.api.call(hardwareRoutes.addRevisionPhoto, { params: { id: String(revisionId) }, body });
+  }
+
+  removeRevisionPhoto(revisionId: number, photoId: number): Observable<void> {
+    return this.api.call(hardwareRoutes.removeRevisionPhoto, {
+      params: { id: String(revisionId), photoId: String(photoId) },
+    });
   }
 
   makers(): Observable<{ items: MakerRef[] }> {

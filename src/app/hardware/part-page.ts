@@ -1,12 +1,21 @@
-import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  linkedSignal,
+  signal,
+} from '@angular/core';
 import { ActivatedRoute, RouterLink } from '@angular/router';
 import { map } from 'rxjs';
-import type { PartPage as Part, PartSummary } from '../../../shared/contract/hardware';
+import type { PartPage as Part, PartSummary, RevisionPhoto } from '../../../shared/contract/hardware';
 import type { Problem } from '../../../shared/contract/problem';
 import { partKindWords } from '../../../shared/contract/vocabulary';
 import { BenchStore } from '../bench/bench-store';
 import { toApiProblem } from '../core/api-problem';
 import { loadEach } from '../core/load';
+import { Session } from '../core/session';
 import { ShimloreTitles } from '../core/titles';
 import { Icon } from '../ui/icon/icon';
 import { LoadStateView } from '../ui/load-state/load-state';
@@ -16,12 +25,24 @@ import { Undo } from '../ui/undo/undo';
 import { CanonicalPart } from './canonical-part';
 import { Hardware } from './hardware';
 import { MeasurementSection } from './measurements/measurement-section';
+import { RevisionPhotoTools } from './revision-photos/revision-photo-tools';
+import { RevisionPhotos } from './revision-photos/revision-photos';
 import { RevisionTimeLine } from './revision-time-line';
 
 /** A part: its revisions on a time line, how to tell which one is on the bench, what changed, and what is written about it. */
 @Component({
   selector: 'sl-part-page',
-  imports: [Icon, LoadStateView, MeasurementSection, PhotoView, ProblemNote, RevisionTimeLine, RouterLink],
+  imports: [
+    Icon,
+    LoadStateView,
+    MeasurementSection,
+    PhotoView,
+    ProblemNote,
+    RevisionPhotoTools,
+    RevisionPhotos,
+    RevisionTimeLine,
+    RouterLink,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './part-page.html',
   styleUrl: './part-page.scss',
@@ -31,6 +52,7 @@ export class PartPage {
   private readonly titles = inject(ShimloreTitles);
   private readonly undo = inject(Undo);
   protected readonly bench = inject(BenchStore);
+  protected readonly session = inject(Session);
 
   protected readonly kinds = partKindWords;
   protected readonly now = new Date();
@@ -39,7 +61,8 @@ export class PartPage {
     inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
     (slug) => this.hardware.part(slug),
   );
-  protected readonly part = computed(() => {
+  /** As loaded, with what a moderator has changed since. */
+  protected readonly part = linkedSignal<Part | null>(() => {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
   });
@@ -68,6 +91,18 @@ export class PartPage {
     } catch (error) {
       this.problem.set(toApiProblem(error).problem);
     }
+  }
+
+  protected photosChanged(revisionId: number, photos: RevisionPhoto[]): void {
+    this.part.update(
+      (part) =>
+        part && {
+          ...part,
+          revisions: part.revisions.map((revision) =>
+            revision.id === revisionId ? { ...revision, photos } : revision,
+          ),
+        },
+    );
   }
 
   private describe(part: Part): void {

@@ -8,6 +8,7 @@ import { toApiProblem } from '../../core/api-problem';
 import { formSending } from '../../core/form-sending';
 import { Session } from '../../core/session';
 import { Field, Labelled } from '../../ui/labelled/labelled';
+import { PhotoView } from '../../ui/photo/photo';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { Measurements } from './measurements';
 import { enteredText, sayText, withInterval, type ShownUnit } from './reading-text';
@@ -15,7 +16,7 @@ import { enteredText, sayText, withInterval, type ShownUnit } from './reading-te
 /** Each reading in words: figure, instrument, who and when, and what say it has. Moderators set one aside or take it back. */
 @Component({
   selector: 'sl-reading-table',
-  imports: [DatePipe, Field, Labelled, ProblemNote, ReactiveFormsModule],
+  imports: [DatePipe, Field, Labelled, PhotoView, ProblemNote, ReactiveFormsModule],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './reading-table.html',
   styleUrl: './reading-table.scss',
@@ -47,6 +48,7 @@ export class ReadingTable {
       entered: enteredText(reading),
       instrument: instrumentWords[reading.instrument],
       say: sayText(reading),
+      photo: reading.photo && `/photos/${reading.photo.hash}-${Math.max(...reading.photo.widths)}.webp`,
     })),
   );
 

@@ -1,8 +1,11 @@
 import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
+import { By } from '@angular/platform-browser';
 import type { DimensionConsensus } from '../../../../shared/contract/measurements';
 import { dimensionSpec } from '../../../../shared/fit/feature-dimensions';
+import { NewPhoto } from '../../ui/new-photo/new-photo';
+import { PhotoChoice } from '../../ui/new-photo/photo-choice';
 import { RecordForm } from './record-form';
 
 const consensus: DimensionConsensus = {
@@ -111,6 +114,25 @@ describe('recording a reading', () => {
     await send();
     api().expectNone('/api/measurements');
     expect(page.textContent).toContain('Takes figures, with spaces between repeats.');
+  });
+
+  it('sends the photo of the reading once it is stored, and waits for one that is chosen', async () => {
+    Object.assign(URL, { createObjectURL: () => 'blob:photo', revokeObjectURL: () => undefined });
+    const { fixture, page, type, send } = await opened();
+    const { debugElement } = fixture;
+    await type('values', '19.52');
+    debugElement.query(By.directive(PhotoChoice)).triggerEventHandler('chosen', new File(['x'], 'jaws.jpg'));
+    await fixture.whenStable();
+    await send();
+    api().expectNone('/api/measurements');
+    expect(page.textContent).toContain('Store the photo first, or leave it out.');
+    const photo = { id: 3, hash: '0'.repeat(64), width: 480, height: 320, widths: [480], placeholder: '' };
+    debugElement
+      .query(By.directive(NewPhoto))
+      .triggerEventHandler('stored', { ...photo, alt: 'Jaws in the recess' });
+    await fixture.whenStable();
+    await send();
+    expect(api().expectOne('/api/measurements').request.body).toMatchObject({ photoId: 3 });
   });
 
   it('tells the new consensus at once', async () => {

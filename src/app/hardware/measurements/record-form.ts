@@ -17,6 +17,7 @@ import type {
   DimensionConsensus,
   MeasurementUnit,
 } from '../../../../shared/contract/measurements';
+import type { Photo } from '../../../../shared/contract/photos';
 import { Instrument, instrumentWords } from '../../../../shared/contract/vocabulary';
 import { figureIn } from '../../../../shared/contract/worksheet-address';
 import type { DimensionSpec } from '../../../../shared/fit/feature-dimensions';
@@ -25,6 +26,9 @@ import { ApiProblem, toApiProblem } from '../../core/api-problem';
 import { formSending } from '../../core/form-sending';
 import { Session } from '../../core/session';
 import { Field, Labelled } from '../../ui/labelled/labelled';
+import { NewPhoto } from '../../ui/new-photo/new-photo';
+import { PhotoChoice } from '../../ui/new-photo/photo-choice';
+import { PhotoView } from '../../ui/photo/photo';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { Measurements } from './measurements';
 import { consensusText, countText, inUnit, shownUnit } from './reading-text';
@@ -34,7 +38,7 @@ const unitWords: Record<MeasurementUnit, string> = { mm: 'mm', in: 'inch', deg: 
 /** A member's reading of one dimension. What was typed stays when the server refuses it. */
 @Component({
   selector: 'sl-record-form',
-  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule],
+  imports: [Field, Labelled, NewPhoto, PhotoChoice, PhotoView, ProblemNote, ReactiveFormsModule],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './record-form.html',
   styleUrl: './record-form.scss',
@@ -51,6 +55,9 @@ export class RecordForm implements OnInit {
   private readonly wish = inject(Session).account()?.units ?? 'mm';
   protected readonly sending = formSending();
   protected readonly told = signal('');
+  /** Chosen, but not stored yet. */
+  protected readonly file = signal<File | null>(null);
+  protected readonly photo = signal<Photo | null>(null);
   protected readonly instrumentWords = instrumentWords;
   protected readonly unitWords = unitWords;
   protected readonly form = new FormGroup({
@@ -87,8 +94,17 @@ export class RecordForm implements OnInit {
     this.form.controls.uncertainty.setValue(this.usual());
   }
 
+  protected stored(photo: Photo): void {
+    this.file.set(null);
+    this.photo.set(photo);
+  }
+
   protected record(): void {
     this.told.set('');
+    if (this.file()) {
+      this.told.set('Store the photo first, or leave it out.');
+      return;
+    }
     const reading = this.typed();
     if (!reading) return;
     this.sending.send(
@@ -103,6 +119,7 @@ export class RecordForm implements OnInit {
           `Recorded. The consensus is now ${consensusText(consensus, unit)} from ${countText(consensus.count)}.`,
         );
         this.form.controls.values.reset();
+        this.photo.set(null);
         this.recorded.emit({ revisionId: reading.revisionId, consensus });
       },
     );
@@ -134,7 +151,7 @@ export class RecordForm implements OnInit {
         unit: unit.value,
         instrument: instrument.value,
         uncertainty: own,
-        photoId: null,
+        photoId: this.photo()?.id ?? null,
       };
     return null;
   }
