@@ -3,6 +3,7 @@ import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { seedDemo, type DemoSurroundings } from '../../seeds/demo.js';
 import { demoAccounts } from '../../seeds/demo/accounts.js';
 import { demoWriteUps } from '../../seeds/demo/write-ups.js';
+import type { Revision } from '../../shared/contract/hardware.js';
 import { hashPassword } from '../../server/accounts/password.js';
 import { startTestApp, type TestApp } from './support/app.js';
 
@@ -58,6 +59,17 @@ describe('the seeded demo', () => {
     expect(
       await app.knex('fixes').whereNotNull('made_right_from').where('standing', '!=', 'made-right'),
     ).toEqual([]);
+  });
+
+  it('shows at every revision of the M1 and of the belt bracket what tells it apart', async () => {
+    for (const slug of ['tarn-m1', 'stonebridge-belt-bracket']) {
+      const { body } = await app.visitor().get(`/api/parts/${slug}`).expect(200);
+      const shown = (body.revisions as Revision[]).map(({ label, photos }) => [
+        label,
+        photos.map(({ photo }) => photo.alt.includes(label)),
+      ]);
+      expect(shown).toEqual(['Rev A', 'Rev B', 'Rev C', 'Rev D'].map((label) => [label, [true]]));
+    }
   });
 
   it('points each write-up at its last published edition and asks for it to be indexed', async () => {
