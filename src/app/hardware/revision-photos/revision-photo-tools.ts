@@ -55,6 +55,9 @@ import { Hardware } from '../hardware';
       justify-items: start;
       margin-block-start: 0.5rem;
     }
+    .sl-bare-button {
+      text-align: start;
+    }
   `,
 })
 export class RevisionPhotoTools {
