@@ -24,6 +24,7 @@ import { createMeasurements } from './measurements/measurements.js';
 import { createModeration } from './moderation/moderation.js';
 import { createPhotos } from './photos/photos.js';
 import { createProposals } from './proposals/proposals.js';
+import { createQuestions } from './questions/questions.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
 import { renderText } from './text/render-text.js';
@@ -119,6 +120,14 @@ export function createApp(around: Surroundings): Composition {
     measurements: measurements.service,
     writeUps: writeUps.service,
   });
+  const questions = createQuestions({
+    knex,
+    clock,
+    hardware: hardware.service,
+    writeUps: writeUps.service,
+    renderText,
+    limits,
+  });
   const worksheets = createWorksheets({ knex });
   const system = createSystem({
     knex,
@@ -142,6 +151,7 @@ export function createApp(around: Surroundings): Composition {
     ...measurements.bindings,
     ...joints.bindings,
     ...worksheets.bindings,
+    ...questions.bindings,
   ];
 
   const app = express();

@@ -18,6 +18,10 @@ const limits = {
   measurement: { points: 300, duration: 60 * 60 },
   /** Proposals for the catalogue by one account. */
   proposal: { points: 30, duration: 60 * 60 },
+  /** Questions asked by one account. */
+  question: { points: 20, duration: 60 * 60 },
+  /** Replies to questions by one account. */
+  reply: { points: 60, duration: 60 * 60 },
 } as const;
 export type LimitName = keyof typeof limits;
 

@@ -6,6 +6,7 @@ import { deskRoutes } from './moderation.js';
 import { ownStockRoutes } from './own-stock.js';
 import { photoRoutes } from './photos.js';
 import { proposalRoutes } from './proposals.js';
+import { questionRoutes } from './questions.js';
 import { searchRoutes } from './search.js';
 import { systemRoutes } from './system.js';
 import { whichOneRoutes } from './which-one.js';
@@ -26,5 +27,6 @@ export const routes = {
   ...writeUpRoutes,
   ...photoRoutes,
   ...deskRoutes,
+  ...questionRoutes,
 };
 export type RouteName = keyof typeof routes;

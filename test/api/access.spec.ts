@@ -157,5 +157,11 @@ function accessTable(): Record<keyof typeof routes, readonly Role[]> {
     removeCaution: desk,
     publishEdition: desk,
     returnEdition: desk,
+    listQuestions: everybody,
+    readQuestion: everybody,
+    askQuestion: accounts,
+    addReply: accounts,
+    settleQuestion: accounts,
+    reopenQuestion: accounts,
   };
 }
