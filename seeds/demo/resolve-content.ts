@@ -38,6 +38,7 @@ export function resolveContent(content: DemoContent, catalogue: Catalogue, photo
       afterwards: [...item.afterwards],
       afterwardsNote: item.afterwardsNote,
       acceptance: item.acceptance,
+      worksheet: item.worksheet,
     })),
     photos: content.drawings.map((item, index) => ({
       photoId: photoIds[index]!,

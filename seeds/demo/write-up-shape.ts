@@ -7,6 +7,8 @@ import type {
   ReadingUnit,
   TrialOutcome,
 } from '../../shared/contract/vocabulary.js';
+import type { WorksheetRecord } from '../../shared/contract/worksheet.js';
+import { worksheetOfLink } from '../../shared/fit/worksheet-link.js';
 
 /** A side of a joint: `holds` and `not` are letters of revisions with blanks between them; the rest is not mentioned. */
 export interface DemoSide {
@@ -48,6 +50,7 @@ export interface DemoFix {
   readonly afterwards: readonly Afterwards[];
   readonly afterwardsNote: string;
   readonly acceptance: Acceptance | null;
+  readonly worksheet: WorksheetRecord | null;
   /** Slugs of the caution library. */
   readonly cautions: readonly string[];
   readonly trials: readonly DemoTrial[];
@@ -134,6 +137,8 @@ interface FixParts {
   after?: Afterwards[];
   note?: string;
   accept?: Acceptance;
+  /** Address of a worksheet, which is run when the demo is made. */
+  sheet?: string;
   cautions?: string;
   /** Trials as words: h held, w held for a while, n did not help, each with its figure if there is one: "h0.05 h w n1.2". */
   trials?: string;
@@ -162,10 +167,17 @@ export function fix(
     afterwards: parts.after ?? [],
     afterwardsNote: parts.note ?? '',
     acceptance: parts.accept ?? null,
+    worksheet: parts.sheet === undefined ? null : sheet(parts.sheet),
     cautions: listed(parts.cautions, ' '),
     trials: listed(parts.trials, ' ').map(trial),
     madeRight: parts.madeRight ?? null,
   };
+}
+
+function sheet(link: string): WorksheetRecord {
+  const read = worksheetOfLink(link);
+  if (!('record' in read)) throw new Error(`The demo's worksheet ${link}: ${read.refusal}`);
+  return read.record;
 }
 
 const outcomes: Record<string, TrialOutcome> = { h: 'held', w: 'held-for-a-while', n: 'did-not-help' };

@@ -47,6 +47,7 @@ describe('edition links', () => {
       revisionIds: [10, 10, 20],
       afterwards: [],
       afterwardsNote: '',
+      worksheet: null,
       acceptance: null,
       steps: [5, null, 6].map((photoId, index) => ({ key: `step-aaa${index}`, text: '', photoId })),
     } as const;

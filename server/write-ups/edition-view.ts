@@ -89,6 +89,8 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
           afterwards,
           afterwardsNote,
           acceptance,
+          // Editions from before worksheets lack the field.
+          worksheet: fix.worksheet ?? null,
           why: renderText(fix.why),
           steps: fix.steps.map((step) => ({
             key: step.key,

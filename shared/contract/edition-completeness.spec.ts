@@ -14,6 +14,7 @@ const fix: Fix = {
   revisionIds: [],
   afterwards: [],
   afterwardsNote: '',
+  worksheet: null,
   acceptance: null,
 };
 const side = { partId: 1, feature: '', revisions: [{ revisionId: 2, holds: true }] };

@@ -1,5 +1,6 @@
 import { z } from 'zod';
 import { Id, Slug, line, passage } from './primitives.js';
+import { WorksheetRecord } from './worksheet.js';
 import { Afterwards, FixKind, Instrument, Permanence, ReadingUnit } from './vocabulary.js';
 
 /** Identity of a fix, reading or step across editions; made by the editor. */
@@ -60,6 +61,8 @@ export const Fix = z.strictObject({
   afterwards: z.array(Afterwards).max(6),
   afterwardsNote: line(300),
   acceptance: Acceptance.nullable(),
+  /** How the author sized it; readers run it again with their own figures. Texts from before worksheets have none. */
+  worksheet: WorksheetRecord.nullable().default(null),
 });
 export type Fix = z.infer<typeof Fix>;
 

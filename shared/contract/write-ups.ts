@@ -2,6 +2,7 @@ import { z } from 'zod';
 import { EditionContent, Acceptance } from './edition-content.js';
 import { PartRef, RevisionRef, Symptom } from './hardware.js';
 import { Photo } from './photos.js';
+import { WorksheetRecord } from './worksheet.js';
 import { Id, IdText, Instant, PageQuery, Slug, line, pageOf, passage } from './primitives.js';
 import { anyone, route, signedIn } from './route.js';
 import {
@@ -76,6 +77,7 @@ export const FixView = z.object({
   afterwards: z.array(Afterwards),
   afterwardsNote: z.string(),
   acceptance: Acceptance.nullable(),
+  worksheet: WorksheetRecord.nullable(),
   cautions: z.array(Caution),
   trialCounts: z.object({
     held: z.number().int(),

@@ -17,6 +17,7 @@ function withFix(over: Partial<Fix>): EditionContent {
     revisionIds: [],
     afterwards: [],
     afterwardsNote: '',
+    worksheet: null,
     acceptance: null,
     ...over,
   };

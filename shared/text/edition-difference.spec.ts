@@ -23,6 +23,7 @@ function fix(key: string, over: Partial<Fix> = {}): Fix {
     revisionIds: [],
     afterwards: [],
     afterwardsNote: '',
+    worksheet: null,
     acceptance: null,
     ...over,
   };

@@ -7,6 +7,7 @@ import {
   readingUnitSymbols,
   type ReadingUnit,
 } from '../contract/vocabulary.js';
+import type { WorksheetRecord } from '../contract/worksheet.js';
 
 /** What things are called that a content only points at. */
 export interface ContentNames {
@@ -84,6 +85,7 @@ function fixFields(fix: Fix, names: ContentNames): EditionField[] {
       [...afterwards, fix.afterwardsNote].filter((line) => line !== '').join('\n'),
     ),
     of('acceptance', 'acceptance figure', fix.acceptance ? acceptanceText(fix.acceptance) : ''),
+    of('worksheet', 'worksheet', fix.worksheet ? worksheetText(fix.worksheet) : ''),
   ];
 }
 
@@ -120,6 +122,16 @@ function readingText(reading: Reading, names: ContentNames): string {
 
 function acceptanceText({ quantity, comparison, value, unit }: Acceptance): string {
   return `${quantity} ${comparison === 'at-most' ? 'at most' : 'at least'} ${withUnit(value, unit)}`;
+}
+
+function worksheetText({ kind, inputs, result }: WorksheetRecord): string {
+  const typed = Object.entries(inputs).filter(
+    ([, value]) => typeof value === 'number' || typeof value === 'string',
+  );
+  const figures = typed
+    .filter(([, value]) => value !== '')
+    .map(([name, value]) => `${name} ${String(value)}`);
+  return [`${kind}: ${result.sentence}`, ...figures].join('\n');
 }
 
 function withUnit(value: number, unit: ReadingUnit): string {

@@ -412,6 +412,7 @@ function hostileContent(): EditionContent {
         title: hostile.slice(0, 140).trim(),
         kind: 'shim',
         permanence: 'reversible',
+        worksheet: null,
         why: markdown,
         tools: [hostile.slice(0, 80).trim()],
         materials: [hostile.slice(0, 80).trim()],

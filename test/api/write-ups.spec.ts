@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { DifferencePiece, EditionLine, FieldDifference } from '../../shared/contract/write-ups.js';
+import { worksheetOfLink } from '../../shared/fit/worksheet-link.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
 import {
   cautionFor,
@@ -119,6 +120,43 @@ describe('the published page', () => {
       'caution',
     ]);
     expect(view.cautions).toMatchObject([{ fixKey: null, hazards: ['sun'], signalWord: 'warning' }]);
+  });
+});
+
+describe('a worksheet on a fix', () => {
+  it('stands on the page as it was attached, and is told in the comparison when it goes', async () => {
+    const read = worksheetOfLink('/worksheets/shim?v=1&gap=1.7&tolerance=0.05');
+    if (!('record' in read)) throw new Error(read.refusal);
+    const fix = plainFix({ worksheet: read.record });
+    const content = completeContent(joint, { fixes: [fix] });
+    const { slug } = await publishNew(author, moderator, content);
+    const { body } = await app.visitor().get(`/api/write-ups/${slug}`).expect(200);
+    expect(body.view.fixes[0].worksheet).toEqual(read.record);
+
+    const next = await submitNext(author, slug, { ...content, fixes: [{ ...fix, worksheet: null }] });
+    await moderator.post(`/api/desk/editions/${next.id}/publish`).send({ note: '' }).expect(200);
+    const comparison = await app.visitor().get(`/api/write-ups/${slug}/comparison?from=1&to=2`).expect(200);
+    expect(comparison.body.changed.map((change: { field: string }) => change.field)).toEqual([
+      `fixes.${fix.key}.worksheet`,
+    ]);
+  });
+
+  it('of another shape is refused with the field named, and a text from before worksheets has none', async () => {
+    const { worksheet: _, ...before } = plainFix();
+    const content = completeContent(joint);
+    const draft = (await author.post('/api/write-ups').send({}).expect(201)).body;
+    const save = (fix: object) =>
+      author
+        .put(`/api/drafts/${draft.id}`)
+        .set('If-Match', `"${draft.version}"`)
+        .send({ content: { ...content, fixes: [fix] }, changeNote: '' });
+    const refused = await save({
+      ...before,
+      worksheet: { kind: 'shim', version: 1, inputs: {}, result: {} },
+    });
+    expect(refused.status).toBe(422);
+    expect(refused.body.fields[0].path).toMatch(/^content\.fixes\.0\.worksheet/);
+    expect((await save(before).expect(200)).body.content.fixes[0].worksheet).toBeNull();
   });
 });
 

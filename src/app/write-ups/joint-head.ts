@@ -12,11 +12,19 @@ import { FitMark } from '../joints/fit-mark';
 import { Joints } from '../joints/joints';
 import { judge, onHand } from '../joints/on-hand';
 import { JointDrawing } from '../ui/joint-drawing/joint-drawing';
-import { shimThickness } from './shim-thickness';
+import { shimThickness, trimHeight } from './shim-thickness';
+
+interface DrawableFix {
+  readonly key: string;
+  readonly title: string;
+  /** mm laid in or taken off. */
+  readonly figure: number;
+  readonly drawn: { readonly shim?: number; readonly trim?: number };
+}
 
 /**
  * The drawing that heads a write-up: the reader's own revisions, else a pair the write-up holds for, from the consensus of
- * all readings, with the shim of a fix where it is chosen.
+ * all readings, with the shim or the trim of a fix where it is chosen.
  */
 @Component({
   selector: 'sl-joint-head',
@@ -52,12 +60,14 @@ export class JointHead {
     };
     return choosePair(joint, { a: pick(joint.sideA), b: pick(joint.sideB), bench: [] });
   });
-  /** Fixes that lay something in whose thickness is told; only a gap between faces shows it. */
-  protected readonly shims = computed(() =>
+  /** Fixes that lay something in or take something off, and by how much is told; only faces with a boss show it. */
+  protected readonly drawable = computed((): DrawableFix[] =>
     this.joint()?.kind === 'boss-recess'
-      ? this.view().fixes.flatMap((fix) => {
-          const thickness = shimThickness(this.view(), fix);
-          return thickness === null ? [] : [{ key: fix.key, title: fix.title, thickness }];
+      ? this.view().fixes.flatMap((fix): DrawableFix[] => {
+          const shim = shimThickness(this.view(), fix);
+          const trim = trimHeight(fix);
+          if (shim !== null) return [{ key: fix.key, title: fix.title, figure: shim, drawn: { shim } }];
+          return trim === null ? [] : [{ key: fix.key, title: fix.title, figure: trim, drawn: { trim } }];
         })
       : [],
   );
@@ -74,15 +84,13 @@ export class JointHead {
       `${side.part.name} ${side.revisions.find(({ revision }) => revision.id === id)?.revision.label ?? ''}`;
     const [nameA, nameB] = [label(joint.sideA, cell.revisionA), label(joint.sideB, cell.revisionB)];
     const judged = judge(joint.kind, a, b);
-    const shim = this.shims().find(({ key }) => key === this.chosenFix())?.thickness;
+    const fix = this.drawable().find(({ key }) => key === this.chosenFix())?.drawn ?? {};
     return {
       nameA,
       nameB,
       verdict: judged.verdict?.verdict ?? cell.verdict,
       sentence: judged.verdict?.sentence ?? '',
-      drawing: judged.verdict
-        ? drawJoint({ kind: joint.kind, a, b, nameA, nameB, ...(shim === undefined ? {} : { shim }) })
-        : null,
+      drawing: judged.verdict ? drawJoint({ kind: joint.kind, a, b, nameA, nameB, ...fix }) : null,
       source: drawingSource(joint, cell, false),
       address: { a: cell.revisionA, b: cell.revisionB },
     };

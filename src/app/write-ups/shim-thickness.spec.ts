@@ -1,5 +1,6 @@
 import type { EditionView, FixView, RichText } from '../../../shared/contract/write-ups';
-import { shimThickness } from './shim-thickness';
+import { worksheetOfLink } from '../../../shared/fit/worksheet-link';
+import { shimThickness, trimHeight } from './shim-thickness';
 
 const none: RichText = { source: '', html: '' };
 const fixWith = (materials: string[], kind: FixView['kind'] = 'shim'): FixView => ({
@@ -16,6 +17,7 @@ const fixWith = (materials: string[], kind: FixView['kind'] = 'shim'): FixView =
   revisions: [],
   afterwards: [],
   afterwardsNote: '',
+  worksheet: null,
   acceptance: null,
   cautions: [],
   trialCounts: { held: 0, heldForAWhile: 0, didNotHelp: 0 },
@@ -59,5 +61,23 @@ describe('the thickness of a shim', () => {
     expect(shimThickness(view(), fixWith(['Tape']))).toBeNull();
     expect(shimThickness(view(), fixWith(['Washers of 0.3 mm', 'a coin of 1.5 mm']))).toBeNull();
     expect(shimThickness(view(), fixWith(['Coins of 1.7 mm'], 'trim'))).toBeNull();
+  });
+
+  it('is that of the worksheet where one is attached, whatever the materials say', () => {
+    const read = worksheetOfLink('/worksheets/shim?v=1&gap=1.5&tolerance=0.05&mostPieces=1&families=coin');
+    if (!('record' in read)) throw new Error(read.refusal);
+    const fix = { ...fixWith(['Three coins of 1.65 to 1.75 mm']), worksheet: read.record };
+    expect(shimThickness(view(), fix)).toBeCloseTo(1.52, 12);
+    expect(trimHeight(fix)).toBeNull();
+  });
+});
+
+describe('what a trim takes off', () => {
+  it('is told by its worksheet: the height of the boss and the allowance', () => {
+    const read = worksheetOfLink(
+      '/worksheets/trim?v=1&bossDiameter=22.5&bossHeight=1.7&recessDiameter=19.5&allowance=0.1',
+    );
+    if (!('record' in read)) throw new Error(read.refusal);
+    expect(trimHeight({ ...fixWith([], 'trim'), worksheet: read.record })).toBeCloseTo(1.8, 12);
   });
 });

@@ -46,6 +46,7 @@ export function plainFix(over: Partial<Fix> = {}): Fix {
     revisionIds: [],
     afterwards: ['flats'],
     afterwardsNote: '',
+    worksheet: null,
     acceptance: { quantity: 'tilt', comparison: 'at-most', value: 0.1, unit: 'deg' },
     ...over,
   };

@@ -37,10 +37,7 @@ describe('applicability label', () => {
       ],
     });
     const lines = [...element.querySelectorAll('.line')].map((line) => line.textContent?.trim());
-    expect(lines).toEqual([
-      'not known for your Belt bracket (revision not said)',
-      'holds for your M1 Rev C',
-    ]);
+    expect(lines).toEqual(['not known for your Belt bracket (revision not said)', 'holds for your M1 Rev C']);
   });
 
   it('says nothing to a reader who has none of the parts', () => {

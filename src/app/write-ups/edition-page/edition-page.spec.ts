@@ -31,6 +31,7 @@ const fix: FixView = {
   revisions: [],
   afterwards: ['flats'],
   afterwardsNote: '',
+  worksheet: null,
   acceptance: { quantity: 'gap', comparison: 'at-most', value: 0.05, unit: 'mm' },
   cautions: [caution],
   trialCounts: { held: 2, heldForAWhile: 0, didNotHelp: 1 },
@@ -78,7 +79,9 @@ describe('edition page', () => {
 
   it('lets no script or handler out of rich text', () => {
     const page = drawn({
-      cause: rich('<p onclick="steal()">It rocks.<script>steal()</script><img src="x" onerror="steal()"></p>'),
+      cause: rich(
+        '<p onclick="steal()">It rocks.<script>steal()</script><img src="x" onerror="steal()"></p>',
+      ),
     });
     const text = page.querySelector('sl-rich-text')!;
     expect(text.textContent).toContain('It rocks.');
@@ -114,7 +117,15 @@ describe('edition page', () => {
   });
 
   it('draws a draft of which nothing is written yet', () => {
-    const empty: FixView = { ...fix, title: '', kind: null, permanence: null, steps: [], cautions: [], acceptance: null };
+    const empty: FixView = {
+      ...fix,
+      title: '',
+      kind: null,
+      permanence: null,
+      steps: [],
+      cautions: [],
+      acceptance: null,
+    };
     const page = drawn({ title: '', fixes: [empty] });
     expect(page.querySelector('h1')?.textContent).toContain('Without a title yet');
     expect(page.querySelector('.facts')?.textContent).toContain('not chosen');

@@ -6,12 +6,13 @@ import { PermanenceLabel } from '../../ui/permanence-label/permanence-label';
 import { PhotoView } from '../../ui/photo/photo';
 import { RichTextView } from '../../ui/rich-text/rich-text';
 import { StandingLabel } from '../../ui/standing-label/standing-label';
+import { AttachedWorksheet } from './attached-worksheet';
 import { acceptanceParts } from '../figures';
 
 /** One remedy: its facts, its cautions, then why, what is needed, the steps, and how to know that it worked. */
 @Component({
   selector: 'sl-fix-sheet',
-  imports: [CautionBox, PermanenceLabel, PhotoView, RichTextView, StandingLabel],
+  imports: [AttachedWorksheet, CautionBox, PermanenceLabel, PhotoView, RichTextView, StandingLabel],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './fix-sheet.html',
   styleUrl: './fix-sheet.scss',

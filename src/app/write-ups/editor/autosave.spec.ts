@@ -9,13 +9,27 @@ const titled = (title: string): EditionText => ({ content: { ...emptyContent, ti
 
 function draftOf(text: EditionText, version: number): Draft {
   return {
-    id: 7, writeUpId: 3, slug: null, number: 1, state: 'draft', author: { id: 1, displayName: 'Ada' }, changeNote: text.changeNote,
-    content: text.content, version, updatedAt: '2026-12-01T12:03:00.000Z', returnReason: null, photos: [],
+    id: 7,
+    writeUpId: 3,
+    slug: null,
+    number: 1,
+    state: 'draft',
+    author: { id: 1, displayName: 'Ada' },
+    changeNote: text.changeNote,
+    content: text.content,
+    version,
+    updatedAt: '2026-12-01T12:03:00.000Z',
+    returnReason: null,
+    photos: [],
   };
 }
 
 const problem = (status: number, type = 'internal', more: Partial<Problem> = {}): Problem => ({
-  type: `/problems/${type}`, title: type, status, detail: type, ...more,
+  type: `/problems/${type}`,
+  title: type,
+  status,
+  detail: type,
+  ...more,
 });
 
 /** An autosave whose saves are answered one after the other by `answers`; then by success. */
@@ -106,7 +120,9 @@ describe('saving while typing', () => {
 
   it('when somebody else has saved, then nothing more is sent until the texts are merged, and then on their version', () => {
     const theirs = draftOf(titled('theirs'), 5);
-    const { autosave, sent } = autosaveThat(() => throwError(() => problem(412, 'edition-moved-on', { current: theirs })));
+    const { autosave, sent } = autosaveThat(() =>
+      throwError(() => problem(412, 'edition-moved-on', { current: theirs })),
+    );
     autosave.note(titled('mine'));
     vi.advanceTimersByTime(savePause);
     expect(autosave.state()).toEqual({ kind: 'moved-on', theirs });

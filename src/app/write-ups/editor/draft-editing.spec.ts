@@ -11,8 +11,18 @@ import type { EditionText } from './edition-form';
 import { PartDirectory } from './part-directory';
 
 const draftWith = (content: Partial<EditionContent>, version = 1, number = 1): Draft => ({
-  id: 7, writeUpId: 3, slug: null, number, state: 'draft', author: { id: 1, displayName: 'Ada' }, changeNote: '',
-  content: { ...emptyContent, ...content }, version, updatedAt: '2026-12-01T12:03:00.000Z', returnReason: null, photos: [],
+  id: 7,
+  writeUpId: 3,
+  slug: null,
+  number,
+  state: 'draft',
+  author: { id: 1, displayName: 'Ada' },
+  changeNote: '',
+  content: { ...emptyContent, ...content },
+  version,
+  updatedAt: '2026-12-01T12:03:00.000Z',
+  returnReason: null,
+  photos: [],
 });
 
 function editingWith(options: { save?: () => Observable<Draft>; kept?: BackedUpText } = {}) {
@@ -26,12 +36,21 @@ function editingWith(options: { save?: () => Observable<Draft>; kept?: BackedUpT
         useValue: {
           save: (_id: number, text: EditionText, version: number) => {
             saves.push({ text, version });
-            return (saves.length === 1 && options.save?.()) || of({ ...draftWith(text.content, version + 1) });
+            return (
+              (saves.length === 1 && options.save?.()) || of({ ...draftWith(text.content, version + 1) })
+            );
           },
         },
       },
       { provide: PartDirectory, useValue: { learn: () => EMPTY } },
-      { provide: DraftBackup, useValue: { find: () => options.kept ?? null, keep: () => undefined, drop: (id: number) => dropped.push(id) } },
+      {
+        provide: DraftBackup,
+        useValue: {
+          find: () => options.kept ?? null,
+          keep: () => undefined,
+          drop: (id: number) => dropped.push(id),
+        },
+      },
     ],
   });
   return { editing: TestBed.inject(DraftEditing), saves, dropped };
@@ -43,7 +62,13 @@ describe('writing a draft', () => {
 
   it('when somebody else saved it, then both texts are kept: what is chosen goes on, the other is set aside', () => {
     const theirs = draftWith({ title: 'their title', cause: 'their cause' }, 4);
-    const movedOn = new ApiProblem({ type: '/problems/edition-moved-on', title: '', status: 412, detail: '', current: theirs });
+    const movedOn = new ApiProblem({
+      type: '/problems/edition-moved-on',
+      title: '',
+      status: 412,
+      detail: '',
+      current: theirs,
+    });
     const { editing, saves } = editingWith({ save: () => throwError(() => movedOn) });
     editing.open(draftWith({ title: 'old title' }));
     editing.form().controls.title.setValue('my title');
@@ -60,12 +85,19 @@ describe('writing a draft', () => {
     expect(editing.mergeRows()).toBeNull();
     expect(editing.form().getRawValue()).toMatchObject({ title: 'my title', cause: 'their cause' });
     expect(editing.setAside().map(({ row, side }) => row[side])).toEqual(['their title', '']);
-    expect(saves[1]).toMatchObject({ version: 4, text: { content: { title: 'my title', cause: 'their cause' } } });
+    expect(saves[1]).toMatchObject({
+      version: 4,
+      text: { content: { title: 'my title', cause: 'their cause' } },
+    });
     expect(editing.isSettled()).toBe(true);
   });
 
   it('when this browser kept a newer text of the same version, then it is back in the form and goes to the server', () => {
-    const kept = { version: 1, at: new Date('2026-12-01T12:04:00Z'), text: { content: { ...emptyContent, title: 'kept' }, changeNote: '' } };
+    const kept = {
+      version: 1,
+      at: new Date('2026-12-01T12:04:00Z'),
+      text: { content: { ...emptyContent, title: 'kept' }, changeNote: '' },
+    };
     const { editing, saves, dropped } = editingWith({ kept });
 
     editing.open(draftWith({ title: 'on the server' }));
@@ -78,7 +110,11 @@ describe('writing a draft', () => {
   });
 
   it('when this browser kept a text of an older version, then nothing is sent before somebody has chosen', () => {
-    const kept = { version: 1, at: new Date(), text: { content: { ...emptyContent, title: 'kept' }, changeNote: '' } };
+    const kept = {
+      version: 1,
+      at: new Date(),
+      text: { content: { ...emptyContent, title: 'kept' }, changeNote: '' },
+    };
     const { editing, saves } = editingWith({ kept });
 
     editing.open(draftWith({ title: 'on the server' }, 3));

@@ -11,11 +11,31 @@ const full: EditionContent = {
     },
   ],
   symptoms: ['rocks'],
-  readings: [{ key: 'reading-1', revisionId: 11, dimension: 'lip', value: 22.5, unit: 'mm', instrument: 'caliper', uncertainty: 0.02 }],
+  readings: [
+    {
+      key: 'reading-1',
+      revisionId: 11,
+      dimension: 'lip',
+      value: 22.5,
+      unit: 'mm',
+      instrument: 'caliper',
+      uncertainty: 0.02,
+    },
+  ],
   fixes: [
     {
-      key: 'fix-key-1', title: 'Coin', kind: 'shim', permanence: 'reversible', why: '', tools: ['caliper'], materials: ['coin'],
-      steps: [{ key: 'step-key-1', text: 'Put it in.', photoId: 5 }], revisionIds: [11], afterwards: ['flats'], afterwardsNote: '',
+      key: 'fix-key-1',
+      title: 'Coin',
+      kind: 'shim',
+      permanence: 'reversible',
+      why: '',
+      tools: ['caliper'],
+      materials: ['coin'],
+      steps: [{ key: 'step-key-1', text: 'Put it in.', photoId: 5 }],
+      revisionIds: [11],
+      afterwards: ['flats'],
+      afterwardsNote: '',
+      worksheet: null,
       acceptance: { quantity: 'tilt', comparison: 'at-most', value: 0.1, unit: 'deg' },
     },
   ],
@@ -24,7 +44,10 @@ const full: EditionContent = {
 
 describe('the form of an edition', () => {
   it('when a text goes into the form and comes out, then it says the same', () => {
-    expect(textOf(editionForm({ content: full, changeNote: 'why' }))).toEqual({ content: full, changeNote: 'why' });
+    expect(textOf(editionForm({ content: full, changeNote: 'why' }))).toEqual({
+      content: full,
+      changeNote: 'why',
+    });
   });
 
   it('when an acceptance figure lacks its value, then it is not part of the text but stays in the form', () => {

@@ -17,6 +17,7 @@ import type {
   Permanence,
   ReadingUnit,
 } from '../../../../shared/contract/vocabulary';
+import type { WorksheetRecord } from '../../../../shared/contract/worksheet';
 
 /** What is saved together: the text of the edition and the word on why it was changed. */
 export interface EditionText {
@@ -89,6 +90,7 @@ export const fixForm = (fix: Fix) =>
     afterwards: value<Afterwards[]>(fix.afterwards),
     afterwardsNote: words(fix.afterwardsNote),
     acceptance: acceptanceForm(fix.acceptance),
+    worksheet: value<WorksheetRecord | null>(fix.worksheet ?? null),
   });
 
 export const photoForm = (photo: PhotoUse) =>

@@ -8,15 +8,30 @@ const textOf = (content: Partial<EditionContent>, changeNote = ''): EditionText 
 });
 
 const fix = (key: string, title: string): Fix => ({
-  key, title, kind: null, permanence: null, why: '', tools: [], materials: [], steps: [], revisionIds: [], afterwards: [],
-  afterwardsNote: '', acceptance: null,
+  key,
+  title,
+  kind: null,
+  permanence: null,
+  why: '',
+  tools: [],
+  materials: [],
+  steps: [],
+  revisionIds: [],
+  afterwards: [],
+  afterwardsNote: '',
+  worksheet: null,
+  acceptance: null,
 });
 
 describe('two texts of one draft', () => {
   it('when only one side changed a field, then that side is taken without a dispute', () => {
     const base = textOf({ title: 'old', cause: 'old' });
 
-    const rows = mergeRows(base, textOf({ title: 'mine', cause: 'old' }), textOf({ title: 'old', cause: 'theirs' }));
+    const rows = mergeRows(
+      base,
+      textOf({ title: 'mine', cause: 'old' }),
+      textOf({ title: 'old', cause: 'theirs' }),
+    );
 
     expect(rows.map(({ id, choice, disputed }) => ({ id, choice, disputed }))).toEqual([
       { id: 'title', choice: 'mine', disputed: false },
@@ -27,12 +42,42 @@ describe('two texts of one draft', () => {
   it('when both changed a field, then it is disputed and mine is proposed', () => {
     const [row] = mergeRows(textOf({ cause: 'old' }), textOf({ cause: 'mine' }), textOf({ cause: 'theirs' }));
 
-    expect(row).toMatchObject({ id: 'cause', mine: 'mine', theirs: 'theirs', choice: 'mine', disputed: true });
+    expect(row).toMatchObject({
+      id: 'cause',
+      mine: 'mine',
+      theirs: 'theirs',
+      choice: 'mine',
+      disputed: true,
+    });
   });
 
   it('when both say the same, then there is nothing to choose, whatever the order of members', () => {
-    const mine = textOf({ readings: [{ key: 'reading-1', revisionId: null, dimension: 'lip', value: 1, unit: 'mm', instrument: 'caliper', uncertainty: null }] });
-    const theirs = textOf({ readings: [{ uncertainty: null, instrument: 'caliper', unit: 'mm', value: 1, dimension: 'lip', revisionId: null, key: 'reading-1' }] });
+    const mine = textOf({
+      readings: [
+        {
+          key: 'reading-1',
+          revisionId: null,
+          dimension: 'lip',
+          value: 1,
+          unit: 'mm',
+          instrument: 'caliper',
+          uncertainty: null,
+        },
+      ],
+    });
+    const theirs = textOf({
+      readings: [
+        {
+          uncertainty: null,
+          instrument: 'caliper',
+          unit: 'mm',
+          value: 1,
+          dimension: 'lip',
+          revisionId: null,
+          key: 'reading-1',
+        },
+      ],
+    });
 
     expect(mergeRows(textOf({}), mine, theirs)).toEqual([]);
   });
@@ -71,6 +116,8 @@ describe('two texts of one draft', () => {
       { id: 'changeNote', choice: 'theirs' },
     ]);
 
-    expect(merged).toEqual(textOf({ title: 'their title', cause: 'my cause', symptoms: ['slips'] }, 'their note'));
+    expect(merged).toEqual(
+      textOf({ title: 'their title', cause: 'my cause', symptoms: ['slips'] }, 'their note'),
+    );
   });
 });

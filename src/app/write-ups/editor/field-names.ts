@@ -29,6 +29,7 @@ const names: Record<string, string> = {
   steps: 'steps',
   afterwardsNote: 'note on afterwards',
   acceptance: 'acceptance figure',
+  worksheet: 'worksheet',
   photos: 'photo',
   alt: 'alternative text',
   caption: 'caption',

@@ -19,6 +19,7 @@ import { JointRevisions } from './joint-revisions';
 import { PassageField } from './passage-field';
 import { StepsFields } from './steps-fields';
 import { WordsField } from './words-field';
+import { WorksheetField } from './worksheet-field';
 
 /** What a permanence means for the owner, beside its word. */
 const permanences: { value: Permanence; label: string; means: string }[] = [
@@ -34,7 +35,7 @@ const permanences: { value: Permanence; label: string; means: string }[] = [
 /** One remedy: what it is, how permanent, how it is done, for which revisions, and how one knows that it worked. */
 @Component({
   selector: 'sl-fix-fields',
-  imports: [Field, Labelled, PassageField, ReactiveFormsModule, StepsFields, WordsField],
+  imports: [Field, Labelled, PassageField, ReactiveFormsModule, StepsFields, WordsField, WorksheetField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './fix-fields.html',
   styleUrl: './fix-fields.scss',

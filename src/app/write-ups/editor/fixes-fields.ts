@@ -77,6 +77,7 @@ export class FixesFields {
         afterwards: [],
         afterwardsNote: '',
         acceptance: null,
+        worksheet: null,
       }),
     );
   }

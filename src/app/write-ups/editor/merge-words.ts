@@ -87,6 +87,7 @@ function wordsOfFix(fix: Fix, names: Names): string {
     ]),
     acceptance &&
       `Acceptance: ${acceptance.quantity} ${acceptance.comparison.replace('-', ' ')} ${acceptance.value} ${readingUnitSymbols[acceptance.unit]}`,
+    fix.worksheet && `Worksheet: ${fix.worksheet.result.sentence}`,
   ];
   return lines.filter(Boolean).join('\n');
 }

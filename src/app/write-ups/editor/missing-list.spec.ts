@@ -22,7 +22,9 @@ describe('what is missing', () => {
   });
 
   it('when a line is followed, then its field is asked for', () => {
-    const { element, wanted } = listOf([{ path: 'fixes.0.kind', message: 'is not chosen', remedy: 'Choose one.' }]);
+    const { element, wanted } = listOf([
+      { path: 'fixes.0.kind', message: 'is not chosen', remedy: 'Choose one.' },
+    ]);
 
     const link = element.querySelector('a');
     link?.click();
