@@ -6,6 +6,7 @@ export const serverRoutes: ServerRoute[] = [
   { path: 'write-ups/new', renderMode: RenderMode.Client },
   { path: 'write-ups/:slug/edit', renderMode: RenderMode.Client },
   { path: 'hardware/propose', renderMode: RenderMode.Client },
+  { path: 'questions/new', renderMode: RenderMode.Client },
   { path: 'my/**', renderMode: RenderMode.Client },
   { path: 'drafts/**', renderMode: RenderMode.Client },
   { path: 'desk/**', renderMode: RenderMode.Client },

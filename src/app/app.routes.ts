@@ -42,6 +42,7 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./hardware/which-one/which-one-page').then((m) => m.WhichOnePage),
   },
   { path: 'parts/:slug', loadComponent: () => import('./hardware/part-page').then((m) => m.PartPage) },
+  { path: 'questions', loadChildren: () => import('./questions/questions.routes').then((m) => m.routes) },
   { path: 'worksheets', loadChildren: () => import('./worksheets/worksheets.routes').then((m) => m.routes) },
   {
     path: 'bench',

@@ -171,14 +171,17 @@ describe('replying', () => {
     expect(replyCount).toBe(2);
   });
 
-  it.each(['', '   ', 'x'.repeat(4001)])('is refused with its text named where that is empty or too long', async (text) => {
-    const slug = await ask();
-    const { status, body } = await other
-      .post(`/api/questions/${slug}/replies`)
-      .send({ text, worksheet: null });
-    expect([status, fieldsOf(body)]).toEqual([422, ['text']]);
-    expect((await page(slug)).replies).toEqual([]);
-  });
+  it.each(['', '   ', 'x'.repeat(4001)])(
+    'is refused with its text named where that is empty or too long',
+    async (text) => {
+      const slug = await ask();
+      const { status, body } = await other
+        .post(`/api/questions/${slug}/replies`)
+        .send({ text, worksheet: null });
+      expect([status, fieldsOf(body)]).toEqual([422, ['text']]);
+      expect((await page(slug)).replies).toEqual([]);
+    },
+  );
 
   it('finds no question at an address that nobody asked', async () => {
     const { status } = await other

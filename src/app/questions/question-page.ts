@@ -1,0 +1,91 @@
+import { DatePipe } from '@angular/common';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  effect,
+  inject,
+  linkedSignal,
+  signal,
+} from '@angular/core';
+import { ActivatedRoute, RouterLink } from '@angular/router';
+import { map } from 'rxjs';
+import type { Problem } from '../../../shared/contract/problem';
+import type { QuestionPage, Reply } from '../../../shared/contract/questions';
+import { instrumentWords, readingUnitSymbols } from '../../../shared/contract/vocabulary';
+import { toApiProblem } from '../core/api-problem';
+import { loadEach } from '../core/load';
+import { Session } from '../core/session';
+import { ShimloreTitles } from '../core/titles';
+import { LoadStateView } from '../ui/load-state/load-state';
+import { ProblemNote } from '../ui/problem-note/problem-note';
+import { RichTextView } from '../ui/rich-text/rich-text';
+import { QuestionParts } from './question-parts';
+import { Questions } from './questions';
+import { ReplyForm } from './reply-form';
+import { SettleForm } from './settle-form';
+import { WorksheetNote } from './worksheet-note';
+
+/** One question: its parts and readings first, then the words, then what others say. */
+@Component({
+  selector: 'sl-question-page',
+  imports: [
+    DatePipe,
+    LoadStateView,
+    ProblemNote,
+    QuestionParts,
+    ReplyForm,
+    RichTextView,
+    RouterLink,
+    SettleForm,
+    WorksheetNote,
+  ],
+  changeDetection: ChangeDetectionStrategy.OnPush,
+  templateUrl: './question-page.html',
+  styleUrl: './question-page.scss',
+})
+export class QuestionPageView {
+  private readonly questions = inject(Questions);
+  protected readonly session = inject(Session);
+  protected readonly units = readingUnitSymbols;
+  protected readonly instruments = instrumentWords;
+  protected readonly problem = signal<Problem | null>(null);
+  protected readonly loaded = loadEach(
+    inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug')!)),
+    (slug) => this.questions.read(slug),
+  );
+  /** As loaded, then as changed on this page. */
+  protected readonly question = linkedSignal<QuestionPage | null>(() => {
+    const now = this.loaded();
+    return now.state === 'ready' ? now.value : null;
+  });
+  protected readonly isAsker = computed(
+    () => this.question()?.person.id === this.session.account()?.id && this.session.account() !== null,
+  );
+
+  constructor() {
+    const titles = inject(ShimloreTitles);
+    effect(() => {
+      const now = this.loaded();
+      if (now.state === 'failed') titles.failed(now.problem);
+      if (now.state === 'ready')
+        titles.describe({ title: now.value.title, path: `/questions/${now.value.slug}` });
+    });
+  }
+
+  protected replied(reply: Reply): void {
+    this.question.update((before) => before && { ...before, replies: [...before.replies, reply] });
+  }
+
+  protected settled(question: QuestionPage): void {
+    this.question.set(question);
+  }
+
+  protected reopen(slug: string): void {
+    this.problem.set(null);
+    this.questions.reopen(slug).subscribe({
+      next: (question) => this.question.set(question),
+      error: (error: unknown) => this.problem.set(toApiProblem(error).problem),
+    });
+  }
+}
