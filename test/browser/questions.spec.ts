@@ -1,0 +1,77 @@
+import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
+import { emptySeat } from '../../shared/contract/worksheet.js';
+import { worksheetAddress } from '../../shared/contract/worksheet-address.js';
+import { expectAccessible } from './support/accessibility.js';
+import { startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
+
+let browser: TestBrowser;
+let opened: TestPage[] = [];
+
+beforeAll(async () => {
+  browser = await startBrowser();
+});
+afterEach(async () => {
+  await Promise.all(opened.map((page) => page.close()));
+  opened = [];
+});
+afterAll(async () => {
+  await browser.close();
+});
+
+async function openAs(account: string): Promise<TestPage> {
+  const page = await browser.open('phone');
+  opened.push(page);
+  await page.signInAs(account);
+  return page;
+}
+
+const sheet = worksheetAddress('seat', {
+  ...emptySeat,
+  bossDiameter: 32.1,
+  bossHeight: 3,
+  recessDiameter: 32,
+  recessDepth: 2,
+  plateWidth: 40,
+});
+
+describe('a member whose parts do not fit', () => {
+  it('asks from the bench with a worksheet, is answered, and says which fix settled it', async () => {
+    const asker = await openAs('owner');
+    await asker.visit('/questions/new');
+    await expectAccessible(asker.page);
+    await asker.page.getByLabel('Title').fill('The belt bracket rocks on its lip');
+    await asker.page.getByLabel('What happens').fill('It rocks about the lip, whatever I tighten.');
+    await asker.page.getByRole('button', { name: 'Add a reading' }).click();
+    await asker.page.getByLabel('Dimension').fill('lip diameter');
+    await asker.page.getByRole('spinbutton', { name: 'Reading' }).fill('32.1');
+    await asker.page.getByLabel('Link of a worksheet').fill(`${browser.address}${sheet}`);
+    await asker.page.getByText('Write-ups that may answer it already').waitFor();
+    await asker.page.getByRole('button', { name: 'Ask', exact: true }).click();
+    await asker.page.getByRole('heading', { name: 'The belt bracket rocks on its lip' }).waitFor();
+    const path = new URL(asker.page.url()).pathname;
+    const attached = asker.page.getByRole('link', { name: 'Open the worksheet with these figures' });
+    expect(await attached.getAttribute('href')).toContain('bossDiameter=32.1');
+
+    const other = await openAs('author');
+    await other.visit(path);
+    await other.page.getByLabel('Your reply').fill('A disc behind the plate *did* it for me.');
+    await other.page.getByRole('button', { name: 'Reply' }).click();
+    await other.page.locator('.replies em', { hasText: 'did' }).waitFor();
+
+    await asker.visit(path);
+    await asker.page.locator('.replies em', { hasText: 'did' }).waitFor();
+    await asker.page.getByLabel('Which write-up helped?').fill('belt bracket lip');
+    await asker.page.getByRole('button', { name: 'Find' }).click();
+    await asker.page.locator('sl-settle-form li button').first().click();
+    await asker.page.locator('sl-settle-form fieldset button').first().click();
+    const settled = asker.page.locator('.settled');
+    await settled.waitFor();
+    expect(await settled.textContent()).toMatch(/Settled by: .+ in /);
+    await expectAccessible(asker.page);
+
+    await asker.visit('/questions?open=false');
+    await asker.page.getByRole('link', { name: 'The belt bracket rocks on its lip' }).waitFor();
+    await expectAccessible(asker.page);
+    expect([...asker.errors(), ...other.errors()]).toEqual([]);
+  });
+});
