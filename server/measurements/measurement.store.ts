@@ -3,6 +3,7 @@ import type { Feature, RevisionRef } from '../../shared/contract/hardware.js';
 import type { DimensionConsensus, MeasurementUnit } from '../../shared/contract/measurements.js';
 import type { Photo } from '../../shared/contract/photos.js';
 import type { Instrument } from '../../shared/contract/vocabulary.js';
+import { coverage95 } from '../../shared/fit/dimension.js';
 import type { Process } from '../../shared/statistics/consensus.js';
 import { fromJson } from '../rows.js';
 
@@ -225,11 +226,8 @@ interface ConsensusRecord extends Place {
   unitSlips: number;
 }
 
-/** Half width of a 95 % interval of a normal distribution in standard deviations. */
-const z95 = 1.959963984540054;
-
 /** Consensus rows with the columns that `toConsensus` reads. */
-export function consensusRows(knex: Knex): Knex.QueryBuilder {
+function consensusRows(knex: Knex): Knex.QueryBuilder {
   return knex('consensus').select('dimension', 'count', 'mean', 'uncertainty', 'thin', {
     featureId: 'feature_id',
     revisionId: 'revision_id',
@@ -247,8 +245,8 @@ function toConsensus(row: ConsensusRecord): Place & { consensus: DimensionConsen
     consensus: {
       ...figures,
       thin: Boolean(figures.thin),
-      low: figures.mean - z95 * figures.uncertainty,
-      high: figures.mean + z95 * figures.uncertainty,
+      low: figures.mean - coverage95 * figures.uncertainty,
+      high: figures.mean + coverage95 * figures.uncertainty,
     },
   };
 }

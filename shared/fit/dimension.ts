@@ -1,3 +1,7 @@
+import { coverage95 } from '../statistics/normal-distribution.js';
+
+export { coverage95 };
+
 /** Where a figure comes from; shown beside it. */
 export type DimensionSource =
   | { readonly kind: 'consensus'; readonly readings: number; readonly thin: boolean }
@@ -17,9 +21,6 @@ export interface Figure {
   readonly uncertainty: number;
   readonly interval: readonly [number, number];
 }
-
-/** Coverage factor of a two-sided 95 % interval of a normal distribution. */
-export const coverage95 = 1.959963984540054;
 
 export function figure(value: number, uncertainty: number): Figure {
   return {

@@ -1,5 +1,6 @@
 import { huberLimit, huberMean } from './huber-mean.js';
 import { madToDeviation, medianDeviation, medianOf } from './median.js';
+import { coverage95 } from './normal-distribution.js';
 import type { Result } from './random-effects.js';
 
 /** How a part is made; sets the spread to expect between parts of one revision where readings do not tell. */
@@ -29,8 +30,6 @@ export interface Consensus {
 
 /** A reading further than this many scales from the median is gross: a digit lost, another dimension read. */
 const grossLimit = 10;
-const z95 = 1.959963984540054;
-
 /**
  * Many people's readings of one dimension to one value, robust against the odd wrong one.
  *
@@ -61,7 +60,7 @@ export function consensusOf(readings: readonly Result[], usualSpread: number): C
     uncertainty,
     // A single reading's uncertainty has the spread between parts in it already.
     predictionSpread: counted.length === 1 ? uncertainty : Math.hypot(uncertainty, spread),
-    interval: [robust.mean - z95 * uncertainty, robust.mean + z95 * uncertainty],
+    interval: [robust.mean - coverage95 * uncertainty, robust.mean + coverage95 * uncertainty],
     thin: counted.length <= 2,
     weights: readings.map((_, index) => (left.has(index) ? 0 : robust.weights[taken++]!)),
     unitSlips,

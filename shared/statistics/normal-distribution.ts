@@ -54,3 +54,6 @@ export function normalQuantile(p: number): number {
   }
   return z;
 }
+
+/** Coverage factor of a two-sided 95 % interval of a normal distribution. */
+export const coverage95 = 1.959963984540054;
