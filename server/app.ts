@@ -5,6 +5,7 @@ import type { Transporter } from 'nodemailer';
 import type { Logger } from 'pino';
 import { routes } from '../shared/contract/routes.js';
 import { createAccounts } from './accounts/accounts.js';
+import { createAuditLog } from './audit/audit.js';
 import { createBench } from './bench/bench.js';
 import type { Settings } from './config.js';
 import { createHardware } from './hardware/hardware.js';
@@ -28,6 +29,7 @@ import { createQuestions } from './questions/questions.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
 import { renderText } from './text/render-text.js';
+import { createHappenings } from './watches/happenings.js';
 import { createWhichOne } from './which-one/which-one.js';
 import type { Worker } from './worker.js';
 import { createWorksheets } from './worksheets/worksheets.js';
@@ -67,6 +69,8 @@ export function createApp(around: Surroundings): Composition {
   const csrf = createCsrf({ secret, secure });
   const limits = around.rateLimits ? createRateLimits() : noRateLimits;
 
+  const audit = createAuditLog({ clock });
+  const happenings = createHappenings({ clock });
   const mail = createMail({
     knex,
     transport: around.mailTransport,
@@ -76,7 +80,7 @@ export function createApp(around: Surroundings): Composition {
     logger,
     secret,
   });
-  const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf });
+  const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf, audit });
   const sessions = createSessions({ knex, secret, secure, authenticator: accounts.authenticator });
   const photos = createPhotos({ knex, photoDir: settings.PHOTO_DIR, clock, limits });
   const hardware = createHardware({ knex });
@@ -96,6 +100,7 @@ export function createApp(around: Surroundings): Composition {
     photos: photos.service,
     renderText,
     searchOutbox: search.outbox,
+    happenings,
   });
   const moderation = createModeration({
     knex,
@@ -103,8 +108,17 @@ export function createApp(around: Surroundings): Composition {
     writeUps: writeUps.service,
     mail: mail.queue,
     searchOutbox: search.outbox,
+    audit,
+    happenings,
   });
-  const measurements = createMeasurements({ knex, clock, hardware: hardware.service, limits });
+  const measurements = createMeasurements({
+    knex,
+    clock,
+    hardware: hardware.service,
+    limits,
+    audit,
+    happenings,
+  });
   const whichOne = createWhichOne({ knex, clock, hardware: hardware.service });
   const proposals = createProposals({
     knex,
@@ -113,6 +127,8 @@ export function createApp(around: Surroundings): Composition {
     mail: mail.queue,
     measurements: measurements.service,
     searchOutbox: search.outbox,
+    audit,
+    happenings,
   });
   const joints = createJoints({
     knex,

@@ -28,19 +28,19 @@ interface Rows {
   cautions: object[];
   trials: object[];
   trialRevisions: object[];
-  decisions: object[];
+  audit: object[];
   outbox: object[];
 }
 
-/** Inserts write-ups with editions, links, fixes, cautions, trials, desk decisions and the rows that have them indexed. */
+/** Inserts write-ups with editions, links, fixes, cautions, trials, audit entries and the rows that have them indexed. */
 export async function seedWriteUps(
   trx: Knex,
   parts: { accounts: ReadonlyMap<string, number>; catalogue: Catalogue; photos: PhotoIds; now: Date },
 ): Promise<void> {
   const { accounts, catalogue, photos, now } = parts;
-  const [writeUpId, editionId, fixId, trialId] = (await Promise.all(
-    ['write_ups', 'editions', 'fixes', 'trials'].map((table) => idsFrom(trx, table)),
-  )) as [() => number, () => number, () => number, () => number];
+  const [writeUpId, editionId, fixId, trialId, cautionId] = (await Promise.all(
+    ['write_ups', 'editions', 'fixes', 'trials', 'cautions'].map((table) => idsFrom(trx, table)),
+  )) as [() => number, () => number, () => number, () => number, () => number];
   const rows: Rows = {
     writeUps: [],
     publishedEditions: [],
@@ -55,7 +55,7 @@ export async function seedWriteUps(
     cautions: [],
     trials: [],
     trialRevisions: [],
-    decisions: [],
+    audit: [],
     outbox: [],
   };
   const next = seededNumbers(60);
@@ -117,22 +117,26 @@ export async function seedWriteUps(
         rows.publishedEditions = rows.publishedEditions
           .filter((entry) => entry.id !== id)
           .concat({ id, edition: edition_id });
-        addCautions(edition_id, cautions[number - 1] ?? [], new Date(at.getTime() - hour));
-        rows.decisions.push({
-          edition_id,
-          moderator_id: moderator,
-          decision: 'published',
+        addCautions(cautions[number - 1] ?? [], new Date(at.getTime() - hour));
+        rows.audit.push({
+          at,
+          actor_id: moderator,
+          action: 'edition-published',
+          subject_kind: 'edition',
+          subject_id: edition_id,
+          subject_name: item.content.title,
           reason: '',
-          created_at: at,
         });
       }
       if (item.state === 'returned') {
-        rows.decisions.push({
-          edition_id,
-          moderator_id: moderator,
-          decision: 'returned',
+        rows.audit.push({
+          at,
+          actor_id: moderator,
+          action: 'edition-returned',
+          subject_kind: 'edition',
+          subject_id: edition_id,
+          subject_name: item.content.title,
           reason: item.returnReason ?? '',
-          created_at: at,
         });
       }
     }
@@ -164,10 +168,12 @@ export async function seedWriteUps(
       }
     }
 
-    function addCautions(edition_id: number, planned: readonly PlannedCaution[], at: Date): void {
+    function addCautions(planned: readonly PlannedCaution[], at: Date): void {
       for (const { slug, fixKey } of planned) {
         const entry = libraryEntry(slug);
+        const caution_id = cautionId();
         rows.cautions.push({
+          id: caution_id,
           write_up_id: id,
           fix_id: fixKey === null ? null : known(fixIds, fixKey),
           library_id: known(catalogue.cautions, slug),
@@ -179,12 +185,15 @@ export async function seedWriteUps(
           placed_by: moderator,
           placed_at: at,
         });
-        rows.decisions.push({
-          edition_id,
-          moderator_id: moderator,
-          decision: 'caution-placed',
-          reason: entry.name,
-          created_at: at,
+        rows.audit.push({
+          at,
+          actor_id: moderator,
+          action: 'caution-placed',
+          subject_kind: 'caution',
+          subject_id: caution_id,
+          subject_name: entry.hazard,
+          reason: '',
+          details: JSON.stringify({ writeUpId: id, fixKey }),
         });
       }
     }
@@ -280,6 +289,6 @@ async function insertAll(trx: Knex, rows: Rows): Promise<void> {
   await insertRows(trx, 'cautions', rows.cautions);
   await insertRows(trx, 'trials', rows.trials);
   await insertRows(trx, 'trial_revisions', rows.trialRevisions);
-  await insertRows(trx, 'desk_decisions', rows.decisions);
+  await insertRows(trx, 'audit_log', rows.audit);
   await insertRows(trx, 'search_outbox', rows.outbox);
 }

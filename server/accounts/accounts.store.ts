@@ -106,19 +106,6 @@ export async function changeAccount(trx: Knex, id: number, change: AccountChange
   if (Object.keys(given).length > 0) await trx('accounts').where({ id }).update(given);
 }
 
-export async function addRoleChange(
-  trx: Knex,
-  change: { accountId: number; changedBy: number; from: AccountRole; to: AccountRole; at: Date },
-): Promise<void> {
-  await trx('role_changes').insert({
-    account_id: change.accountId,
-    changed_by: change.changedBy,
-    from_role: change.from,
-    to_role: change.to,
-    created_at: change.at,
-  });
-}
-
 /** Accounts from the newest on, those before `beforeId` only; `words` is looked for in address and name. */
 export async function accountsNewestFirst(
   db: Knex,

@@ -1,3 +1,4 @@
+import type { AuditLog } from '../audit/audit.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { Csrf } from '../http/csrf.js';
 import { createAuthenticator, type Authenticator } from '../http/session.js';
@@ -12,7 +13,7 @@ export interface Accounts {
   readonly authenticator: Authenticator;
 }
 
-export function createAccounts(needs: EntryDependencies & { csrf: Csrf }): Accounts {
+export function createAccounts(needs: EntryDependencies & { csrf: Csrf; audit: AuditLog }): Accounts {
   const entry = createEntryService(needs);
   const people = createPeopleService(needs);
   const authenticator = createAuthenticator({

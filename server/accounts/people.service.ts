@@ -6,21 +6,16 @@ import type { AccountRole } from '../../shared/contract/vocabulary.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { NotAllowed, NotFound } from '../http/problems.js';
 import type { SessionAccount } from '../http/session.js';
+import type { AuditLog } from '../audit/audit.js';
 import { accountRow, accountView } from './account-view.js';
-import {
-  accountById,
-  accountsNewestFirst,
-  addRoleChange,
-  changeAccount,
-  lockedAccountById,
-} from './accounts.store.js';
+import { accountById, accountsNewestFirst, changeAccount, lockedAccountById } from './accounts.store.js';
 
 const ListKey = z.tuple([Id]);
 
 export type PeopleService = ReturnType<typeof createPeopleService>;
 
 /** The accounts there are: each person's own, and the administrator's view of all. */
-export function createPeopleService({ knex, clock }: { knex: Knex; clock: () => Date }) {
+export function createPeopleService({ knex, audit }: { knex: Knex; audit: AuditLog }) {
   return {
     /** What every request needs to know of its caller; undefined once the account is gone. */
     async findAccount(id: number): Promise<SessionAccount | undefined> {
@@ -65,7 +60,12 @@ export function createPeopleService({ knex, clock }: { knex: Knex; clock: () => 
         if (!account) throw new NotFound('There is no such account.', 'Look it up in the list of accounts.');
         if (account.role !== role) {
           await changeAccount(trx, id, { role });
-          await addRoleChange(trx, { accountId: id, changedBy, from: account.role, to: role, at: clock() });
+          await audit.note(trx, {
+            actorId: changedBy,
+            action: 'role-changed',
+            subject: { kind: 'account', id, name: account.displayName },
+            details: { from: account.role, to: role },
+          });
         }
         return accountRow({ ...account, role });
       });

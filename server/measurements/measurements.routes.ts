@@ -17,6 +17,8 @@ export function measurementBindings(measurements: MeasurementService, limits: Ra
     bind(routes.setAsideMeasurement, ({ params, caller, body }) =>
       measurements.setAside(params.id, memberOf(caller).accountId, body.reason),
     ),
-    bind(routes.takeBackMeasurement, ({ params }) => measurements.takeBack(params.id)),
+    bind(routes.takeBackMeasurement, ({ params, caller }) =>
+      measurements.takeBack(params.id, memberOf(caller).accountId),
+    ),
   ];
 }

@@ -11,9 +11,11 @@ import { dimensionSpec, type DimensionSpec } from '../../shared/fit/feature-dime
 import { usualUncertainty } from '../../shared/fit/instruments.js';
 import { isUnitSlip, sayOf } from '../../shared/statistics/consensus.js';
 import { typeA } from '../../shared/statistics/summary.js';
+import type { AuditLog } from '../audit/audit.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
 import { groupBy } from '../rows.js';
+import type { Happenings } from '../watches/happenings.js';
 import { dimensionConsensus } from './consensus.js';
 import type { FeatureRow, MeasurementRow, MeasurementStore, Place } from './measurement.store.js';
 
@@ -32,8 +34,10 @@ export function createMeasurementService(around: {
   clock: () => Date;
   hardware: HardwareService;
   store: MeasurementStore;
+  audit: AuditLog;
+  happenings: Happenings;
 }) {
-  const { knex, clock, hardware, store } = around;
+  const { knex, clock, hardware, store, audit, happenings } = around;
 
   /** Makes the consensus of a place anew; the feature must be held. */
   async function refresh(place: Place, feature: FeatureRow, trx: Knex): Promise<DimensionConsensus | null> {
@@ -46,14 +50,23 @@ export function createMeasurementService(around: {
 
   async function decide(
     id: number,
-    by: { accountId: number; reason: string } | null,
+    actorId: number,
+    reason: string | null,
   ): Promise<{ consensus: DimensionConsensus | null }> {
     return knex.transaction(async (trx) => {
       const measurement = await store.byId(id, trx);
       if (!measurement) throw new NotFound('There is no such reading.');
       const feature = (await store.holdFeature(measurement.featureId, trx))!;
-      if (by && measurement.setAside) throw new AlreadyThere('That reading is set aside already.');
-      await store.setAside(id, by && { ...by, at: clock() }, trx);
+      if (reason !== null && measurement.setAside)
+        throw new AlreadyThere('That reading is set aside already.');
+      const by = reason === null ? null : { accountId: actorId, reason, at: clock() };
+      await store.setAside(id, by, trx);
+      await audit.note(trx, {
+        actorId,
+        action: by ? 'reading-set-aside' : 'reading-taken-back',
+        subject: { kind: 'measurement', id, name: `${measurement.dimension} of ${feature.name}` },
+        reason: reason ?? '',
+      });
       return { consensus: await refresh(measurement, feature, trx) };
     });
   }
@@ -172,6 +185,15 @@ export function createMeasurementService(around: {
           trx,
         );
         const consensus = (await refresh(input, feature, trx))!;
+        const part = (await hardware.partsByIds([feature.partId])).get(feature.partId)!;
+        await happenings.add(trx, {
+          kind: 'reading-recorded',
+          key: `reading-recorded:${id}`,
+          title: `Reading: ${spec.label} of ${feature.name} on ${part.name}`,
+          path: `/parts/${part.slug}`,
+          actorId: accountId,
+          about: { parts: [feature.partId], revisions: [input.revisionId] },
+        });
         return { measurement: toMeasurement((await store.byId(id, trx))!, consensus), consensus };
       });
     },
@@ -199,11 +221,11 @@ export function createMeasurementService(around: {
       accountId: number,
       reason: string,
     ): Promise<{ consensus: DimensionConsensus | null }> {
-      return decide(id, { accountId, reason });
+      return decide(id, accountId, reason);
     },
 
-    takeBack(id: number): Promise<{ consensus: DimensionConsensus | null }> {
-      return decide(id, null);
+    takeBack(id: number, accountId: number): Promise<{ consensus: DimensionConsensus | null }> {
+      return decide(id, accountId, null);
     },
   };
 }

@@ -1,7 +1,9 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
+import type { Happenings } from '../watches/happenings.js';
 import { createMeasurementStore } from './measurement.store.js';
 import { measurementBindings } from './measurements.routes.js';
 import {
@@ -18,6 +20,8 @@ export function createMeasurements(around: {
   clock: () => Date;
   hardware: HardwareService;
   limits: RateLimits;
+  audit: AuditLog;
+  happenings: Happenings;
 }): {
   bindings: RouteBinding[];
   service: MeasurementService;

@@ -1,19 +1,21 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import type { LibraryCaution, PlaceCaution } from '../../shared/contract/moderation.js';
 import type { Caution } from '../../shared/contract/write-ups.js';
 import { FieldNotValid, NotFound } from '../http/problems.js';
+import type { Happenings } from '../watches/happenings.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { CautionMissing, openHazards } from './caution-missing.js';
 import { noSuchEdition } from './desk.service.js';
-import type { DeskStore } from './desk.store.js';
 import type { CautionWords, PlacedCautionStore } from './placed-caution.store.js';
 
 export interface CautionParts {
   readonly knex: Knex;
   readonly clock: () => Date;
   readonly writeUps: WriteUpService;
-  readonly desk: DeskStore;
   readonly placed: PlacedCautionStore;
+  readonly audit: AuditLog;
+  readonly happenings: Happenings;
 }
 
 export type CautionService = ReturnType<typeof createCautionService>;
@@ -22,7 +24,7 @@ export type CautionService = ReturnType<typeof createCautionService>;
  * Cautions hang on a write-up or on one of its fixes, not on an edition: whatever an author writes next, they stay until a
  * moderator takes them off.
  */
-export function createCautionService({ knex, clock, writeUps, desk, placed }: CautionParts) {
+export function createCautionService({ knex, clock, writeUps, placed, audit, happenings }: CautionParts) {
   return {
     listLibraryCautions(): Promise<LibraryCaution[]> {
       return placed.library();
@@ -61,13 +63,13 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
           placedBy: moderatorId,
           at,
         });
-        await desk.noteDecision(trx, {
-          editionId,
-          moderatorId,
-          decision: 'caution-placed',
-          reason: words.hazard,
-          at,
+        await note(trx, 'caution-placed', moderatorId, {
+          id: caution,
+          writeUpId,
+          fixKey,
+          hazard: words.hazard,
         });
+        await tell(trx, 'caution-placed', moderatorId, { id: caution, writeUpId, fixKey, ...words });
         return caution;
       });
       return { id, fixKey, ...words };
@@ -78,7 +80,16 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
       const before = await withHeldCaution(id, async (trx, writeUpId, caution, others) => {
         await demandAnswered(trx, writeUpId, [...others, caution], [...others, { ...caution, ...words }]);
         await placed.reword(trx, id, words);
-        await note(trx, writeUpId, moderatorId, 'caution-changed', `${caution.hazard} → ${words.hazard}`);
+        await note(
+          trx,
+          'caution-changed',
+          moderatorId,
+          { ...caution, writeUpId, hazard: words.hazard },
+          {
+            before: caution.hazard,
+          },
+        );
+        await tell(trx, 'caution-changed', moderatorId, { ...caution, ...words, writeUpId });
         return caution;
       });
       return { ...before, ...words };
@@ -89,7 +100,7 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
       await withHeldCaution(id, async (trx, writeUpId, caution, others) => {
         await demandAnswered(trx, writeUpId, [...others, caution], others);
         await placed.takeOff(trx, id, clock());
-        await note(trx, writeUpId, moderatorId, 'caution-removed', caution.hazard);
+        await note(trx, 'caution-removed', moderatorId, { ...caution, writeUpId });
       });
     },
   };
@@ -133,15 +144,43 @@ export function createCautionService({ knex, clock, writeUps, desk, placed }: Ca
     throw new CautionMissing('The published edition needs this caution.', remedy, content, opened);
   }
 
-  async function note(
+  function note(
     trx: Knex,
-    writeUpId: number,
+    action: 'caution-placed' | 'caution-changed' | 'caution-removed',
     moderatorId: number,
-    decision: 'caution-changed' | 'caution-removed',
-    reason: string,
+    caution: { id: number; writeUpId: number; fixKey: string | null; hazard: string },
+    more: Record<string, unknown> = {},
   ): Promise<void> {
-    const editionId = await desk.editionForNotes(trx, writeUpId);
-    await desk.noteDecision(trx, { editionId, moderatorId, decision, reason, at: clock() });
+    const { id, writeUpId, fixKey, hazard } = caution;
+    return audit.note(trx, {
+      actorId: moderatorId,
+      action,
+      subject: { kind: 'caution', id, name: hazard },
+      details: { writeUpId, fixKey, ...more },
+    });
+  }
+
+  /** Only of a published write-up; whoever tried the fix is told at once. */
+  async function tell(
+    trx: Knex,
+    kind: 'caution-placed' | 'caution-changed',
+    moderatorId: number,
+    caution: CautionWords & { id: number; writeUpId: number; fixKey: string | null },
+  ): Promise<void> {
+    const { id, writeUpId, fixKey, signalWord, hazard, consequence, avoidance } = caution;
+    const writeUp = await writeUps.publishedRef(trx, writeUpId);
+    if (!writeUp) return;
+    const tried = await writeUps.triersOf(trx, writeUpId, fixKey);
+    await happenings.add(trx, {
+      kind,
+      key: `${kind}:${id}:${clock().getTime()}`,
+      title: `${signalWord.toUpperCase()}: ${hazard}`,
+      text: `On “${writeUp.title}”: ${consequence} ${avoidance}`,
+      path: `/write-ups/${writeUp.slug}`,
+      actorId: moderatorId,
+      about: { writeUps: [writeUpId] },
+      people: tried.map((accountId) => ({ accountId, atOnce: true })),
+    });
   }
 }
 

@@ -1,5 +1,8 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import { missingFromContent } from '../../shared/contract/edition-completeness.js';
+import type { Happenings } from '../watches/happenings.js';
+import { partIdsOf, revisionIdsOf } from '../write-ups/edition-links.js';
 import { NotComplete } from '../write-ups/edition-problems.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
@@ -26,12 +29,23 @@ export interface DecisionParts {
   readonly desk: DeskStore;
   readonly mail: DeskMail;
   readonly searchOutbox: IndexNotice;
+  readonly audit: AuditLog;
+  readonly happenings: Happenings;
 }
 
 export type DecisionService = ReturnType<typeof createDecisionService>;
 
 /** A moderator's word on an edition. Each is one transaction: of two at once, the second finds the edition decided. */
-export function createDecisionService({ knex, clock, writeUps, desk, mail, searchOutbox }: DecisionParts) {
+export function createDecisionService({
+  knex,
+  clock,
+  writeUps,
+  desk,
+  mail,
+  searchOutbox,
+  audit,
+  happenings,
+}: DecisionParts) {
   return {
     /** NotComplete, CautionMissing or WrongState say what stands in the way; nothing is changed then. */
     async publishEdition(
@@ -57,7 +71,21 @@ export function createDecisionService({ knex, clock, writeUps, desk, mail, searc
         }
         const at = clock();
         const { slug, number } = await writeUps.publishHeld(trx, held, at);
-        await desk.noteDecision(trx, { editionId, moderatorId, decision: 'published', reason: note, at });
+        await audit.note(trx, {
+          actorId: moderatorId,
+          action: 'edition-published',
+          subject: { kind: 'edition', id: editionId, name: content.title },
+          reason: note,
+        });
+        await happenings.add(trx, {
+          kind: 'edition-published',
+          key: `edition-published:${editionId}`,
+          title: number === 1 ? `New: ${content.title}` : `Edition ${number}: ${content.title}`,
+          text: held.edition.changeNote || content.summary,
+          path: `/write-ups/${slug}`,
+          actorId: authorId,
+          about: { parts: partIdsOf(content), revisions: revisionIdsOf(content), writeUps: [writeUpId] },
+        });
         await searchOutbox.add(trx, writeUpId);
         await mail.queueEditionPublished(trx, { authorId, editionId, number, title: content.title, slug });
         return { slug, number };
@@ -69,9 +97,13 @@ export function createDecisionService({ knex, clock, writeUps, desk, mail, searc
       await knex.transaction(async (trx) => {
         const { edition } = await writeUps.holdSubmitted(trx, writeUpId, editionId);
         const { authorId, number, content } = edition;
-        const at = clock();
-        await desk.markReturned(trx, editionId, reason, at);
-        await desk.noteDecision(trx, { editionId, moderatorId, decision: 'returned', reason, at });
+        await desk.markReturned(trx, editionId, reason, clock());
+        await audit.note(trx, {
+          actorId: moderatorId,
+          action: 'edition-returned',
+          subject: { kind: 'edition', id: editionId, name: content.title },
+          reason,
+        });
         await mail.queueEditionReturned(trx, { authorId, editionId, number, title: content.title, reason });
       });
     },

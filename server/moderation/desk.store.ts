@@ -15,8 +15,6 @@ export interface WaitingRow {
   readonly content: EditionContent;
 }
 
-export type Decision = 'published' | 'returned' | 'caution-placed' | 'caution-changed' | 'caution-removed';
-
 export type DeskStore = ReturnType<typeof createDeskStore>;
 
 export function createDeskStore(knex: Knex) {
@@ -76,29 +74,6 @@ export function createDeskStore(knex: Knex) {
           content: fromJson<EditionContent>(row.content),
         }
       );
-    },
-
-    /** The edition that a decision on a write-up is noted under: the one on the desk, else the published one, else the newest. */
-    async editionForNotes(trx: Knex, writeUpId: number): Promise<number> {
-      const row = await trx('editions as e')
-        .join('write_ups as w', 'w.id', 'e.write_up_id')
-        .where('e.write_up_id', writeUpId)
-        .orderByRaw("e.state = 'submitted' DESC, e.id = w.published_edition_id DESC, e.id DESC")
-        .first('e.id');
-      return row.id;
-    },
-
-    async noteDecision(
-      trx: Knex,
-      decision: { editionId: number; moderatorId: number; decision: Decision; reason: string; at: Date },
-    ): Promise<void> {
-      await trx('desk_decisions').insert({
-        edition_id: decision.editionId,
-        moderator_id: decision.moderatorId,
-        decision: decision.decision,
-        reason: decision.reason,
-        created_at: decision.at,
-      });
     },
 
     async markReturned(trx: Knex, editionId: number, reason: string, at: Date): Promise<void> {

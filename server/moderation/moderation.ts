@@ -1,5 +1,7 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import type { RouteBinding } from '../http/binding.js';
+import type { Happenings } from '../watches/happenings.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { createCautionService } from './caution.service.js';
@@ -15,6 +17,8 @@ export interface ModerationSurroundings {
   readonly writeUps: WriteUpService;
   readonly mail: DeskMail;
   readonly searchOutbox: IndexNotice;
+  readonly audit: AuditLog;
+  readonly happenings: Happenings;
 }
 
 /** The moderators' desk: queue, cautions, decisions. */

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import type { Merge } from '../../shared/contract/proposals.js';
 import { FieldNotValid } from '../http/problems.js';
 import type { MeasurementService } from '../measurements/measurements.js';
@@ -29,11 +30,11 @@ interface Plan {
 /** Puts together what is twice in the catalogue. Each merge is one transaction: it is done whole or not at all. */
 export function createMergeService(around: {
   knex: Knex;
-  clock: () => Date;
+  audit: AuditLog;
   measurements: MeasurementService;
   searchOutbox: IndexNotices;
 }) {
-  const { knex, clock, measurements, searchOutbox } = around;
+  const { knex, audit, measurements, searchOutbox } = around;
 
   return {
     /** FieldNotValid for what is not there or does not go together. Returns the address of the part that stays. */
@@ -46,13 +47,11 @@ export function createMergeService(around: {
         const plan = await planOf(trx, wish);
         const writeUps = await store.writeUpsOn(trx, [...plan.parts.keys(), plan.part.id]);
         await carryOut(trx, plan);
-        await store.note(trx, {
-          kind: wish.kind,
-          from: wish.from,
-          fromName: plan.fromName,
-          into: wish.into,
-          by: moderatorId,
-          at: clock(),
+        await audit.note(trx, {
+          actorId: moderatorId,
+          action: 'merged',
+          subject: { kind: wish.kind, id: wish.from, name: plan.fromName },
+          details: { into: wish.into, part: plan.part.slug },
         });
         await searchOutbox.addAll(trx, writeUps);
         return { slug: plan.part.slug };

@@ -1,6 +1,5 @@
 import type { Knex } from 'knex';
 import type { EditionContent } from '../../shared/contract/edition-content.js';
-import type { Merge } from '../../shared/contract/proposals.js';
 import type { FeatureKind } from '../../shared/contract/vocabulary.js';
 import { fromJson, groupBy } from '../rows.js';
 import { renameInContent, type Renamed } from './rename-in-content.js';
@@ -190,19 +189,5 @@ export const mergeStore = {
   /** From now on the address leads to that part. */
   async redirect(trx: Knex, slug: string, partId: number): Promise<void> {
     await trx('part_redirects').insert({ slug, part_id: partId });
-  },
-
-  async note(
-    trx: Knex,
-    merge: { kind: Merge['kind']; from: number; fromName: string; into: number; by: number; at: Date },
-  ): Promise<void> {
-    await trx('hardware_merges').insert({
-      kind: merge.kind,
-      from_id: merge.from,
-      from_name: merge.fromName,
-      into_id: merge.into,
-      moderator_id: merge.by,
-      created_at: merge.at,
-    });
   },
 };

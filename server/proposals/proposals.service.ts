@@ -1,8 +1,10 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
+import type { AuditLog } from '../audit/audit.js';
 import type { DeskProposal, Proposal, Propose, Proposed } from '../../shared/contract/proposals.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
+import type { Happenings } from '../watches/happenings.js';
 import { catalogueEntryStore as catalogue } from './catalogue-entry.store.js';
 import type { ProposalRow, ProposalStore } from './proposal.store.js';
 import { waitingName, wordsOf } from './proposal-words.js';
@@ -36,8 +38,10 @@ export function createProposalService(around: {
   clock: () => Date;
   store: ProposalStore;
   mail: ProposalMail;
+  audit: AuditLog;
+  happenings: Happenings;
 }) {
-  const { knex, clock, store, mail } = around;
+  const { knex, clock, store, mail, audit, happenings } = around;
 
   return {
     /** FieldNotValid for a part that is not there; AlreadyThere where it stands in the catalogue or waits already. */
@@ -106,6 +110,24 @@ export function createProposalService(around: {
           slug: part.slug,
           reason: null,
         });
+        const name = wordsOf(entry, proposal.part?.name);
+        await audit.note(trx, {
+          actorId: moderatorId,
+          action: 'proposal-taken',
+          subject: { kind: 'proposal', id, name },
+          details: { part: part.slug, amended: amended !== null },
+        });
+        if (entry.kind === 'revision') {
+          await happenings.add(trx, {
+            kind: 'revision-added',
+            key: `revision-added:${id}`,
+            title: `In the catalogue: ${name}`,
+            text: entry.whatChanged,
+            path: `/parts/${part.slug}`,
+            actorId: proposal.accountId,
+            about: { parts: [part.id] },
+          });
+        }
         return { slug: part.slug };
       });
     },
@@ -116,6 +138,12 @@ export function createProposalService(around: {
         const decision = { state: 'declined', entry, partId, reason } as const;
         await store.decide(id, { ...decision, by: moderatorId, at: clock() }, trx);
         const what = wordsOf(entry, part?.name);
+        await audit.note(trx, {
+          actorId: moderatorId,
+          action: 'proposal-declined',
+          subject: { kind: 'proposal', id, name: what },
+          reason,
+        });
         await mail.queueProposalDecided(trx, { accountId, proposalId: id, what, slug: null, reason });
       });
     },

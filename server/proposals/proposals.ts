@@ -1,7 +1,9 @@
 import type { Knex } from 'knex';
+import type { AuditLog } from '../audit/audit.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
 import type { MeasurementService } from '../measurements/measurements.js';
+import type { Happenings } from '../watches/happenings.js';
 import { createMergeService, type IndexNotices } from './merge.service.js';
 import { createProposalStore } from './proposal.store.js';
 import { proposalBindings } from './proposals.routes.js';
@@ -15,6 +17,8 @@ export function createProposals(around: {
   mail: ProposalMail;
   measurements: MeasurementService;
   searchOutbox: IndexNotices;
+  audit: AuditLog;
+  happenings: Happenings;
 }): { bindings: RouteBinding[] } {
   const proposals = createProposalService({ ...around, store: createProposalStore(around.knex) });
   return { bindings: proposalBindings(proposals, createMergeService(around), around.limits) };

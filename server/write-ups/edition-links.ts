@@ -55,6 +55,11 @@ export function partIdsOf(content: EditionContent): number[] {
   return [...new Set(sidesOf(content).flatMap((side) => side.partId ?? []))];
 }
 
+/** Every revision that is marked on a side, once, whether the write-up holds for it or not. */
+export function revisionIdsOf(content: EditionContent): number[] {
+  return [...new Set(sidesOf(content).flatMap((side) => side.revisions.map((mark) => mark.revisionId)))];
+}
+
 /** Every photo of the content, those of steps included, once. */
 export function photoIdsOf(content: EditionContent): number[] {
   const ofSteps = content.fixes.flatMap((fix) => fix.steps.flatMap((step) => step.photoId ?? []));

@@ -73,6 +73,14 @@ export function createPublishedStore(knex: Knex) {
       return row && fromJson<EditionContent>(row.content);
     },
 
+    /** Address and title of a write-up; undefined while none of its editions is published. */
+    async publishedRef(db: Knex, writeUpId: number): Promise<{ slug: string; title: string } | undefined> {
+      return db('write_ups as w')
+        .join('editions as e', 'e.id', 'w.published_edition_id')
+        .where('w.id', writeUpId)
+        .first('w.slug', 'e.title');
+    },
+
     /** Accounts that wrote one of the published editions. */
     async authorIds(db: Knex, writeUpId: number): Promise<number[]> {
       return db('editions')

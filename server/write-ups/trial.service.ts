@@ -2,13 +2,14 @@ import type { Knex } from 'knex';
 import type { EditionContent, Fix } from '../../shared/contract/edition-content.js';
 import type { RevisionRef } from '../../shared/contract/hardware.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
-import type { Standing, TrialOutcome } from '../../shared/contract/vocabulary.js';
+import { trialOutcomeWords, type Standing, type TrialOutcome } from '../../shared/contract/vocabulary.js';
 import type { Trial } from '../../shared/contract/write-ups.js';
 import { standingOf } from '../../shared/fit/standing.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { MemberCaller } from '../http/caller.js';
 import { NotValid } from '../http/problems.js';
 import { groupBy } from '../rows.js';
+import type { Happenings } from '../watches/happenings.js';
 import { partIdsOf } from './edition-links.js';
 import { NoSuchWriteUp } from './edition-problems.js';
 import type { FixStore } from './fix.store.js';
@@ -37,6 +38,7 @@ export interface TrialParts {
   readonly fixes: FixStore;
   readonly trials: TrialStore;
   readonly searchOutbox: IndexNotice;
+  readonly happenings: Happenings;
 }
 
 export type TrialService = ReturnType<typeof createTrialService>;
@@ -49,6 +51,7 @@ export function createTrialService({
   fixes,
   trials,
   searchOutbox,
+  happenings,
 }: TrialParts) {
   return {
     /** NotValid where fix, revisions or figure do not belong to the published edition. */
@@ -69,6 +72,16 @@ export function createTrialService({
           revisionIds: [...new Set(report.revisionIds)],
           accountId: caller.accountId,
           createdAt: clock(),
+        });
+        const fix = content.fixes.find((each) => each.key === report.fixKey)!;
+        await happenings.add(trx, {
+          kind: 'trial-reported',
+          key: `trial-reported:${fixId}:${caller.accountId}:${id}`,
+          title: `Trial of “${fix.title}”: ${trialOutcomeWords[report.outcome]}`,
+          text: report.note,
+          path: `/write-ups/${slug}`,
+          actorId: caller.accountId,
+          about: { writeUps: [writeUp.id], revisions: report.revisionIds },
         });
         if (await judgeStandings(trx, writeUp.id, content)) await searchOutbox.add(trx, writeUp.id);
         return id;

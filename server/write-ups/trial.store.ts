@@ -17,6 +17,15 @@ export type TrialStore = ReturnType<typeof createTrialStore>;
 
 export function createTrialStore(knex: Knex) {
   return {
+    /** Who reported a trial of the fix, or of any fix of the write-up where none is named. */
+    async triersOf(trx: Knex, writeUpId: number, fixKey: string | null): Promise<number[]> {
+      const query = trx('trials as t')
+        .join('fixes as f', 'f.id', 't.fix_id')
+        .where('f.write_up_id', writeUpId);
+      if (fixKey !== null) void query.where('f.fix_key', fixKey);
+      return query.distinct().pluck('t.account_id');
+    },
+
     /** Trials of all fixes of a write-up, the newest first; two queries, whatever their number. */
     async trialsOf(writeUpId: number, only: { trialId?: number } = {}): Promise<Trial[]> {
       const trials = knex('trials as t')

@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import type { RichText } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
+import type { Happenings } from '../watches/happenings.js';
 import { createCautionStore } from './caution.store.js';
 import { createEditionComparer } from './comparison.js';
 import { createDraftService } from './draft.service.js';
@@ -24,6 +25,7 @@ export interface WriteUpSurroundings {
   readonly photos: PhotoLookup;
   readonly renderText: (source: string) => RichText;
   readonly searchOutbox: IndexNotice;
+  readonly happenings: Happenings;
 }
 
 export type WriteUpService = ReturnType<typeof createWriteUpService>;
@@ -57,6 +59,8 @@ function createWriteUpService(around: WriteUpSurroundings) {
     /** An edition in whatever state, for the desk. */
     editionById: drafts.edition,
     publishedContent: published.publishedContent,
+    publishedRef: published.publishedRef,
+    triersOf: trials.triersOf,
     cautionsOf: cautions.cautionsOf,
     cautionsOfMany: cautions.cautionsOfMany,
     viewOf: views.viewOf,

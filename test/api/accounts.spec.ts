@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { fromJson } from '../../server/rows.js';
 import { startTestApp, type TestApp } from './support/app.js';
 
 const password = 'seventeen brass shims';
@@ -367,13 +368,12 @@ describe('a change of role', () => {
       .send({ role: 'maker' });
     expect(changed.body).toMatchObject({ id: member.account.id, role: 'maker', confirmed: true });
     await administrator.patch(`/api/admin/accounts/${member.account.id}`).send({ role: 'maker' }).expect(200);
-    const rows = await app.knex('role_changes').where({ account_id: member.account.id });
+    const rows = await app
+      .knex('audit_log')
+      .where({ subject_kind: 'account', subject_id: member.account.id });
     expect(rows).toHaveLength(1);
-    expect(rows[0]).toMatchObject({
-      changed_by: administrator.account.id,
-      from_role: 'member',
-      to_role: 'maker',
-    });
+    expect(rows[0]).toMatchObject({ action: 'role-changed', actor_id: administrator.account.id });
+    expect(fromJson(rows[0].details)).toEqual({ from: 'member', to: 'maker' });
   });
 
   it('is refused for one’s own account', async () => {

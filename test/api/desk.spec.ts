@@ -37,8 +37,16 @@ const place = (editionId: number, caution: ReturnType<typeof cautionFor>) =>
   moderator.post('/api/desk/cautions').send({ ...caution, editionId });
 const deskEdition = async (id: number) => (await moderator.get(`/api/desk/editions/${id}`).expect(200)).body;
 const edition = (id: number) => app.knex('editions').where('id', id).first();
-const decisions = async (id: number): Promise<string[]> =>
-  app.knex('desk_decisions').where('edition_id', id).orderBy('id').pluck('decision');
+/** What the audit log has on an edition and on cautions of its write-up. */
+const decisions = async (id: number): Promise<string[]> => {
+  const { write_up_id: writeUpId } = await app.knex('editions').where({ id }).first('write_up_id');
+  return app
+    .knex('audit_log')
+    .where({ subject_kind: 'edition', subject_id: id })
+    .orWhereRaw("subject_kind = 'caution' AND JSON_VALUE(details, '$.writeUpId') = ?", [writeUpId])
+    .orderBy('id')
+    .pluck('action');
+};
 const mailsTo = (account: { email: string }) => app.knex('mail_outbox').where('to_address', account.email);
 const onDesk = async (content = completeContent(joint), who = author): Promise<Draft> =>
   submitDraft(who, await saveNewDraft(who, content));
@@ -146,7 +154,7 @@ describe('publishing', () => {
     ]);
     expect(await app.knex('edition_symptoms').where('edition_id', draft.id)).toHaveLength(1);
     expect(await app.knex('edition_fixes').where('edition_id', draft.id)).toMatchObject([{ position: 0 }]);
-    expect(await decisions(draft.id)).toEqual(['published']);
+    expect(await decisions(draft.id)).toEqual(['edition-published']);
     expect(await mailsTo(me.account)).toHaveLength(1);
     expect(await app.knex('search_outbox').where('write_up_id', draft.writeUpId)).toHaveLength(1);
   });
@@ -185,7 +193,7 @@ describe('publishing', () => {
     ]);
     expect(answers.map((answer) => answer.status).sort()).toEqual([200, 409, 409, 409]);
     expect(answers.find((answer) => answer.status === 409)!.body.type).toBe('/problems/edition-state');
-    expect(await decisions(draft.id)).toEqual(['published']);
+    expect(await decisions(draft.id)).toEqual(['edition-published']);
     expect(await mailsTo(me.account)).toHaveLength(1);
     expect(await app.knex('edition_sides').where('edition_id', draft.id)).toHaveLength(2);
   });
@@ -221,13 +229,13 @@ describe('returning', () => {
     expect((await giveBack(draft.id)).status).toBe(204);
     const { body: returned } = await me.get(`/api/drafts/${draft.id}`).expect(200);
     expect(returned).toMatchObject({ state: 'returned', returnReason: 'Say which screw you mean.' });
-    expect(await decisions(draft.id)).toEqual(['returned']);
+    expect(await decisions(draft.id)).toEqual(['edition-returned']);
     const [mail] = await mailsTo(me.account);
     expect(mail.body_text).toContain('Say which screw you mean.');
     expect((await giveBack(draft.id)).status).toBe(409);
     await submitDraft(me, returned);
     await publish(draft.id).expect(200);
-    expect(await decisions(draft.id)).toEqual(['returned', 'published']);
+    expect(await decisions(draft.id)).toEqual(['edition-returned', 'edition-published']);
   });
 
   it('needs a reason that says something', async () => {
@@ -371,6 +379,6 @@ describe('cautions', () => {
     const changed = await change({ avoidance: 'Wear a glove.', signalWord: 'danger' });
     expect(changed.body).toEqual({ ...caution, avoidance: 'Wear a glove.', signalWord: 'danger' });
     expect((await deskEdition(editionId)).cautions).toEqual([changed.body]);
-    expect(await decisions(editionId)).toEqual(['caution-placed', 'published', 'caution-changed']);
+    expect(await decisions(editionId)).toEqual(['caution-placed', 'edition-published', 'caution-changed']);
   });
 });

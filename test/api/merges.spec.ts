@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import type { EditionContent } from '../../shared/contract/edition-content.js';
+import { fromJson } from '../../server/rows.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
 import { insertPart, type TestPart } from './support/catalogue.js';
 import { insertFeature, insertJointOf, reading, record, type TestFeature } from './support/features.js';
@@ -319,8 +320,12 @@ describe('every merge', () => {
   it('is noted with who did it and what is gone', async () => {
     const [a, b] = [await insertPart(app.knex, { revisions: ['x'] }), await insertPart(app.knex)];
     await merge('part', a.id, b.id).expect(200);
-    expect(await app.knex('hardware_merges').where({ kind: 'part', from_id: a.id })).toMatchObject([
-      { from_name: a.name, into_id: b.id, moderator_id: moderator.account.id },
-    ]);
+    const [entry] = await app.knex('audit_log').where({ subject_kind: 'part', subject_id: a.id });
+    expect(entry).toMatchObject({
+      action: 'merged',
+      subject_name: a.name,
+      actor_id: moderator.account.id,
+    });
+    expect(fromJson(entry.details)).toEqual({ into: b.id, part: b.slug });
   });
 });

@@ -10,6 +10,8 @@ import { openDatabase } from '../../server/database.js';
 import { createJoints } from '../../server/joints/joints.js';
 import { startMariaDb } from '../../server/local/mariadb.mjs';
 import { freePort } from '../../server/local/start/ports.mjs';
+import { createAuditLog } from '../../server/audit/audit.js';
+import { createHappenings } from '../../server/watches/happenings.js';
 import { createMeasurements } from '../../server/measurements/measurements.js';
 import { migrateToLatest } from '../../server/migration-source.js';
 import { createHardware } from '../../server/hardware/hardware.js';
@@ -59,6 +61,8 @@ function pagesOn(knex: Knex): Pages {
     clock,
     hardware: createHardware({ knex }).service,
     limits: noRateLimits,
+    audit: createAuditLog({ clock }),
+    happenings: createHappenings({ clock }),
   });
   const nobody = { cautionsOfMany: () => Promise.resolve([]) } as unknown as WriteUpService;
   const joints = createJoints({ knex, clock, measurements: measurements.service, writeUps: nobody });
