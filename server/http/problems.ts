@@ -70,6 +70,20 @@ export class NotAllowed extends ProblemError {
   }
 }
 
+/** What the desk has taken down is gone for readers, and they are told why. */
+export class TakenDownByDesk extends ProblemError {
+  constructor(what: string, reason: string | null) {
+    super(
+      'taken-down',
+      410,
+      reason === null
+        ? `${what} was taken down by the desk.`
+        : `${what} was taken down by the desk: ${reason}`,
+      'Look for another one.',
+    );
+  }
+}
+
 export class AlreadyThere extends ProblemError {
   constructor(detail: string, remedy?: string) {
     super('already-there', 409, detail, remedy);

@@ -2,9 +2,11 @@ import type { Knex } from 'knex';
 import type { Symptom } from '../../shared/contract/hardware.js';
 import type { AddReply, AskQuestion, QuestionReading, SettledBy } from '../../shared/contract/questions.js';
 import type { WorksheetRecord } from '../../shared/contract/worksheet.js';
+import type { Caller } from '../http/caller.js';
 import { fromJson } from '../rows.js';
+import { readableBy, takenDownColumns, type TakenDownRow } from '../taken-down.js';
 
-export interface QuestionRow {
+export interface QuestionRow extends TakenDownRow {
   readonly id: number;
   readonly slug: string;
   readonly title: string;
@@ -15,7 +17,7 @@ export interface QuestionRow {
   readonly settledBy: SettledBy | null;
 }
 
-export interface ReplyRow {
+export interface ReplyRow extends TakenDownRow {
   readonly id: number;
   readonly text: string;
   readonly worksheet: WorksheetRecord | null;
@@ -41,7 +43,7 @@ export function createQuestionStore(knex: Knex) {
       open: boolean | undefined;
       rows: number;
     }): Promise<QuestionRow[]> {
-      const query = questions(knex).orderBy('q.id', 'desc').limit(wish.rows);
+      const query = questions(knex).whereNull('q.taken_down_at').orderBy('q.id', 'desc').limit(wish.rows);
       if (wish.before !== undefined) void query.where('q.id', '<', wish.before);
       if (wish.partId !== undefined)
         void query.whereIn(
@@ -88,8 +90,11 @@ export function createQuestionStore(knex: Knex) {
         .select('s.id', 's.slug', 's.label', { group: 's.group_name' });
     },
 
-    async repliesOf(questionId: number): Promise<ReplyRow[]> {
-      const rows: ReplyRow[] = await replies(knex).where('r.question_id', questionId).orderBy('r.id');
+    /** Oldest first; what is taken down only for its writer and for moderators. */
+    async repliesOf(questionId: number, reader: Caller): Promise<ReplyRow[]> {
+      const query = replies(knex).where('r.question_id', questionId).orderBy('r.id');
+      readableBy(query, 'r', reader);
+      const rows: ReplyRow[] = await query;
       return rows.map(toReply);
     },
 
@@ -172,11 +177,15 @@ function questions(db: Knex): Knex.QueryBuilder {
       accountId: 'a.id',
       displayName: 'a.display_name',
       createdAt: 'q.created_at',
-      replyCount: db('question_replies').where('question_id', db.ref('q.id')).count(),
+      replyCount: db('question_replies')
+        .where('question_id', db.ref('q.id'))
+        .whereNull('taken_down_at')
+        .count(),
       writeUpSlug: 'w.slug',
       writeUpTitle: 'e.title',
       fixKey: 'q.settled_fix_key',
       fixTitle: 'q.settled_fix_title',
+      ...takenDownColumns('q'),
     });
 }
 
@@ -199,6 +208,7 @@ function replies(db: Knex): Knex.QueryBuilder {
       accountId: 'a.id',
       displayName: 'a.display_name',
       createdAt: 'r.created_at',
+      ...takenDownColumns('r'),
     });
 }
 

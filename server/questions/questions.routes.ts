@@ -6,22 +6,20 @@ import type { QuestionService } from './questions.service.js';
 export function questionBindings(questions: QuestionService, limits: RateLimits): RouteBinding[] {
   return [
     bind(routes.listQuestions, ({ query }) => questions.list(query)),
-    bind(routes.readQuestion, ({ params }) => questions.read(params.slug)),
+    bind(routes.readQuestion, ({ params, caller }) => questions.read(params.slug, caller)),
     bind(routes.askQuestion, async ({ caller, body }) => {
-      const { accountId } = memberOf(caller);
-      await limits.take('question', String(accountId));
-      return questions.ask(accountId, body);
+      const member = memberOf(caller);
+      await limits.take('question', String(member.accountId));
+      return questions.ask(member, body);
     }),
     bind(routes.addReply, async ({ params, caller, body }) => {
-      const { accountId } = memberOf(caller);
-      await limits.take('reply', String(accountId));
-      return questions.reply(params.slug, accountId, body);
+      const member = memberOf(caller);
+      await limits.take('reply', String(member.accountId));
+      return questions.reply(params.slug, member, body);
     }),
     bind(routes.settleQuestion, ({ params, caller, body }) =>
-      questions.settle(params.slug, memberOf(caller).accountId, body),
+      questions.settle(params.slug, memberOf(caller), body),
     ),
-    bind(routes.reopenQuestion, ({ params, caller }) =>
-      questions.reopen(params.slug, memberOf(caller).accountId),
-    ),
+    bind(routes.reopenQuestion, ({ params, caller }) => questions.reopen(params.slug, memberOf(caller))),
   ];
 }

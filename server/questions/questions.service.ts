@@ -12,8 +12,10 @@ import type {
 } from '../../shared/contract/questions.js';
 import type { RichText } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
+import { visitor, type Caller, type MemberCaller } from '../http/caller.js';
 import { readCursor, toPage } from '../http/pages.js';
-import { FieldNotValid, NotAllowed, NotFound, NotValid } from '../http/problems.js';
+import { FieldNotValid, NotAllowed, NotFound, NotValid, TakenDownByDesk } from '../http/problems.js';
+import { mayReadTakenDown, takenDownOf } from '../taken-down.js';
 import { slugFrom } from '../write-ups/slug.js';
 import type { QuestionRow, QuestionStore, ReplyRow } from './question.store.js';
 
@@ -56,34 +58,45 @@ export function createQuestionService(around: {
     }));
   }
 
-  const toReply = ({ accountId, displayName, ...row }: ReplyRow): Reply => ({
+  const toReply = ({ accountId, displayName, takenDownAt, takenDownReason, ...row }: ReplyRow): Reply => ({
     ...row,
+    takenDown: takenDownOf({ takenDownAt, takenDownReason }),
     text: renderText(row.text),
     person: { id: accountId, displayName },
     createdAt: row.createdAt.toISOString(),
   });
 
-  async function existing(slug: string, db: Knex): Promise<QuestionRow> {
+  /** The question as far as the reader may see it. NotFound, or TakenDownByDesk. */
+  async function existing(slug: string, db: Knex, reader: Caller): Promise<QuestionRow> {
     const row = await store.bySlug(slug, db);
     if (!row) throw new NotFound('There is no question at this address.');
+    if (row.takenDownAt && !mayReadTakenDown(row.accountId, reader))
+      throw new TakenDownByDesk('This question', row.takenDownReason);
     return row;
   }
 
-  async function read(slug: string): Promise<QuestionPage> {
-    const row = await existing(slug, knex);
+  async function read(slug: string, reader: Caller): Promise<QuestionPage> {
+    const row = await existing(slug, knex, reader);
     const [[line], body, symptoms, replies] = await Promise.all([
       linesOf([row]),
       store.bodyOf(row.id),
       store.symptomsOf(row.id),
-      store.repliesOf(row.id),
+      store.repliesOf(row.id, reader),
     ]);
-    return { ...line!, ...body, text: renderText(body.text), symptoms, replies: replies.map(toReply) };
+    return {
+      ...line!,
+      ...body,
+      text: renderText(body.text),
+      symptoms,
+      replies: replies.map(toReply),
+      takenDown: takenDownOf(row),
+    };
   }
 
   /** The question, if the account asked it. */
-  async function own(slug: string, accountId: number, db: Knex): Promise<QuestionRow> {
-    const row = await existing(slug, db);
-    if (row.accountId !== accountId)
+  async function own(slug: string, caller: MemberCaller, db: Knex): Promise<QuestionRow> {
+    const row = await existing(slug, db, caller);
+    if (row.accountId !== caller.accountId)
       throw new NotAllowed('Only who asked can say what settled a question.', 'Reply to it instead.');
     return row;
   }
@@ -110,7 +123,7 @@ export function createQuestionService(around: {
       return { items: await linesOf(page.items), next: page.next };
     },
 
-    async ask(accountId: number, question: AskQuestion): Promise<QuestionPage> {
+    async ask(caller: MemberCaller, question: AskQuestion): Promise<QuestionPage> {
       const symptoms = await hardware.symptomsBySlugs(question.symptoms);
       const broken = [
         ...brokenParts(
@@ -131,26 +144,26 @@ export function createQuestionService(around: {
             ...question,
             slugBase: slugBaseOf(question.title),
             symptomIds: [...new Set([...symptoms.values()].map((symptom) => symptom.id))],
-            accountId,
+            accountId: caller.accountId,
             createdAt: clock(),
           },
           trx,
         ),
       );
-      return read(slug);
+      return read(slug, caller);
     },
 
-    async reply(slug: string, accountId: number, reply: AddReply): Promise<Reply> {
+    async reply(slug: string, { accountId }: MemberCaller, reply: AddReply): Promise<Reply> {
       return knex.transaction(async (trx) => {
-        const { id: questionId } = await existing(slug, trx);
+        const { id: questionId } = await existing(slug, trx, visitor);
         return toReply(await store.addReply({ ...reply, questionId, accountId, createdAt: clock() }, trx));
       });
     },
 
     /** Names the fix that helped. NotAllowed for others than the asker; FieldNotValid for a fix that is not published. */
-    async settle(slug: string, accountId: number, { writeUpSlug, fixKey }: Settle): Promise<QuestionPage> {
+    async settle(slug: string, caller: MemberCaller, { writeUpSlug, fixKey }: Settle): Promise<QuestionPage> {
       await knex.transaction(async (trx) => {
-        const question = await own(slug, accountId, trx);
+        const question = await own(slug, caller, trx);
         const writeUpId = await store.publishedWriteUpId(writeUpSlug, trx);
         if (writeUpId === undefined)
           throw new FieldNotValid(
@@ -168,13 +181,13 @@ export function createQuestionService(around: {
           );
         await store.settle(question.id, { writeUpId, fixKey, fixTitle: fix.title }, trx);
       });
-      return read(slug);
+      return read(slug, caller);
     },
 
-    async reopen(slug: string, accountId: number): Promise<QuestionPage> {
-      const question = await own(slug, accountId, knex);
+    async reopen(slug: string, caller: MemberCaller): Promise<QuestionPage> {
+      const question = await own(slug, caller, knex);
       await store.settle(question.id, null, knex);
-      return read(slug);
+      return read(slug, caller);
     },
   };
 }

@@ -46,6 +46,8 @@ export const problemTypes = {
   'caution-missing': 'A hazard has no caution yet',
   'photo-refused': 'The photo cannot be taken',
   'already-there': 'That is there already',
+  'taken-down': 'The desk has taken this down',
+  'claimed-by-another': 'Somebody else at the desk has this in hand',
   'search-unavailable': 'Search does not answer at the moment',
   internal: 'Something went wrong on our side',
 } as const;

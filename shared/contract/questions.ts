@@ -4,6 +4,7 @@ import { PartRef, RevisionRef, Symptom } from './hardware.js';
 import { Id, Instant, PageQuery, Slug, line, pageOf, passage } from './primitives.js';
 import { anyone, route, signedIn } from './route.js';
 import { Instrument, ReadingUnit } from './vocabulary.js';
+import { TakenDown } from './taken-down.js';
 import { WorksheetRecord } from './worksheet.js';
 import { PersonRef, RichText } from './write-ups.js';
 
@@ -46,6 +47,8 @@ export const Reply = z.object({
   worksheet: WorksheetRecord.nullable(),
   person: PersonRef,
   createdAt: Instant,
+  /** Only its writer and moderators are given a reply that is taken down. */
+  takenDown: TakenDown.nullable(),
 });
 export type Reply = z.infer<typeof Reply>;
 
@@ -56,6 +59,8 @@ export const QuestionPage = QuestionLine.extend({
   worksheet: WorksheetRecord.nullable(),
   /** Oldest first. */
   replies: z.array(Reply),
+  /** Only its asker and moderators are given a question that is taken down; others get 410. */
+  takenDown: TakenDown.nullable(),
 });
 export type QuestionPage = z.infer<typeof QuestionPage>;
 
@@ -104,6 +109,7 @@ export const questionRoutes = {
     summary: 'One question with its replies, the oldest first',
     params: bySlug,
     response: QuestionPage,
+    problems: ['taken-down'],
   }),
   askQuestion: route({
     method: 'post',

@@ -30,6 +30,7 @@ const rocking: QuestionPage = {
   readings: [{ dimension: 'lip diameter', value: 32.1, unit: 'mm', instrument: 'caliper' }],
   worksheet: null,
   replies: [],
+  takenDown: null,
 };
 
 async function open(question: QuestionPage): Promise<HTMLElement> {

@@ -20,11 +20,12 @@ import { ShimloreTitles } from '../core/titles';
 import { LoadStateView } from '../ui/load-state/load-state';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { RichTextView } from '../ui/rich-text/rich-text';
+import { TakenDownNote } from '../ui/taken-down-note/taken-down-note';
 import { QuestionParts } from './question-parts';
 import { Questions } from './questions';
 import { ReplyForm } from './reply-form';
 import { SettleForm } from './settle-form';
-import { WorksheetNote } from './worksheet-note';
+import { WorksheetNote } from '../ui/worksheet/worksheet-note';
 
 /** One question: its parts and readings first, then the words, then what others say. */
 @Component({
@@ -38,6 +39,7 @@ import { WorksheetNote } from './worksheet-note';
     RichTextView,
     RouterLink,
     SettleForm,
+    TakenDownNote,
     WorksheetNote,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,

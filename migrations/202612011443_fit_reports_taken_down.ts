@@ -1,0 +1,17 @@
+import type { Knex } from 'knex';
+
+/** The desk takes the say of a report off the fit table with a reason; it is never deleted. */
+export async function up(knex: Knex): Promise<void> {
+  await knex.schema.alterTable('fit_reports', (table) => {
+    table.datetime('taken_down_at', { precision: 3 });
+    table.bigInteger('taken_down_by').unsigned().references('accounts.id');
+    table.string('taken_down_reason', 1000);
+  });
+}
+
+export async function down(knex: Knex): Promise<void> {
+  await knex.schema.alterTable('fit_reports', (table) => {
+    table.dropForeign('taken_down_by');
+    table.dropColumns('taken_down_at', 'taken_down_by', 'taken_down_reason');
+  });
+}
