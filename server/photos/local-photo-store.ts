@@ -1,6 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { access, mkdir, open, readFile, rename, rm } from 'node:fs/promises';
 import path from 'node:path';
+import type { Readable } from 'node:stream';
 import type { PhotoStore } from './photo-store.js';
 
 /**
@@ -51,6 +52,19 @@ export function createLocalPhotoStore(folder: string): PhotoStore {
     );
   }
 
+  async function openFile(name: string): Promise<Readable | null> {
+    try {
+      return (await open(placeOf(name))).createReadStream();
+    } catch (error) {
+      if ((error as NodeJS.ErrnoException).code === 'ENOENT') return null;
+      throw error;
+    }
+  }
+
+  async function remove(name: string): Promise<void> {
+    await rm(placeOf(name), { force: true });
+  }
+
   async function health(): Promise<{ ok: boolean; detail: string }> {
     const probe = path.join(beside, `probe-${randomUUID()}`);
     try {
@@ -68,7 +82,7 @@ export function createLocalPhotoStore(folder: string): PhotoStore {
     }
   }
 
-  return { put, get, has, health };
+  return { put, get, has, open: openFile, remove, health };
 }
 
 /** A rename is only safe from a power cut once the folder itself is on the disk. */
