@@ -110,7 +110,7 @@ async function fixRows(knex: Knex, writeUpIds: readonly number[]): Promise<FixRe
   const count = (outcome: string): Knex.Raw =>
     knex.raw('COUNT(CASE WHEN t.outcome = ? THEN 1 END)', [outcome]);
   const rows: FixRecord[] = await knex('fixes as f')
-    .leftJoin('trials as t', 't.fix_id', 'f.id')
+    .leftJoin('trials as t', (on) => on.on('t.fix_id', 'f.id').andOnNull('t.taken_down_at'))
     .whereIn('f.write_up_id', writeUpIds)
     .groupBy('f.id', 'f.write_up_id', 'f.fix_key', 'f.standing')
     .select('f.standing', {

@@ -24,10 +24,21 @@ export type PhotosStore = ReturnType<typeof createPhotosStore>;
 export function createPhotosStore(knex: Knex) {
   return {
     /** Rows of this content, whoever sent it; the owner's own first. */
-    async findByHash(hash: string, ownerId: number): Promise<{ photo: Photo; ownerId: number }[]> {
-      const rows: PhotoRow[] = await knex('photos').where({ hash }).select(columns).orderBy('id');
+    async findByHash(
+      hash: string,
+      ownerId: number,
+    ): Promise<{ photo: Photo; ownerId: number; takenDownReason: string | null }[]> {
+      const rows: (PhotoRow & { taken_down_reason: string | null })[] = await knex('photos')
+        .where({ hash })
+        .select(columns)
+        .select('taken_down_reason')
+        .orderBy('id');
       return rows
-        .map((row) => ({ photo: toPhoto(row), ownerId: row.owner_id }))
+        .map((row) => ({
+          photo: toPhoto(row),
+          ownerId: row.owner_id,
+          takenDownReason: row.taken_down_reason,
+        }))
         .sort((one, other) => Number(other.ownerId === ownerId) - Number(one.ownerId === ownerId));
     },
 
@@ -52,9 +63,21 @@ export function createPhotosStore(knex: Knex) {
       return toPhoto(row);
     },
 
+    /** Whether every row of this content is taken down; false where there is none. */
+    async isTakenDown(hash: string): Promise<boolean> {
+      const rows: { taken_down_at: Date | null }[] = await knex('photos')
+        .where({ hash })
+        .select('taken_down_at');
+      return rows.length > 0 && rows.every((row) => row.taken_down_at !== null);
+    },
+
+    /** Those of the photos that the desk has not taken down. */
     async byIds(ids: readonly number[]): Promise<Photo[]> {
       if (ids.length === 0) return [];
-      const rows: PhotoRow[] = await knex('photos').whereIn('id', ids).select(columns);
+      const rows: PhotoRow[] = await knex('photos')
+        .whereIn('id', ids)
+        .whereNull('taken_down_at')
+        .select(columns);
       return rows.map(toPhoto);
     },
   };

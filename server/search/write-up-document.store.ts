@@ -175,5 +175,6 @@ function photosOf(knex: Knex, ids: readonly number[]): Promise<PhotoRow[]> {
   if (ids.length === 0) return Promise.resolve([]);
   return knex('photos')
     .whereIn('id', ids)
+    .whereNull('taken_down_at')
     .select('id', 'hash', 'width', 'height', 'widths', 'placeholder', 'alt');
 }

@@ -28,7 +28,7 @@ export function createFixStore(knex: Knex) {
     async fixesOf(writeUpId: number, db: Knex = knex): Promise<Map<string, FixRow>> {
       const rows: FixRecord[] = await db('fixes as f')
         .leftJoin('revisions as r', 'r.id', 'f.made_right_from')
-        .leftJoin('trials as t', 't.fix_id', 'f.id')
+        .leftJoin('trials as t', (on) => on.on('t.fix_id', 'f.id').andOnNull('t.taken_down_at'))
         .where('f.write_up_id', writeUpId)
         .groupBy('f.id')
         .select('f.id', 'f.standing', {
@@ -54,10 +54,12 @@ export function createFixStore(knex: Knex) {
       return new Map(rows.map((row) => [row.fix_key, row.id]));
     },
 
+    /** Trials that stand. */
     async evidenceFor(trx: Knex, writeUpId: number): Promise<EvidenceRow[]> {
       return trx('trials as t')
         .join('fixes as f', 'f.id', 't.fix_id')
         .where('f.write_up_id', writeUpId)
+        .whereNull('t.taken_down_at')
         .select('t.outcome', 't.figure', { fixId: 't.fix_id', accountId: 't.account_id' });
     },
 
