@@ -225,6 +225,7 @@ export async function seedWriteUps(
             outcome: planned.outcome,
             note: planned.note,
             figure: planned.figure,
+            worksheet: planned.worksheet && JSON.stringify(planned.worksheet),
             created_at: planned.createdAt,
           });
           rows.trialRevisions.push(

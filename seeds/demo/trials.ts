@@ -1,7 +1,9 @@
 import type { TrialOutcome } from '../../shared/contract/vocabulary.js';
+import type { WorksheetRecord } from '../../shared/contract/worksheet.js';
 import { pick, shuffled } from './random.js';
 import { lettersOf } from './resolve-content.js';
 import { trialNotes } from './trial-notes.js';
+import { ownWorksheet } from './trial-worksheets.js';
 import type { DemoContent, DemoFix } from './write-up-shape.js';
 
 export interface PlannedTrial {
@@ -9,6 +11,7 @@ export interface PlannedTrial {
   readonly outcome: TrialOutcome;
   readonly figure: number | null;
   readonly note: string;
+  readonly worksheet: WorksheetRecord | null;
   /** `part:letter`. */
   readonly revisions: readonly string[];
   readonly createdAt: Date;
@@ -40,6 +43,7 @@ export function planTrials(parts: {
       outcome: trial.outcome,
       figure: trial.figure,
       note: pool[index % pool.length]!,
+      worksheet: ownWorksheet(fix.worksheet, index),
       revisions: choices.map((side) => {
         const fitting = side.filter((revision) => limited.includes(revision));
         return pick(fitting.length > 0 ? fitting : side, next);

@@ -2,8 +2,8 @@ import type { Knex } from 'knex';
 import type { EditionContent, Fix } from '../../shared/contract/edition-content.js';
 import type { RevisionRef } from '../../shared/contract/hardware.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
-import { trialOutcomeWords, type Standing, type TrialOutcome } from '../../shared/contract/vocabulary.js';
-import type { Trial } from '../../shared/contract/write-ups.js';
+import { trialOutcomeWords, type Standing } from '../../shared/contract/vocabulary.js';
+import type { Trial, TrialReport } from '../../shared/contract/write-ups.js';
 import { standingOf } from '../../shared/fit/standing.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { MemberCaller } from '../http/caller.js';
@@ -20,14 +20,6 @@ import type { TrialStore } from './trial.store.js';
 /** What write-ups need of the search index: to be told which document must be made anew. */
 export interface IndexNotice {
   add(trx: Knex, writeUpId: number): Promise<void>;
-}
-
-export interface TrialReport {
-  readonly fixKey: string;
-  readonly outcome: TrialOutcome;
-  readonly revisionIds: readonly number[];
-  readonly note: string;
-  readonly figure: number | null;
 }
 
 export interface TrialParts {
@@ -54,44 +46,58 @@ export function createTrialService({
   happenings,
 }: TrialParts) {
   return {
-    /** NotValid where fix, revisions or figure do not belong to the published edition. */
+    /** As `reportTrialWithin`, in a transaction of its own. */
     async reportTrial(caller: MemberCaller, slug: string, report: TrialReport): Promise<Trial> {
-      const writeUp = await published.bySlug(slug);
-      if (!writeUp) throw new NoSuchWriteUp();
-      const revisions = await hardware.revisionsByIds(report.revisionIds);
-      const trialId = await knex.transaction(async (trx) => {
-        await publicationStore.lockWriteUp(trx, writeUp.id);
-        const content = await published.publishedContent(trx, writeUp.id);
-        if (!content) throw new NoSuchWriteUp();
-        const problems = problemsOf(report, content, revisions);
-        if (problems.length > 0) throw new NotValid(problems);
-        const fixId = (await fixes.addMissing(trx, writeUp.id, [report.fixKey])).get(report.fixKey)!;
-        const id = await trials.putTrial(trx, {
-          ...report,
-          fixId,
-          revisionIds: [...new Set(report.revisionIds)],
-          accountId: caller.accountId,
-          createdAt: clock(),
-        });
-        const fix = content.fixes.find((each) => each.key === report.fixKey)!;
-        await happenings.add(trx, {
-          kind: 'trial-reported',
-          key: `trial-reported:${fixId}:${caller.accountId}:${id}`,
-          title: `Trial of “${fix.title}”: ${trialOutcomeWords[report.outcome]}`,
-          text: report.note,
-          path: `/write-ups/${slug}`,
-          actorId: caller.accountId,
-          about: { writeUps: [writeUp.id], revisions: report.revisionIds },
-        });
-        if (await judgeStandings(trx, writeUp.id, content)) await searchOutbox.add(trx, writeUp.id);
-        return id;
-      });
-      const [trial] = await trials.trialsOf(writeUp.id, { trialId });
+      const { writeUpId, trialId } = await knex.transaction((trx) =>
+        reportTrialWithin(trx, caller.accountId, slug, report),
+      );
+      const [trial] = await trials.trialsOf(writeUpId, caller, { trialId });
       return trial!;
     },
 
+    reportTrialWithin,
     judgeStandings,
   };
+
+  /**
+   * Stores the trial, notes it for those who watch, and judges the standing of the fix anew. NoSuchWriteUp where none is
+   * published at the address; NotValid where fix, revisions or figure do not belong to its published edition.
+   */
+  async function reportTrialWithin(
+    trx: Knex,
+    accountId: number,
+    slug: string,
+    report: TrialReport,
+  ): Promise<{ writeUpId: number; trialId: number }> {
+    const writeUp = await published.bySlug(slug);
+    if (!writeUp) throw new NoSuchWriteUp();
+    const revisions = await hardware.revisionsByIds(report.revisionIds);
+    await publicationStore.lockWriteUp(trx, writeUp.id);
+    const content = await published.publishedContent(trx, writeUp.id);
+    if (!content) throw new NoSuchWriteUp();
+    const problems = problemsOf(report, content, revisions);
+    if (problems.length > 0) throw new NotValid(problems);
+    const fixId = (await fixes.addMissing(trx, writeUp.id, [report.fixKey])).get(report.fixKey)!;
+    const trialId = await trials.putTrial(trx, {
+      ...report,
+      fixId,
+      revisionIds: [...new Set(report.revisionIds)],
+      accountId,
+      createdAt: clock(),
+    });
+    const fix = content.fixes.find((each) => each.key === report.fixKey)!;
+    await happenings.add(trx, {
+      kind: 'trial-reported',
+      key: `trial-reported:${fixId}:${accountId}:${trialId}`,
+      title: `Trial of “${fix.title}”: ${trialOutcomeWords[report.outcome]}`,
+      text: report.note,
+      path: `/write-ups/${slug}`,
+      actorId: accountId,
+      about: { writeUps: [writeUp.id], revisions: report.revisionIds },
+    });
+    if (await judgeStandings(trx, writeUp.id, content)) await searchOutbox.add(trx, writeUp.id);
+    return { writeUpId: writeUp.id, trialId };
+  }
 
   /** Judges every fix of an edition anew by the trials there are; whether any standing changed. */
   async function judgeStandings(trx: Knex, writeUpId: number, content: EditionContent): Promise<boolean> {

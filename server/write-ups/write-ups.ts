@@ -55,6 +55,7 @@ function createWriteUpService(around: WriteUpSurroundings) {
     ...createPageService({ knex, published, drafts, trials, views, comparer }),
     ...createDraftService({ knex, clock, drafts, published, references, views, photos }),
     reportTrial: trialService.reportTrial,
+    reportTrialWithin: trialService.reportTrialWithin,
     ...createPublicationService({ drafts, fixes, judgeStandings }),
     /** An edition in whatever state, for the desk. */
     editionById: drafts.edition,

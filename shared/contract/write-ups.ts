@@ -47,9 +47,22 @@ export const Trial = z.object({
   note: z.string(),
   /** The figure reached, in the unit of the fix's acceptance figure. */
   figure: z.number().nullable(),
+  worksheet: WorksheetRecord.nullable(),
   createdAt: Instant,
 });
 export type Trial = z.infer<typeof Trial>;
+
+/** What somebody tells of a fix that they tried. */
+export const TrialReport = z.strictObject({
+  fixKey: z.string().min(8).max(36),
+  outcome: TrialOutcome,
+  revisionIds: z.array(Id).max(8),
+  note: passage(2000),
+  /** In the unit of the fix's acceptance figure. */
+  figure: z.number().finite().min(-100_000).max(100_000).nullable(),
+  worksheet: WorksheetRecord.nullable().default(null),
+});
+export type TrialReport = z.infer<typeof TrialReport>;
 
 export const MarkedRevision = RevisionRef.extend({ holds: z.boolean() });
 export const JointSideView = z.object({
@@ -346,13 +359,7 @@ export const writeUpRoutes = {
     status: 201,
     summary: 'Report a trial of a fix; one per person and fix, a second replaces the first',
     params: slugParams,
-    body: z.strictObject({
-      fixKey: z.string().min(8).max(36),
-      outcome: TrialOutcome,
-      revisionIds: z.array(Id).max(8),
-      note: passage(2000),
-      figure: z.number().finite().min(-100_000).max(100_000).nullable(),
-    }),
+    body: TrialReport,
     response: Trial,
   }),
 };

@@ -1,4 +1,5 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
+import { emptySeat, worksheetVersion } from '../../shared/contract/worksheet.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
 import { insertPart } from './support/catalogue.js';
 import {
@@ -88,6 +89,32 @@ describe('reporting a trial', () => {
     expect(trials).toEqual([second.body]);
     expect(second.body).toMatchObject({ outcome: 'did-not-help', note: 'It slipped.', revisions: [] });
     expect(view.fixes[0].trialCounts).toEqual({ held: 0, heldForAWhile: 0, didNotHelp: 1 });
+  });
+
+  it('carries the worksheet by which its person worked it out, until they report without one', async () => {
+    const { slug, fix } = await publishWith();
+    const owner = await app.memberNamed('Owner');
+    const worksheet = {
+      kind: 'seat',
+      version: worksheetVersion,
+      inputs: { ...emptySeat, bossDiameter: 32.1, recessDiameter: 32 },
+      result: { sentence: 'The boss may not enter.', figures: [] },
+    };
+    const { body } = await report(owner, slug, trial(fix.key, { worksheet })).expect(201);
+    expect(body.worksheet).toEqual(worksheet);
+    expect((await page(slug)).trials[0].worksheet).toEqual(worksheet);
+    await report(owner, slug, trial(fix.key)).expect(201);
+    expect((await page(slug)).trials[0].worksheet).toBeNull();
+  });
+
+  it('refuses a worksheet of another version, naming the field, and stores nothing', async () => {
+    const { slug, fix } = await publishWith();
+    const worksheet = { kind: 'seat', version: 99, inputs: emptySeat, result: { sentence: '', figures: [] } };
+    const { body } = await report(await app.memberNamed('Owner'), slug, trial(fix.key, { worksheet })).expect(
+      422,
+    );
+    expect(body.fields.map((field: { path: string }) => field.path)).toEqual(['worksheet.version']);
+    expect((await page(slug)).trials).toEqual([]);
   });
 
   it('is kept once when it is sent twice at the same moment', async () => {

@@ -16,9 +16,9 @@ import { ShimloreTitles } from '../core/titles';
 import { Hardware } from '../hardware/hardware';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
+import { WorksheetField } from '../ui/worksheet/worksheet-field';
 import { forgetTyped, keepTyped, questionForm, readingForm, restoreTyped } from './question-form';
 import { Questions } from './questions';
-import { worksheetIn } from './worksheet-link';
 
 const mostReadings = 20;
 /** As long as a pause in typing. */
@@ -28,7 +28,7 @@ const fewestLetters = 4;
 /** A new question; it starts from the parts and revisions on the bench, all ticked. */
 @Component({
   selector: 'sl-ask-page',
-  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule, RouterLink, WorksheetField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './ask-page.html',
   styleUrl: './ask-page.scss',
@@ -113,7 +113,7 @@ export class AskPage {
           parts,
           symptoms: [...symptoms],
           readings: readings.map((reading) => ({ ...reading, value: reading.value! })),
-          worksheet: worksheetIn(worksheet),
+          worksheet,
         }),
       (question) => {
         forgetTyped();

@@ -1,6 +1,6 @@
 import { FormArray, FormControl, FormGroup, Validators } from '@angular/forms';
 import type { Instrument, ReadingUnit } from '../../../shared/contract/vocabulary';
-import { isWorksheetLink } from './worksheet-link';
+import type { WorksheetRecord } from '../../../shared/contract/worksheet';
 
 export type ReadingForm = ReturnType<typeof readingForm>;
 export type QuestionForm = ReturnType<typeof questionForm>;
@@ -25,7 +25,7 @@ export function questionForm() {
       nonNullable: true,
       validators: [Validators.required, Validators.minLength(20), Validators.maxLength(6000)],
     }),
-    worksheet: new FormControl('', { nonNullable: true, validators: [isWorksheetLink] }),
+    worksheet: new FormControl<WorksheetRecord | null>(null),
     readings: new FormArray<ReadingForm>([]),
     symptoms: new FormControl<readonly string[]>([], { nonNullable: true }),
   });

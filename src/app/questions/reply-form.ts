@@ -1,25 +1,28 @@
 import { ChangeDetectionStrategy, Component, inject, input, output } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import type { Reply } from '../../../shared/contract/questions';
+import type { WorksheetRecord } from '../../../shared/contract/worksheet';
 import { formSending } from '../core/form-sending';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
+import { WorksheetField } from '../ui/worksheet/worksheet-field';
 import { Questions } from './questions';
-import { isWorksheetLink, worksheetIn } from './worksheet-link';
 
 /** A reply with, where there is one, the link of a worksheet. */
 @Component({
   selector: 'sl-reply-form',
-  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule],
+  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule, WorksheetField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <form [formGroup]="form" novalidate aria-label="Reply" (ngSubmit)="send()">
       <sl-labelled label="Your reply" [control]="form.controls.text">
         <textarea slField rows="5" maxlength="4000" formControlName="text"></textarea>
       </sl-labelled>
-      <sl-labelled label="Link of a worksheet, if you have one" [control]="form.controls.worksheet">
-        <input slField type="text" formControlName="worksheet" />
-      </sl-labelled>
+      <sl-worksheet-field
+        fieldId="reply-worksheet"
+        why="If you worked something out, paste the link of the worksheet: others run it with their own readings."
+        [control]="form.controls.worksheet"
+      />
       <sl-problem-note [problem]="sending.problem()" />
       <button type="submit" class="sl-strong-button" [disabled]="sending.busy()">Reply</button>
     </form>
@@ -44,14 +47,14 @@ export class ReplyForm {
   protected readonly sending = formSending();
   protected readonly form = new FormGroup({
     text: new FormControl('', { nonNullable: true, validators: [Validators.required] }),
-    worksheet: new FormControl('', { nonNullable: true, validators: [isWorksheetLink] }),
+    worksheet: new FormControl<WorksheetRecord | null>(null),
   });
 
   protected send(): void {
     const { text, worksheet } = this.form.getRawValue();
     this.sending.send(
       this.form,
-      () => this.questions.reply(this.slug(), { text, worksheet: worksheetIn(worksheet) }),
+      () => this.questions.reply(this.slug(), { text, worksheet }),
       (reply) => {
         this.form.reset();
         this.replied.emit(reply);

@@ -13,17 +13,19 @@ import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angula
 import { firstValueFrom } from 'rxjs';
 import type { Problem } from '../../../shared/contract/problem';
 import { TrialOutcome, readingUnitSymbols, trialOutcomeWords } from '../../../shared/contract/vocabulary';
+import type { WorksheetRecord } from '../../../shared/contract/worksheet';
 import type { EditionView, Trial } from '../../../shared/contract/write-ups';
 import { BenchStore } from '../bench/bench-store';
 import { toApiProblem } from '../core/api-problem';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
+import { WorksheetField } from '../ui/worksheet/worksheet-field';
 import { WriteUps } from './write-ups';
 
 /** What a fix did on the member's own revisions, with the figure reached where the fix names one. */
 @Component({
   selector: 'sl-trial-form',
-  imports: [ProblemNote, ReactiveFormsModule],
+  imports: [ProblemNote, ReactiveFormsModule, WorksheetField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './trial-form.html',
   styleUrl: './trial-form.scss',
@@ -50,6 +52,7 @@ export class TrialForm {
     outcome: new FormControl<TrialOutcome>('held', { nonNullable: true }),
     note: new FormControl('', { nonNullable: true, validators: Validators.maxLength(2000) }),
     figure: new FormControl<number | null>(null),
+    worksheet: new FormControl<WorksheetRecord | null>(null),
   });
   private readonly fixKey = toSignal(this.form.controls.fixKey.valueChanges, { initialValue: '' });
   protected readonly acceptance = computed(
@@ -94,7 +97,7 @@ export class TrialForm {
     if (this.form.invalid || this.sending()) return;
     this.sending.set(true);
     this.problem.set(null);
-    const { fixKey, outcome, note, figure } = this.form.getRawValue();
+    const { fixKey, outcome, note, figure, worksheet } = this.form.getRawValue();
     try {
       const trial = await firstValueFrom(
         this.writeUps.reportTrial(this.slug(), {
@@ -102,6 +105,7 @@ export class TrialForm {
           outcome,
           note,
           figure: this.acceptance() ? figure : null,
+          worksheet,
           revisionIds: [...this.revisions().values()],
         }),
       );

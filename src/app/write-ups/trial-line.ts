@@ -3,12 +3,13 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { Acceptance } from '../../../shared/contract/edition-content';
 import { trialOutcomeWords } from '../../../shared/contract/vocabulary';
 import type { Trial } from '../../../shared/contract/write-ups';
+import { WorksheetNote } from '../ui/worksheet/worksheet-note';
 import { withUnit } from './figures';
 
 /** One person's trial: what it did, the figure reached, on which revisions, and their word. */
 @Component({
   selector: 'sl-trial-line',
-  imports: [DatePipe],
+  imports: [DatePipe, WorksheetNote],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <p class="top">
@@ -26,6 +27,9 @@ import { withUnit } from './figures';
     </p>
     @if (trial().note) {
       <p class="note">{{ trial().note }}</p>
+    }
+    @if (trial().worksheet; as record) {
+      <sl-worksheet-note [record]="record" />
     }
     <p class="who sl-quiet">
       {{ trial().person.displayName }}, {{ trial().createdAt | date: 'd MMM y' : 'UTC' }}

@@ -12,6 +12,7 @@ import {
 import { redrawWith } from '../../core/redraw-with';
 import { wrongWith } from '../../core/told-fields';
 import { Field, Labelled } from '../../ui/labelled/labelled';
+import { WorksheetField } from '../../ui/worksheet/worksheet-field';
 import { DraftEditing } from './draft-editing';
 import type { FixForm } from './edition-form';
 import { fieldId } from './field-names';
@@ -19,7 +20,6 @@ import { JointRevisions } from './joint-revisions';
 import { PassageField } from './passage-field';
 import { StepsFields } from './steps-fields';
 import { WordsField } from './words-field';
-import { WorksheetField } from './worksheet-field';
 
 /** What a permanence means for the owner, beside its word. */
 const permanences: { value: Permanence; label: string; means: string }[] = [

@@ -1,6 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import { worksheetAddress } from '../../../shared/contract/worksheet-address';
-import type { WorksheetRecord } from '../../../shared/contract/worksheet';
+import { worksheetAddress } from '../../../../shared/contract/worksheet-address';
+import type { WorksheetRecord } from '../../../../shared/contract/worksheet';
 
 /** What a worksheet that somebody attached came to, with the way to its figures. */
 @Component({

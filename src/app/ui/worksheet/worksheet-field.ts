@@ -1,12 +1,16 @@
-import { ChangeDetectionStrategy, Component, inject, input, signal } from '@angular/core';
-import { FormControl, ReactiveFormsModule } from '@angular/forms';
+import { ChangeDetectionStrategy, Component, effect, inject, input, untracked } from '@angular/core';
+import { FormControl, ReactiveFormsModule, type ValidatorFn } from '@angular/forms';
 import { worksheetAddress } from '../../../../shared/contract/worksheet-address';
 import type { WorksheetRecord } from '../../../../shared/contract/worksheet';
 import { worksheetOfLink } from '../../../../shared/fit/worksheet-link';
 import { redrawWith } from '../../core/redraw-with';
-import { Undo } from '../../ui/undo/undo';
+import { wrongWith } from '../../core/told-fields';
+import { Undo } from '../undo/undo';
 
-/** A worksheet attached by its link, which is run at once; what it comes to is shown before it is saved. */
+/**
+ * A worksheet attached by its link, which is run at once; what it comes to is shown before it is saved. A text that is no
+ * such link keeps the form from being sent, so that it is not lost unnoticed.
+ */
 @Component({
   selector: 'sl-worksheet-field',
   imports: [ReactiveFormsModule],
@@ -22,8 +26,7 @@ import { Undo } from '../../ui/undo/undo';
         <button type="button" class="sl-bare-button" (click)="remove(record)">Take the worksheet off</button>
       } @else {
         <p class="sl-quiet">
-          Size the fix in a <a href="/worksheets" target="_blank" rel="noopener">worksheet</a>, copy its link
-          and paste it here: readers then run it with their own readings.
+          {{ why() }} <a href="/worksheets" target="_blank" rel="noopener">To the worksheets</a>
         </p>
         <div class="row">
           <input
@@ -34,6 +37,7 @@ import { Undo } from '../../ui/undo/undo';
             [attr.aria-label]="'Link of a worksheet'"
             [attr.aria-describedby]="refusal() ? fieldId() + '-refusal' : null"
             [formControl]="link"
+            (change)="attach()"
             (keydown.enter)="$event.preventDefault(); attach()"
           />
           <button type="button" class="sl-plain-button" (click)="attach()">Attach</button>
@@ -76,12 +80,25 @@ import { Undo } from '../../ui/undo/undo';
 export class WorksheetField {
   readonly control = input.required<FormControl<WorksheetRecord | null>>();
   readonly fieldId = input.required<string>();
+  /** What it is good for here. */
+  readonly why = input(
+    'Size the fix in a worksheet, copy its link and paste it here: readers then run it with their own readings.',
+  );
   private readonly undo = inject(Undo);
-  protected readonly link = new FormControl('', { nonNullable: true });
-  protected readonly refusal = signal('');
+  protected readonly link = new FormControl('', { nonNullable: true, validators: [isWorksheetLink] });
+  private readonly linkIsRead: ValidatorFn = () => this.link.errors;
 
   constructor() {
     redrawWith(this.control);
+    effect((leave) => {
+      const control = this.control();
+      untracked(() => control.addValidators(this.linkIsRead));
+      leave(() => control.removeValidators(this.linkIsRead));
+    });
+  }
+
+  protected refusal(): string {
+    return this.link.touched ? wrongWith(this.link) : '';
   }
 
   protected addressOf(record: WorksheetRecord): string {
@@ -89,11 +106,14 @@ export class WorksheetField {
   }
 
   protected attach(): void {
-    const read = worksheetOfLink(this.link.value);
-    this.refusal.set('refusal' in read ? read.refusal : '');
-    if (!('record' in read)) return;
-    this.control().setValue(read.record);
-    this.link.setValue('');
+    this.link.markAsTouched();
+    const read = this.link.value.trim() === '' ? null : worksheetOfLink(this.link.value.trim());
+    if (read && 'record' in read) {
+      this.link.reset();
+      this.control().setValue(read.record);
+    } else {
+      this.control().updateValueAndValidity();
+    }
   }
 
   protected remove(record: WorksheetRecord): void {
@@ -101,3 +121,10 @@ export class WorksheetField {
     this.undo.offer('Worksheet taken off', () => this.control().setValue(record));
   }
 }
+
+/** Lets an empty field and the link of a worksheet pass; says in words why another text does not. */
+const isWorksheetLink: ValidatorFn = ({ value }) => {
+  const link = String(value).trim();
+  const read = link === '' ? null : worksheetOfLink(link);
+  return read && 'refusal' in read ? { told: read.refusal } : null;
+};
