@@ -44,6 +44,7 @@ export function resolveContent(content: DemoContent, catalogue: Catalogue, photo
       photoId: photoIds[index]!,
       alt: item.alt,
       caption: item.caption,
+      callouts: [...item.callouts],
     })),
     sources: content.sources,
   };

@@ -1,3 +1,4 @@
+import type { Callout } from '../../shared/contract/callouts.js';
 import type { Acceptance } from '../../shared/contract/edition-content.js';
 import type {
   Afterwards,
@@ -61,6 +62,7 @@ export interface DemoDrawing {
   readonly svg: string;
   readonly alt: string;
   readonly caption: string;
+  readonly callouts: readonly Callout[];
 }
 export interface DemoContent {
   readonly title: string;
@@ -192,7 +194,13 @@ const listed = (text: string | undefined, separator: string): string[] =>
     .map((item) => item.trim())
     .filter((item) => item !== '');
 
-export const drawing = (svg: string, alt: string, caption: string): DemoDrawing => ({ svg, alt, caption });
+/** A drawing of the write-up with what is drawn on it in turn. */
+export const drawing = (
+  svg: string,
+  alt: string,
+  caption: string,
+  callouts: readonly Callout[] = [],
+): DemoDrawing => ({ svg, alt, caption, callouts });
 
 interface WriteUpParts extends Omit<DemoContent, 'title' | 'symptoms' | 'sources'> {
   by: string;

@@ -36,6 +36,7 @@ export function createEditionComparer(hardware: HardwareService, photos: PhotoLo
       photos.photosByIds(contents.flatMap(photoIdsOf)),
     ]);
     const revisions = new Map([...revisionsOf.values()].flat().map((revision) => [revision.id, revision]));
+    const uses = contents.flatMap((content) => content.photos).reverse();
     const part = (id: number): string => parts.get(id)?.name ?? 'a part that is gone';
     return {
       part,
@@ -44,7 +45,10 @@ export function createEditionComparer(hardware: HardwareService, photos: PhotoLo
         return revision ? `${part(revision.partId)} ${revision.label}` : 'a revision of another part';
       },
       symptom: (slug) => symptoms.get(slug)?.label ?? slug,
-      photo: (id) => pictures.get(id)?.alt ?? 'a photo that is gone',
+      photo(id) {
+        const told = uses.find((use) => use.photoId === id && use.alt !== '');
+        return told?.alt ?? pictures.get(id)?.alt ?? 'a photo that is gone';
+      },
     };
   }
 }

@@ -54,7 +54,7 @@ describe('edition links', () => {
     const links = editionLinks(
       content({
         symptoms: ['rocks', 'rocks'],
-        photos: [{ photoId: 6, alt: 'x', caption: '' }],
+        photos: [{ photoId: 6, alt: 'x', caption: '', callouts: [] }],
         fixes: [
           {
             ...fix,

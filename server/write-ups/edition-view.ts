@@ -1,4 +1,4 @@
-import type { EditionContent, Fix, JointSide } from '../../shared/contract/edition-content.js';
+import type { EditionContent, Fix, JointSide, PhotoUse } from '../../shared/contract/edition-content.js';
 import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type { Photo } from '../../shared/contract/photos.js';
 import type {
@@ -6,6 +6,7 @@ import type {
   EditionView,
   FixView,
   JointSideView,
+  PhotoShown,
   RichText,
 } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
@@ -64,9 +65,9 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
           ...evidenceOf(known.get(fix.key)),
           cautions: placed.filter((caution) => caution.fixKey === fix.key),
         })),
-        photos: content.photos.flatMap(({ photoId, alt, caption }) => {
-          const photo = pictures.get(photoId);
-          return photo ? [{ photo, alt, caption }] : [];
+        photos: content.photos.flatMap((use) => {
+          const photo = pictures.get(use.photoId);
+          return photo ? [{ ...shownAs(photo, use), caption: use.caption }] : [];
         }),
         sources: renderText(content.sources),
         cautions: placed.filter((caution: Caution) => caution.fixKey === null),
@@ -74,6 +75,17 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
 
       function partNameOf(revision: RevisionRef | undefined): string | null {
         return (revision && parts.get(revision.partId)?.name) ?? null;
+      }
+
+      /** A step's photo says and shows what it does where it stands among the photos of the write-up. */
+      function photoOfStep(photoId: number | null): PhotoShown | null {
+        const photo = photoId === null ? undefined : pictures.get(photoId);
+        return photo
+          ? shownAs(
+              photo,
+              content.photos.find((use) => use.photoId === photoId),
+            )
+          : null;
       }
 
       function textOf(fix: Fix): Omit<FixView, 'cautions' | keyof ReturnType<typeof evidenceOf>> {
@@ -95,7 +107,7 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
           steps: fix.steps.map((step) => ({
             key: step.key,
             text: renderText(step.text),
-            photo: (step.photoId === null ? undefined : pictures.get(step.photoId)) ?? null,
+            photo: photoOfStep(step.photoId),
           })),
           revisions: fix.revisionIds.flatMap((id) => {
             const revision = revisions.get(id);
@@ -105,6 +117,11 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
       }
     },
   };
+}
+
+/** Editions from before callouts lack the field. */
+function shownAs(photo: Photo, use: PhotoUse | undefined): PhotoShown {
+  return { photo, alt: use?.alt || photo.alt, callouts: use?.callouts ?? [] };
 }
 
 /** A fix that was never published nor on the desk has nothing behind it yet. */

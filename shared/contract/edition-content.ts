@@ -1,12 +1,10 @@
 import { z } from 'zod';
-import { Id, Slug, line, passage } from './primitives.js';
+import { Callouts } from './callouts.js';
+import { Id, ItemKey, Slug, line, passage } from './primitives.js';
 import { WorksheetRecord } from './worksheet.js';
 import { Afterwards, FixKind, Instrument, Permanence, ReadingUnit } from './vocabulary.js';
 
-/** Identity of a fix, reading or step across editions; made by the editor. */
-export const ItemKey = z
-  .string()
-  .regex(/^[a-z0-9-]{8,36}$/, 'takes 8 to 36 lower-case letters, digits and hyphens');
+export { ItemKey };
 
 /** Whether the write-up holds for a revision, as its author found it. A revision that is not listed is not known. */
 export const RevisionMark = z.strictObject({ revisionId: Id, holds: z.boolean() });
@@ -66,7 +64,13 @@ export const Fix = z.strictObject({
 });
 export type Fix = z.infer<typeof Fix>;
 
-export const PhotoUse = z.strictObject({ photoId: Id, alt: line(300), caption: line(300) });
+export const PhotoUse = z.strictObject({
+  photoId: Id,
+  alt: line(300),
+  caption: line(300),
+  /** Arrows, rings and dimensions drawn on it here. Texts from before callouts have none. */
+  callouts: Callouts.default([]),
+});
 export type PhotoUse = z.infer<typeof PhotoUse>;
 
 /**

@@ -10,6 +10,11 @@ export const IdText = z.coerce
   .positive('is a positive number')
   .max(Number.MAX_SAFE_INTEGER);
 
+/** Identity of a fix, reading, step or callout across editions; made by the editor. */
+export const ItemKey = z
+  .string()
+  .regex(/^[a-z0-9-]{8,36}$/, 'takes 8 to 36 lower-case letters, digits and hyphens');
+
 /** Lower-case words joined by hyphens, as they stand in addresses. */
 export const Slug = z
   .string()

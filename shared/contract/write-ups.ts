@@ -1,4 +1,5 @@
 import { z } from 'zod';
+import { Callout } from './callouts.js';
 import { EditionContent, Acceptance } from './edition-content.js';
 import { PartRef, RevisionRef, Symptom } from './hardware.js';
 import { Photo } from './photos.js';
@@ -75,6 +76,10 @@ export const JointSideView = z.object({
 });
 export type JointSideView = z.infer<typeof JointSideView>;
 
+/** A photo as a write-up shows it: with the words for those who cannot see it, and with what is drawn on it. */
+export const PhotoShown = z.object({ photo: Photo, alt: z.string(), callouts: z.array(Callout) });
+export type PhotoShown = z.infer<typeof PhotoShown>;
+
 export const FixView = z.object({
   key: z.string(),
   title: z.string(),
@@ -85,7 +90,7 @@ export const FixView = z.object({
   why: RichText,
   tools: z.array(z.string()),
   materials: z.array(z.string()),
-  steps: z.array(z.object({ key: z.string(), text: RichText, photo: Photo.nullable() })),
+  steps: z.array(z.object({ key: z.string(), text: RichText, photo: PhotoShown.nullable() })),
   revisions: z.array(RevisionRef.extend({ partName: z.string() })),
   afterwards: z.array(Afterwards),
   afterwardsNote: z.string(),
@@ -121,7 +126,7 @@ export const EditionView = z.object({
     }),
   ),
   fixes: z.array(FixView),
-  photos: z.array(z.object({ photo: Photo, alt: z.string(), caption: z.string() })),
+  photos: z.array(PhotoShown.extend({ caption: z.string() })),
   sources: RichText,
   cautions: z.array(Caution),
 });

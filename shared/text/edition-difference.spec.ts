@@ -162,10 +162,10 @@ describe('edition difference', () => {
 
   it('keeps two uses of one photo apart', () => {
     const photos = [
-      { photoId: 4, alt: 'The lip', caption: '' },
-      { photoId: 4, alt: 'The lip again', caption: '' },
+      { photoId: 4, alt: 'The lip', caption: '', callouts: [] },
+      { photoId: 4, alt: 'The lip again', caption: '', callouts: [] },
     ];
-    const changedSecond = [photos[0]!, { photoId: 4, alt: 'The lip from below', caption: '' }];
+    const changedSecond = [photos[0]!, { photoId: 4, alt: 'The lip from below', caption: '', callouts: [] }];
     expect(fieldsIn(content({ photos }), content({ photos: changedSecond }))).toEqual(['photos.4.2']);
   });
 });

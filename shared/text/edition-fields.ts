@@ -8,6 +8,7 @@ import {
   type ReadingUnit,
 } from '../contract/vocabulary.js';
 import type { WorksheetRecord } from '../contract/worksheet.js';
+import { calloutPlace, calloutWords } from './callout-words.js';
 
 /** What things are called that a content only points at. */
 export interface ContentNames {
@@ -89,16 +90,18 @@ function fixFields(fix: Fix, names: ContentNames): EditionField[] {
   ];
 }
 
-/** A photo that is shown twice counts as two. */
+/** A photo that is shown twice counts as two. Editions from before callouts lack the field. */
 function photoFields(content: EditionContent): EditionField[] {
   const seen = new Map<number, number>();
-  return content.photos.map(({ photoId, alt, caption }) => {
+  return content.photos.map(({ photoId, alt, caption, callouts = [] }) => {
     const times = (seen.get(photoId) ?? 0) + 1;
     seen.set(photoId, times);
     return {
       field: times === 1 ? `photos.${photoId}` : `photos.${photoId}.${times}`,
       label: `Photo “${alt}”`,
-      text: caption === '' ? alt : `${alt}\n${caption}`,
+      text: [alt, caption, ...callouts.map((one) => `${calloutWords(one)}, ${calloutPlace(one)}`)]
+        .filter((line) => line !== '')
+        .join('\n'),
     };
   });
 }

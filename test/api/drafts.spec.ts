@@ -174,7 +174,7 @@ describe('saving', () => {
         plainFix({ key: twice, revisionIds: [999_999_999] }),
         plainFix({ key: twice, steps: [{ key: newKey(), text: '', photoId: theirs }] }),
       ],
-      photos: [{ photoId: 999_999_999, alt: '', caption: '' }],
+      photos: [{ photoId: 999_999_999, alt: '', caption: '', callouts: [] }],
     });
     expect([status, body.type]).toEqual([422, '/problems/not-valid']);
     expect(pathsOf(body.fields).sort()).toEqual([
@@ -206,7 +206,7 @@ describe('saving', () => {
     const photoId = await insertPhoto(author.account.id);
     const draft = await saveNewDraft(author, {
       ...emptyContent,
-      photos: [{ photoId, alt: 'The lip', caption: '' }],
+      photos: [{ photoId, alt: 'The lip', caption: '', callouts: [] }],
     });
     expect(draft.photos).toMatchObject([{ id: photoId, alt: 'The lip', widths: [480] }]);
   });
@@ -361,7 +361,9 @@ describe('the next edition', () => {
 
   it('may go on using the photos of earlier editions, whoever took them', async () => {
     const photoId = await insertPhoto(author.account.id);
-    const content = completeContent(joint, { photos: [{ photoId, alt: 'The raised lip', caption: '' }] });
+    const content = completeContent(joint, {
+      photos: [{ photoId, alt: 'The raised lip', caption: '', callouts: [] }],
+    });
     const { slug } = await publishNew(author, moderator, content);
     const draft: Draft = (await moderator.post(`/api/write-ups/${slug}/editions`)).body;
     const saved = await put(moderator, draft, { ...content, sources: 'More.' });

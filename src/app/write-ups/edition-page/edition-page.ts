@@ -2,7 +2,7 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import { instrumentWords } from '../../../../shared/contract/vocabulary';
 import type { EditionView, RichText } from '../../../../shared/contract/write-ups';
 import { CautionBox } from '../../ui/caution-box/caution-box';
-import { PhotoView } from '../../ui/photo/photo';
+import { PhotoCallouts } from '../../ui/photo-callouts/photo-callouts';
 import { RichTextView } from '../../ui/rich-text/rich-text';
 import { readingText } from '../figures';
 import { FixSheet } from './fix-sheet';
@@ -11,7 +11,7 @@ import { JointSketch } from './joint-sketch';
 /** An edition as readers see it: published, old, or in the editor's preview. Cautions stand above what they warn of. */
 @Component({
   selector: 'sl-edition-page',
-  imports: [CautionBox, FixSheet, JointSketch, PhotoView, RichTextView],
+  imports: [CautionBox, FixSheet, JointSketch, PhotoCallouts, RichTextView],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './edition-page.html',
   styleUrl: './edition-page.scss',

@@ -3,7 +3,7 @@ import { afterwardsWords, fixKindWords } from '../../../../shared/contract/vocab
 import type { FixView } from '../../../../shared/contract/write-ups';
 import { CautionBox } from '../../ui/caution-box/caution-box';
 import { PermanenceLabel } from '../../ui/permanence-label/permanence-label';
-import { PhotoView } from '../../ui/photo/photo';
+import { PhotoCallouts } from '../../ui/photo-callouts/photo-callouts';
 import { RichTextView } from '../../ui/rich-text/rich-text';
 import { StandingLabel } from '../../ui/standing-label/standing-label';
 import { AttachedWorksheet } from './attached-worksheet';
@@ -12,7 +12,7 @@ import { acceptanceParts } from '../figures';
 /** One remedy: its facts, its cautions, then why, what is needed, the steps, and how to know that it worked. */
 @Component({
   selector: 'sl-fix-sheet',
-  imports: [AttachedWorksheet, CautionBox, PermanenceLabel, PhotoView, RichTextView, StandingLabel],
+  imports: [AttachedWorksheet, CautionBox, PermanenceLabel, PhotoCallouts, RichTextView, StandingLabel],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './fix-sheet.html',
   styleUrl: './fix-sheet.scss',

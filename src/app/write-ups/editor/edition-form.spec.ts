@@ -39,7 +39,7 @@ const full: EditionContent = {
       acceptance: { quantity: 'tilt', comparison: 'at-most', value: 0.1, unit: 'deg' },
     },
   ],
-  photos: [{ photoId: 5, alt: 'The plate', caption: '' }],
+  photos: [{ photoId: 5, alt: 'The plate', caption: '', callouts: [] }],
 };
 
 describe('the form of an edition', () => {
