@@ -7,6 +7,7 @@ export type AuditSubject =
   | 'caution'
   | 'edition'
   | 'feature'
+  | 'fit-report'
   | 'flag'
   | 'library-caution'
   | 'maker'

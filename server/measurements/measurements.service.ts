@@ -48,27 +48,26 @@ export function createMeasurementService(around: {
     return consensus;
   }
 
-  async function decide(
+  /** Sets a reading aside, or gives it its say again where there is no reason; within the transaction of what asks for it. */
+  async function decideWithin(
+    trx: Knex,
     id: number,
     actorId: number,
     reason: string | null,
   ): Promise<{ consensus: DimensionConsensus | null }> {
-    return knex.transaction(async (trx) => {
-      const measurement = await store.byId(id, trx);
-      if (!measurement) throw new NotFound('There is no such reading.');
-      const feature = (await store.holdFeature(measurement.featureId, trx))!;
-      if (reason !== null && measurement.setAside)
-        throw new AlreadyThere('That reading is set aside already.');
-      const by = reason === null ? null : { accountId: actorId, reason, at: clock() };
-      await store.setAside(id, by, trx);
-      await audit.note(trx, {
-        actorId,
-        action: by ? 'reading-set-aside' : 'reading-taken-back',
-        subject: { kind: 'measurement', id, name: `${measurement.dimension} of ${feature.name}` },
-        reason: reason ?? '',
-      });
-      return { consensus: await refresh(measurement, feature, trx) };
+    const measurement = await store.byId(id, trx);
+    if (!measurement) throw new NotFound('There is no such reading.');
+    const feature = (await store.holdFeature(measurement.featureId, trx))!;
+    if (reason !== null && measurement.setAside) throw new AlreadyThere('That reading is set aside already.');
+    const by = reason === null ? null : { accountId: actorId, reason, at: clock() };
+    await store.setAside(id, by, trx);
+    await audit.note(trx, {
+      actorId,
+      action: by ? 'reading-set-aside' : 'reading-taken-back',
+      subject: { kind: 'measurement', id, name: `${measurement.dimension} of ${feature.name}` },
+      reason: reason ?? '',
     });
+    return { consensus: await refresh(measurement, feature, trx) };
   }
 
   /** Attributes and consensus of features by revision; keys are `feature/revision`. */
@@ -91,6 +90,7 @@ export function createMeasurementService(around: {
 
   return {
     knownOf,
+    decideWithin,
 
     /** Consensus of every dimension of a part that was read. NotFound for a slug that no part has or had. */
     async partMeasurements(slug: string): Promise<PartMeasurements> {
@@ -221,11 +221,11 @@ export function createMeasurementService(around: {
       accountId: number,
       reason: string,
     ): Promise<{ consensus: DimensionConsensus | null }> {
-      return decide(id, accountId, reason);
+      return knex.transaction((trx) => decideWithin(trx, id, accountId, reason));
     },
 
     takeBack(id: number, accountId: number): Promise<{ consensus: DimensionConsensus | null }> {
-      return decide(id, accountId, null);
+      return knex.transaction((trx) => decideWithin(trx, id, accountId, null));
     },
   };
 }

@@ -57,6 +57,13 @@ export function createTrialService({
 
     reportTrialWithin,
     judgeStandings,
+
+    /** Judges the fixes of a published write-up anew, after the desk has taken trials down or put them back. */
+    async judgeAnew(trx: Knex, writeUpId: number): Promise<void> {
+      await publicationStore.lockWriteUp(trx, writeUpId);
+      const content = await published.publishedContent(trx, writeUpId);
+      if (content && (await judgeStandings(trx, writeUpId, content))) await searchOutbox.add(trx, writeUpId);
+    },
   };
 
   /**
