@@ -125,6 +125,7 @@ export function createApp(around: Surroundings): Composition {
     clock,
     limits,
     mail: mail.queue,
+    photos: photos.service,
     measurements: measurements.service,
     searchOutbox: search.outbox,
     audit,

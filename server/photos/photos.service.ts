@@ -65,6 +65,11 @@ export function createPhotoService({
       return new Map((await photos.byIds([...new Set(ids)])).map((photo) => [photo.id, photo]));
     },
 
+    /** Which of the photos are the account's own, and not taken down. */
+    async ownPhotoIds(accountId: number, ids: readonly number[]): Promise<Set<number>> {
+      return new Set(await photos.idsOwnedBy(accountId, ids));
+    },
+
     /** The bytes of a photo file. Throws NotFound. */
     async readFile(name: string): Promise<Buffer> {
       const bytes = await files.get(name);

@@ -71,6 +71,15 @@ export function createPhotosStore(knex: Knex) {
       return rows.length > 0 && rows.every((row) => row.taken_down_at !== null);
     },
 
+    /** Those of the photos that are the owner's and not taken down. */
+    async idsOwnedBy(ownerId: number, ids: readonly number[]): Promise<number[]> {
+      if (ids.length === 0) return [];
+      return knex('photos')
+        .whereIn('id', ids)
+        .where({ owner_id: ownerId, taken_down_at: null })
+        .pluck('id');
+    },
+
     /** Those of the photos that the desk has not taken down. */
     async byIds(ids: readonly number[]): Promise<Photo[]> {
       if (ids.length === 0) return [];

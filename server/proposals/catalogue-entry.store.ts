@@ -94,6 +94,23 @@ export const catalogueEntryStore = {
     );
   },
 
+  /** In the order given; for a revision that has none yet. */
+  async addRevisionPhotos(
+    trx: Knex,
+    revisionId: number,
+    photos: readonly { photoId: number; caption: string }[],
+  ): Promise<void> {
+    if (photos.length === 0) return;
+    await trx('revision_photos').insert(
+      photos.map(({ photoId, caption }, position) => ({
+        revision_id: revisionId,
+        photo_id: photoId,
+        position,
+        caption,
+      })),
+    );
+  },
+
   async addFeature(trx: Knex, partId: number, entry: ProposedFeature): Promise<void> {
     const base = slugFrom(entry.name);
     const taken: string[] = await trx('features')

@@ -151,7 +151,7 @@ function toProposal(row: ProposalRecord): ProposalRow {
   const { payload, partSlug, partName, partKind, makerId, makerSlug, makerName, ...rest } = row;
   return {
     ...rest,
-    entry: fromJson<Proposed>(payload),
+    entry: entryIn(payload),
     part:
       rest.partId === null || partSlug === null
         ? null
@@ -163,4 +163,10 @@ function toProposal(row: ProposalRecord): ProposalRow {
             maker: { id: makerId, slug: makerSlug, name: makerName },
           },
   };
+}
+
+/** Revisions that were proposed before photos could be name none. */
+function entryIn(payload: unknown): Proposed {
+  const entry = fromJson<Proposed>(payload);
+  return entry.kind === 'revision' ? { ...entry, photos: entry.photos ?? [] } : entry;
 }

@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
 import type { AuditLog } from '../audit/audit.js';
+import type { RevisionPhoto } from '../../shared/contract/hardware.js';
 import type { DeskProposal, Proposal, Propose, Proposed } from '../../shared/contract/proposals.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
@@ -8,6 +9,7 @@ import type { Happenings } from '../watches/happenings.js';
 import { catalogueEntryStore as catalogue } from './catalogue-entry.store.js';
 import type { ProposalRow, ProposalStore } from './proposal.store.js';
 import { waitingName, wordsOf } from './proposal-words.js';
+import { createProposedPhotos, type NamedPhoto, type ProposalPhotos } from './proposed-photos.js';
 
 const PlaceInQueue = z.object({ at: z.iso.datetime(), id: z.number().int() });
 const PlaceInMine = z.object({ id: z.number().int() });
@@ -38,16 +40,19 @@ export function createProposalService(around: {
   clock: () => Date;
   store: ProposalStore;
   mail: ProposalMail;
+  photos: ProposalPhotos;
   audit: AuditLog;
   happenings: Happenings;
 }) {
   const { knex, clock, store, mail, audit, happenings } = around;
+  const proposedPhotos = createProposedPhotos(around.photos);
 
   return {
-    /** FieldNotValid for a part that is not there; AlreadyThere where it stands in the catalogue or waits already. */
+    /** FieldNotValid for a part that is not there, NotValid for photos of others; AlreadyThere where it stands in the catalogue or waits already. */
     async propose(accountId: number, { partId, entry }: Propose): Promise<Proposal> {
       await demandPart(partId, entry);
       await demandNew(knex, partId, entry);
+      await proposedPhotos.demandOwn(accountId, entry);
       const id = await store.add({
         partId,
         entry,
@@ -61,7 +66,7 @@ export function createProposalService(around: {
           'Wait for the desk, or give it another name if it is another thing.',
         );
       }
-      return toProposal((await store.byId(id))!);
+      return (await proposalsOf([(await store.byId(id))!]))[0]!;
     },
 
     /** The newest first. */
@@ -69,7 +74,7 @@ export function createProposalService(around: {
       const before = readCursor(PlaceInMine, query.cursor)?.id;
       const rows = await store.ofAccount(accountId, { before, rows: query.limit + 1 });
       const page = toPage(rows, query.limit, ({ id }) => ({ id }));
-      return { items: page.items.map(toProposal), next: page.next };
+      return { items: await proposalsOf(page.items), next: page.next };
     },
 
     /** What waits, the longest wait first. */
@@ -78,11 +83,11 @@ export function createProposalService(around: {
       const after = place && { at: new Date(place.at), id: place.id };
       const rows = await store.waiting({ after, rows: query.limit + 1 });
       const page = toPage(rows, query.limit, ({ id, createdAt }) => ({ at: createdAt.toISOString(), id }));
-      const items = page.items.map((row) => ({
-        ...toProposal(row),
-        person: { id: row.accountId, displayName: row.displayName },
-      }));
-      return { items, next: page.next };
+      const items = await proposalsOf(page.items);
+      return {
+        items: items.map((proposal, index) => ({ ...proposal, person: personOf(page.items[index]!) })),
+        next: page.next,
+      };
     },
 
     /**
@@ -100,7 +105,8 @@ export function createProposalService(around: {
             `Amend the ${proposal.entry.kind}, or decline it.`,
           );
         }
-        const part = await enter(trx, proposal.partId, entry);
+        proposedPhotos.demandOffered(entry, proposal.entry);
+        const part = await enter(trx, proposal.partId, entry, await proposedPhotos.stillThere(entry));
         const decision = { state: 'taken', entry, partId: part.id, reason: null } as const;
         await store.decide(id, { ...decision, by: moderatorId, at: clock() }, trx);
         await mail.queueProposalDecided(trx, {
@@ -149,6 +155,11 @@ export function createProposalService(around: {
     },
   };
 
+  async function proposalsOf(rows: readonly ProposalRow[]): Promise<Proposal[]> {
+    const shown = await proposedPhotos.shown(rows.map((row) => row.entry));
+    return rows.map((row, index) => toProposal(row, shown[index]!));
+  }
+
   async function holdWaiting(id: number, trx: Knex): Promise<ProposalRow> {
     const proposal = await store.hold(id, trx);
     if (!proposal) throw new NotFound('There is no such proposal.', 'Read the list again.');
@@ -172,6 +183,7 @@ async function enter(
   trx: Knex,
   partId: number | null,
   entry: Proposed,
+  photos: readonly NamedPhoto[],
 ): Promise<{ id: number; slug: string }> {
   if (entry.kind === 'part') {
     const makerId =
@@ -183,8 +195,13 @@ async function enter(
   const part = await catalogue.holdPart(trx, partId!);
   if (!part) throw new NotFound('The part is not in the catalogue any more.', 'Decline the proposal.');
   await demandNew(trx, part.id, entry);
-  if (entry.kind === 'feature') await catalogue.addFeature(trx, part.id, entry);
-  else if ((await catalogue.addRevision(trx, part.id, entry)) === 'already-there') throw inCatalogue(entry);
+  if (entry.kind === 'feature') {
+    await catalogue.addFeature(trx, part.id, entry);
+    return part;
+  }
+  const revision = await catalogue.addRevision(trx, part.id, entry);
+  if (revision === 'already-there') throw inCatalogue(entry);
+  await catalogue.addRevisionPhotos(trx, revision, photos);
   return part;
 }
 
@@ -205,12 +222,17 @@ function inCatalogue(entry: Proposed): AlreadyThere {
   );
 }
 
-function toProposal(row: ProposalRow): Proposal {
+function personOf({ accountId, displayName }: ProposalRow): DeskProposal['person'] {
+  return { id: accountId, displayName };
+}
+
+function toProposal(row: ProposalRow, photos: RevisionPhoto[]): Proposal {
   return {
     id: row.id,
     state: row.state,
     part: row.part,
     entry: row.entry,
+    photos,
     createdAt: row.createdAt.toISOString(),
     reason: row.reason,
     decidedAt: row.decidedAt?.toISOString() ?? null,

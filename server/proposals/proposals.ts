@@ -8,6 +8,7 @@ import { createMergeService, type IndexNotices } from './merge.service.js';
 import { createProposalStore } from './proposal.store.js';
 import { proposalBindings } from './proposals.routes.js';
 import { createProposalService, type ProposalMail } from './proposals.service.js';
+import type { ProposalPhotos } from './proposed-photos.js';
 
 /** What members propose for the catalogue, what the desk makes of it, and the merging of what is there twice. */
 export function createProposals(around: {
@@ -15,6 +16,7 @@ export function createProposals(around: {
   clock: () => Date;
   limits: RateLimits;
   mail: ProposalMail;
+  photos: ProposalPhotos;
   measurements: MeasurementService;
   searchOutbox: IndexNotices;
   audit: AuditLog;

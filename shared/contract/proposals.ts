@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { PartRef } from './hardware.js';
+import { PartRef, RevisionPhoto } from './hardware.js';
 import { Process } from './joints.js';
 import { Day, Id, IdText, Instant, PageQuery, Slug, line, pageOf, passage } from './primitives.js';
 import { moderators, route, signedIn } from './route.js';
@@ -16,6 +16,8 @@ export const ProposedPart = z.strictObject({
 });
 export type ProposedPart = z.infer<typeof ProposedPart>;
 
+export const mostProposedPhotos = 3;
+
 export const ProposedRevision = z.strictObject({
   kind: z.literal('revision'),
   label: line(60, 1),
@@ -24,6 +26,15 @@ export const ProposedRevision = z.strictObject({
   soldTo: Day.nullable(),
   howToTell: passage(2000),
   whatChanged: passage(2000),
+  /** Photos of the proposer's own that show how to tell it. */
+  photos: z
+    .array(z.strictObject({ photoId: Id, caption: line(200, 3) }))
+    .max(mostProposedPhotos, `takes at most ${mostProposedPhotos} photos`)
+    .refine(
+      (photos) => new Set(photos.map(({ photoId }) => photoId)).size === photos.length,
+      'names a photo twice',
+    )
+    .default([]),
 });
 export type ProposedRevision = z.infer<typeof ProposedRevision>;
 
@@ -71,6 +82,8 @@ export const Proposal = z.object({
   /** The part it belongs to; of a part, the one it became. */
   part: PartRef.nullable(),
   entry: Proposed,
+  /** The photos that the entry names, as far as they are still there. */
+  photos: z.array(RevisionPhoto),
   createdAt: Instant,
   reason: z.string().nullable(),
   decidedAt: Instant.nullable(),

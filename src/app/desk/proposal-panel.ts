@@ -78,7 +78,7 @@ export class ProposalPanel implements OnInit {
   });
 
   ngOnInit(): void {
-    fillEntry(this.entry, this.proposal().entry);
+    fillEntry(this.entry, this.proposal());
   }
 
   protected take(): void {

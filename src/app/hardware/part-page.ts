@@ -26,7 +26,7 @@ import { CanonicalPart } from './canonical-part';
 import { Hardware } from './hardware';
 import { MeasurementSection } from './measurements/measurement-section';
 import { RevisionPhotoTools } from './revision-photos/revision-photo-tools';
-import { RevisionPhotos } from './revision-photos/revision-photos';
+import { PhotoStrip } from '../ui/photo/photo-strip';
 import { RevisionTimeLine } from './revision-time-line';
 
 /** A part: its revisions on a time line, how to tell which one is on the bench, what changed, and what is written about it. */
@@ -39,7 +39,7 @@ import { RevisionTimeLine } from './revision-time-line';
     PhotoView,
     ProblemNote,
     RevisionPhotoTools,
-    RevisionPhotos,
+    PhotoStrip,
     RevisionTimeLine,
     RouterLink,
   ],

@@ -11,7 +11,12 @@ import { toSignal } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
 import { ActivatedRoute, RouterLink } from '@angular/router';
 import { catchError, map, of, throwError } from 'rxjs';
-import { proposalKinds, type Proposal, type Proposed } from '../../../../shared/contract/proposals';
+import {
+  mostProposedPhotos,
+  proposalKinds,
+  type Proposal,
+  type Proposed,
+} from '../../../../shared/contract/proposals';
 import { formSending } from '../../core/form-sending';
 import { loadEach } from '../../core/load';
 import { ShimloreTitles } from '../../core/titles';
@@ -74,7 +79,7 @@ import { headOfEntry } from './proposal-words';
               propose it there.
             </p>
           }
-          <sl-hardware-entry [form]="form" [kind]="kind()" [makers]="makers()" />
+          <sl-hardware-entry [form]="form" [kind]="kind()" [makers]="makers()" [mostPhotos]="mostPhotos" />
           <sl-problem-note [problem]="sending.problem()" />
           <button type="submit" class="sl-strong-button" [disabled]="sending.busy()">
             Send it to the desk
@@ -123,6 +128,7 @@ export class ProposePage {
   protected readonly sending = formSending();
   protected readonly sent = signal<Proposal | null>(null);
   protected readonly head = headOfEntry;
+  protected readonly mostPhotos = mostProposedPhotos;
   protected readonly part = loadEach(
     inject(ActivatedRoute).queryParamMap.pipe(map((params) => params.get('part'))),
     (slug) => (slug === null ? of(null) : this.hardware.part(slug)),
@@ -161,6 +167,7 @@ export class ProposePage {
 
   protected another(): void {
     this.form.reset();
+    this.form.controls.revision.controls.photos.clear();
     this.sent.set(null);
   }
 }

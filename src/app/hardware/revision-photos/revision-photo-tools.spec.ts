@@ -6,8 +6,8 @@ import type { Photo } from '../../../../shared/contract/photos';
 import type { Revision, RevisionPhoto } from '../../../../shared/contract/hardware';
 import { NewPhoto } from '../../ui/new-photo/new-photo';
 import { PhotoChoice } from '../../ui/new-photo/photo-choice';
+import { PhotoStrip } from '../../ui/photo/photo-strip';
 import { RevisionPhotoTools } from './revision-photo-tools';
-import { RevisionPhotos } from './revision-photos';
 
 const photo = (id: number, alt: string): Photo => ({
   id,
@@ -47,8 +47,8 @@ async function toolsOf(photos: RevisionPhoto[]) {
 
 describe('the photos of a revision', () => {
   it('stand small with their captions, and each leads to its largest size', async () => {
-    const fixture = TestBed.createComponent(RevisionPhotos);
-    fixture.componentRef.setInput('label', 'Rev B');
+    const fixture = TestBed.createComponent(PhotoStrip);
+    fixture.componentRef.setInput('label', 'How to tell Rev B');
     fixture.componentRef.setInput('photos', [{ photo: photo(7, 'A blue stripe'), caption: 'The stripe' }]);
     await fixture.whenStable();
     const page = fixture.nativeElement as HTMLElement;

@@ -28,7 +28,7 @@ import { LoadStateView } from '../../ui/load-state/load-state';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { CanonicalPart } from '../canonical-part';
 import { Hardware } from '../hardware';
-import { RevisionPhotos } from '../revision-photos/revision-photos';
+import { PhotoStrip } from '../../ui/photo/photo-strip';
 import { knowledgeOf, percentOf, questionsOf, type Question } from './question';
 
 interface Given {
@@ -42,7 +42,7 @@ const instruments: readonly Instrument[] = ['caliper', 'micrometer', 'ruler', 'o
 /** Which revision one holds, found by one question at a time, each the one that narrows most. */
 @Component({
   selector: 'sl-which-one-page',
-  imports: [Field, Labelled, LoadStateView, ProblemNote, ReactiveFormsModule, RevisionPhotos, RouterLink],
+  imports: [Field, Labelled, LoadStateView, ProblemNote, ReactiveFormsModule, PhotoStrip, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './which-one-page.html',
   styleUrl: './which-one-page.scss',

@@ -1,6 +1,7 @@
 import { FormControl, FormGroup, Validators } from '@angular/forms';
-import type { Proposed } from '../../../../shared/contract/proposals';
+import type { Proposal, Proposed } from '../../../../shared/contract/proposals';
 import type { FeatureKind, PartKind } from '../../../../shared/contract/vocabulary';
+import { attachedPhotoForm, photosForm } from '../new-photo/photos-form';
 
 const needed = (value = ''): FormControl<string> =>
   new FormControl(value, { nonNullable: true, validators: [Validators.required] });
@@ -21,6 +22,7 @@ export function entryForm() {
       soldTo: free(),
       howToTell: free(),
       whatChanged: free(),
+      photos: photosForm(),
     }),
     feature: new FormGroup({
       featureKind: new FormControl<FeatureKind>('boss', { nonNullable: true }),
@@ -35,17 +37,25 @@ export type EntryForm = ReturnType<typeof entryForm>;
 export function entryOf(form: EntryForm, kind: Proposed['kind']): Proposed {
   if (kind === 'part') return { kind, ...form.controls.part.getRawValue() };
   if (kind === 'feature') return { kind, ...form.controls.feature.getRawValue() };
-  const revision = form.controls.revision.getRawValue();
-  return { kind, ...revision, soldFrom: revision.soldFrom || null, soldTo: revision.soldTo || null };
+  const { photos, ...revision } = form.controls.revision.getRawValue();
+  return {
+    kind,
+    ...revision,
+    soldFrom: revision.soldFrom || null,
+    soldTo: revision.soldTo || null,
+    photos: photos.map(({ photo, caption }) => ({ photoId: photo.id, caption })),
+  };
 }
 
-export function fillEntry(form: EntryForm, entry: Proposed): void {
+/** Fills the fields with a proposal, its photos as far as they are still there. */
+export function fillEntry(form: EntryForm, { entry, photos }: Pick<Proposal, 'entry' | 'photos'>): void {
   if (entry.kind === 'part') form.controls.part.patchValue(entry);
   else if (entry.kind === 'feature') form.controls.feature.patchValue(entry);
-  else
-    form.controls.revision.patchValue({
-      ...entry,
-      soldFrom: entry.soldFrom ?? '',
-      soldTo: entry.soldTo ?? '',
-    });
+  else {
+    const { label, soldFrom, soldTo, howToTell, whatChanged } = entry;
+    const fields = form.controls.revision;
+    fields.patchValue({ label, soldFrom: soldFrom ?? '', soldTo: soldTo ?? '', howToTell, whatChanged });
+    for (const { photo, caption } of photos)
+      fields.controls.photos.push(attachedPhotoForm(photo, true, caption));
+  }
 }

@@ -3,12 +3,13 @@ import { ReactiveFormsModule } from '@angular/forms';
 import type { Proposed } from '../../../../shared/contract/proposals';
 import { FeatureKind, PartKind, partKindWords } from '../../../../shared/contract/vocabulary';
 import { Field, Labelled } from '../labelled/labelled';
+import { PhotosField } from '../new-photo/photos-field';
 import type { EntryForm } from './entry-form';
 
 /** The fields of a part, a revision or a feature. Stands inside a form of the page's own. */
 @Component({
   selector: 'sl-hardware-entry',
-  imports: [Field, Labelled, ReactiveFormsModule],
+  imports: [Field, Labelled, PhotosField, ReactiveFormsModule],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @switch (kind()) {
@@ -63,6 +64,14 @@ import type { EntryForm } from './entry-form';
         <sl-labelled label="What changed" hint="Against the one before" [control]="revision.whatChanged">
           <textarea slField rows="3" maxlength="2000" [formControl]="revision.whatChanged"></textarea>
         </sl-labelled>
+        @if (mostPhotos() || revision.photos.length) {
+          <sl-photos-field
+            legend="Photos that show how to tell it"
+            captionLabel="What to look at"
+            [photos]="revision.photos"
+            [most]="mostPhotos()"
+          />
+        }
       }
       @case ('feature') {
         @let feature = form().controls.feature.controls;
@@ -113,6 +122,8 @@ export class HardwareEntry {
   readonly kind = input.required<Proposed['kind']>();
   /** Names that the maker's field offers. */
   readonly makers = input<readonly string[]>([]);
+  /** How many photos of a revision can be added; with none, those that are there can still be taken out. */
+  readonly mostPhotos = input(0);
   protected readonly partKinds = PartKind.options.map((value) => ({ value, words: partKindWords[value] }));
   protected readonly featureKinds = FeatureKind.options;
 }

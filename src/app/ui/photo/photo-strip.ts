@@ -1,14 +1,20 @@
 import { ChangeDetectionStrategy, Component, input } from '@angular/core';
-import type { RevisionPhoto } from '../../../../shared/contract/hardware';
-import { PhotoView } from '../../ui/photo/photo';
+import type { Photo } from '../../../../shared/contract/photos';
+import { PhotoView } from './photo';
 
-/** Small photos that show what tells a revision from the others; each leads to its largest size. */
+/** A photo with what to look at in it, where that is said. */
+export interface CaptionedPhoto {
+  readonly photo: Photo;
+  readonly caption: string;
+}
+
+/** Small photos in a row; each leads to its largest size. */
 @Component({
-  selector: 'sl-revision-photos',
+  selector: 'sl-photo-strip',
   imports: [PhotoView],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
-    <ul class="sl-plain-list" [attr.aria-label]="'How to tell ' + label()">
+    <ul class="sl-plain-list" [attr.aria-label]="label()">
       @for (item of photos(); track item.photo.id) {
         <li>
           <figure>
@@ -16,7 +22,9 @@ import { PhotoView } from '../../ui/photo/photo';
               <sl-photo [photo]="item.photo" sizes="11rem" />
               <span class="sl-visually-hidden">Larger</span>
             </a>
-            <figcaption>{{ item.caption }}</figcaption>
+            @if (item.caption) {
+              <figcaption>{{ item.caption }}</figcaption>
+            }
           </figure>
         </li>
       }
@@ -49,12 +57,12 @@ import { PhotoView } from '../../ui/photo/photo';
     }
   `,
 })
-export class RevisionPhotos {
-  readonly photos = input.required<readonly RevisionPhoto[]>();
-  /** Such as "Rev B". */
+export class PhotoStrip {
+  readonly photos = input.required<readonly CaptionedPhoto[]>();
+  /** What they show together, for those who cannot see it: "How to tell Rev B". */
   readonly label = input.required<string>();
 
-  protected largest({ photo }: RevisionPhoto): string {
+  protected largest({ photo }: CaptionedPhoto): string {
     return `/photos/${photo.hash}-${Math.max(...photo.widths)}.webp`;
   }
 }
