@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import type { MakerRef, PartRef, RevisionRef, Symptom } from '../../shared/contract/hardware.js';
 import type { PartKind } from '../../shared/contract/vocabulary.js';
+import { revisionRefColumns, toRevisionRef, type RevisionRefRow } from '../revision-ref.js';
 
 /** A part with what only lists show beside it. */
 export type PartRow = PartRef & { about: string };
@@ -61,14 +62,16 @@ export function createHardwareStore(knex: Knex) {
 
     /** Oldest first within each part. */
     async revisionsOfParts(partIds: readonly number[]): Promise<RevisionRef[]> {
-      return knex('revisions')
-        .select('id', { partId: 'part_id' }, 'label')
+      const rows: RevisionRefRow[] = await knex('revisions')
+        .select(revisionRefColumns)
         .whereIn('part_id', partIds)
         .orderBy(['part_id', 'position']);
+      return rows.map(toRevisionRef);
     },
 
     async revisionsByIds(ids: readonly number[]): Promise<RevisionRef[]> {
-      return knex('revisions').select('id', { partId: 'part_id' }, 'label').whereIn('id', ids);
+      const rows: RevisionRefRow[] = await knex('revisions').select(revisionRefColumns).whereIn('id', ids);
+      return rows.map(toRevisionRef);
     },
 
     /** Published write-ups with a joint on each part; parts without any are missing. */

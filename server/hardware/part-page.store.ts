@@ -11,7 +11,7 @@ export function createPartPageStore(knex: Knex, revisions: RevisionStore) {
     async partPage(slug: string): Promise<PartPage | undefined> {
       const part = await knex('parts as p')
         .join('makers as m', 'm.id', 'p.maker_id')
-        .leftJoin('photos as f', 'f.id', 'p.photo_id')
+        .leftJoin('photos as f', (on) => on.on('f.id', 'p.photo_id').andOnNull('f.taken_down_at'))
         .where('p.slug', slug)
         .first('p.id', 'p.slug', 'p.name', 'p.kind', 'p.about', {
           makerId: 'm.id',

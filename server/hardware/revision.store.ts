@@ -1,9 +1,13 @@
 import type { Knex } from 'knex';
 import type { Revision, RevisionPhoto } from '../../shared/contract/hardware.js';
 import type { Photo } from '../../shared/contract/photos.js';
+import { toRevisionRef } from '../revision-ref.js';
 import { fromJson, groupBy } from '../rows.js';
 
-interface RevisionRow extends Omit<Revision, 'photos'>, PhotoColumns {}
+interface RevisionRow extends Omit<Revision, 'photos' | 'announced' | 'announcedAt'>, PhotoColumns {
+  state: 'sold' | 'announced';
+  announcedAt: Date | null;
+}
 
 interface PhotoColumns extends Omit<Photo, 'id' | 'hash' | 'widths'> {
   photoId: number;
@@ -33,14 +37,23 @@ export function createRevisionStore(knex: Knex) {
     async ofPart(partId: number): Promise<Revision[]> {
       const rows: RevisionRow[] = await knex('revisions as r')
         .leftJoin('revision_photos as rp', 'rp.revision_id', 'r.id')
-        .leftJoin('photos as f', 'f.id', 'rp.photo_id')
+        .leftJoin('photos as f', (on) => on.on('f.id', 'rp.photo_id').andOnNull('f.taken_down_at'))
         .where('r.part_id', partId)
         .select('r.id', 'r.label', { partId: 'r.part_id', soldFrom: 'r.sold_from', soldTo: 'r.sold_to' })
+        .select({ state: 'r.state', announcedAt: 'r.announced_at' })
         .select({ howToTell: 'r.how_to_tell', whatChanged: 'r.what_changed', ...photoColumns })
         .orderBy(['r.position', 'r.id', 'rp.position', 'rp.photo_id']);
       return [...groupBy(rows, (row) => row.id).values()].map((of) => {
-        const { id, label, soldFrom, soldTo, howToTell, whatChanged } = of[0]!;
-        return { id, partId, label, soldFrom, soldTo, howToTell, whatChanged, photos: of.flatMap(toPhoto) };
+        const { id, label, state, soldFrom, soldTo, announcedAt, howToTell, whatChanged } = of[0]!;
+        return {
+          ...toRevisionRef({ id, partId, label, state }),
+          soldFrom,
+          soldTo,
+          announcedAt: announcedAt?.toISOString() ?? null,
+          howToTell,
+          whatChanged,
+          photos: of.flatMap(toPhoto),
+        };
       });
     },
 
@@ -50,12 +63,15 @@ export function createRevisionStore(knex: Knex) {
     },
 
     async ownsPhoto(accountId: number, photoId: number, trx: Knex): Promise<boolean> {
-      return (await trx('photos').where({ id: photoId, owner_id: accountId }).first('id')) !== undefined;
+      return (
+        (await trx('photos').where({ id: photoId, owner_id: accountId, taken_down_at: null }).first('id')) !==
+        undefined
+      );
     },
 
     async photos(revisionId: number, trx: Knex): Promise<RevisionPhoto[]> {
       const rows: PhotoColumns[] = await trx('revision_photos as rp')
-        .join('photos as f', 'f.id', 'rp.photo_id')
+        .join('photos as f', (on) => on.on('f.id', 'rp.photo_id').andOnNull('f.taken_down_at'))
         .where('rp.revision_id', revisionId)
         .select(photoColumns)
         .orderBy(['rp.position', 'rp.photo_id']);

@@ -20,6 +20,12 @@ const limits = {
   proposal: { points: 30, duration: 60 * 60 },
   /** Questions asked by one account. */
   question: { points: 20, duration: 60 * 60 },
+  /** Things of which one account tells the desk. */
+  flag: { points: 20, duration: 60 * 60 },
+  /** Requests to speak for a maker by one account. */
+  'maker-request': { points: 10, duration: 60 * 60 },
+  /** Answers and announcements in the name of makers by one account. */
+  'maker-word': { points: 60, duration: 60 * 60 },
   /** Replies to questions by one account. */
   reply: { points: 60, duration: 60 * 60 },
 } as const;

@@ -5,6 +5,7 @@ import type { Photo } from '../../shared/contract/photos.js';
 import type { Instrument } from '../../shared/contract/vocabulary.js';
 import { coverage95 } from '../../shared/fit/dimension.js';
 import type { Process } from '../../shared/statistics/consensus.js';
+import { revisionRefColumns, toRevisionRef, type RevisionRefRow } from '../revision-ref.js';
 import { fromJson } from '../rows.js';
 
 export interface FeatureRow extends Feature {
@@ -190,14 +191,18 @@ export function createMeasurementStore(knex: Knex) {
     },
 
     async ownsPhoto(accountId: number, photoId: number, trx: Knex): Promise<boolean> {
-      return (await trx('photos').where({ id: photoId, owner_id: accountId }).first('id')) !== undefined;
+      return (
+        (await trx('photos').where({ id: photoId, owner_id: accountId, taken_down_at: null }).first('id')) !==
+        undefined
+      );
     },
 
     async revisionsOfPart(partId: number): Promise<RevisionRef[]> {
-      return knex('revisions')
+      const rows: RevisionRefRow[] = await knex('revisions')
         .where('part_id', partId)
-        .select('id', 'label', { partId: 'part_id' })
+        .select(revisionRefColumns)
         .orderBy('position');
+      return rows.map(toRevisionRef);
     },
   };
 }
@@ -278,7 +283,7 @@ function measurements(knex: Knex): Knex.QueryBuilder {
   return knex('measurements as m')
     .join('accounts as a', 'a.id', 'm.account_id')
     .leftJoin('accounts as b', 'b.id', 'm.set_aside_by')
-    .leftJoin('photos as f', 'f.id', 'm.photo_id')
+    .leftJoin('photos as f', (on) => on.on('f.id', 'm.photo_id').andOnNull('f.taken_down_at'))
     .select('m.id', 'm.dimension', 'm.value', 'm.uncertainty', 'm.entered', 'm.unit', 'm.instrument', {
       featureId: 'm.feature_id',
       revisionId: 'm.revision_id',

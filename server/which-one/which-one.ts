@@ -13,11 +13,13 @@ export function createWhichOne(around: { knex: Knex; clock: () => Date; hardware
   /** NotFound for a slug that no part has or had. */
   async function readWhichOne(slug: string): Promise<WhichOne> {
     const part = await around.hardware.partBySlug(slug);
-    const [revisions, marks, dimensions] = await Promise.all([
+    const [all, marks, dimensions] = await Promise.all([
       around.hardware.revisionsOfPart(part.id),
       store.marksOf(part),
       store.dimensionsOf(part),
     ]);
+    // Nobody holds one that is only announced.
+    const revisions = all.filter((revision) => !revision.announced);
     return { part, asOf: around.clock().toISOString().slice(0, 10), revisions, marks, dimensions };
   }
 

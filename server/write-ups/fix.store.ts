@@ -63,6 +63,10 @@ export function createFixStore(knex: Knex) {
         .select('t.outcome', 't.figure', { fixId: 't.fix_id', accountId: 't.account_id' });
     },
 
+    async setMadeRight(trx: Knex, fixIds: readonly number[], revisionId: number | null): Promise<void> {
+      await trx('fixes').whereIn('id', fixIds).update({ made_right_from: revisionId });
+    },
+
     /** One statement for all that changed. */
     async setStandings(trx: Knex, standings: ReadonlyMap<number, Standing>): Promise<void> {
       if (standings.size === 0) return;

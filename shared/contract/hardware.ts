@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { Day, Id, IdText, PageQuery, Slug, line, pageOf } from './primitives.js';
+import { Day, Id, IdText, Instant, PageQuery, Slug, line, pageOf } from './primitives.js';
 import { Photo } from './photos.js';
 import { anyone, moderators, route, signedIn } from './route.js';
 import { FeatureKind, PartKind } from './vocabulary.js';
@@ -7,7 +7,13 @@ import { FeatureKind, PartKind } from './vocabulary.js';
 export const MakerRef = z.object({ id: Id, slug: Slug, name: z.string() });
 export type MakerRef = z.infer<typeof MakerRef>;
 
-export const RevisionRef = z.object({ id: Id, partId: Id, label: z.string() });
+export const RevisionRef = z.object({
+  id: Id,
+  partId: Id,
+  label: z.string(),
+  /** Its maker has announced it and does not sell it yet. */
+  announced: z.literal(true).optional(),
+});
 export type RevisionRef = z.infer<typeof RevisionRef>;
 
 export const PartRef = z.object({ id: Id, slug: Slug, name: z.string(), kind: PartKind, maker: MakerRef });
@@ -28,10 +34,12 @@ export type RevisionPhoto = z.infer<typeof RevisionPhoto>;
 export const mostRevisionPhotos = 6;
 
 export const Revision = RevisionRef.extend({
-  /** Half-open: sold from this day on … */
+  /** Half-open: sold from this day on (meant to be, while it is only announced) … */
   soldFrom: Day.nullable(),
   /** … up to, not including, this day; null while it is sold. */
   soldTo: Day.nullable(),
+  /** When its maker announced it here; null where it came into the catalogue without. */
+  announcedAt: Instant.nullable(),
   howToTell: z.string(),
   whatChanged: z.string(),
   photos: z.array(RevisionPhoto),
@@ -140,6 +148,7 @@ export const benchRoutes = {
     path: '/api/bench',
     tag: 'bench',
     access: signedIn,
+    limitedMay: true,
     status: 201,
     summary: 'Put a part on my bench',
     body: z.strictObject({ partId: Id, revisionId: Id.nullable() }),
@@ -151,6 +160,7 @@ export const benchRoutes = {
     path: '/api/bench/:id',
     tag: 'bench',
     access: signedIn,
+    limitedMay: true,
     summary: 'Say which revision it is',
     params: z.object({ id: IdText }),
     body: z.strictObject({ revisionId: Id.nullable() }),
@@ -161,6 +171,7 @@ export const benchRoutes = {
     path: '/api/bench/:id',
     tag: 'bench',
     access: signedIn,
+    limitedMay: true,
     summary: 'Take a part off my bench',
     params: z.object({ id: IdText }),
   }),

@@ -3,6 +3,8 @@ import type { Role } from './vocabulary.js';
 
 export const anyone: readonly Role[] = ['visitor', 'member', 'maker', 'moderator', 'administrator'];
 export const signedIn: readonly Role[] = ['member', 'maker', 'moderator', 'administrator'];
+/** Whoever can speak for a maker; which one, the service asks. */
+export const makers: readonly Role[] = ['maker', 'moderator', 'administrator'];
 export const moderators: readonly Role[] = ['moderator', 'administrator'];
 export const administrators: readonly Role[] = ['administrator'];
 
@@ -28,6 +30,8 @@ export interface RouteDefinition {
   readonly multipart?: true;
   /** Carries an ETag, and `If-Match` is demanded: 428 without it, 412 when it is stale. */
   readonly ifMatch?: true;
+  /** A change that a member whose posting is limited may make all the same: it is nobody's but their own. */
+  readonly limitedMay?: true;
   /** Called by others than the site's own pages, with the proof in the call itself. */
   readonly csrfExempt?: true;
   /** Problem types beyond those every route can answer with. */

@@ -5,6 +5,7 @@ const revision = (id: number, soldFrom: string | null, soldTo: string | null): R
   id,
   partId: 1,
   label: `Rev ${id}`,
+  announcedAt: null,
   soldFrom,
   soldTo,
   howToTell: '',

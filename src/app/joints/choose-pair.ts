@@ -9,7 +9,7 @@ export interface Wishes {
 
 /**
  * The pair of revisions to show: what the address names, else what is on the reader's bench, else the newest pair that
- * readings tell something of, else the newest of both. Null where a part has no revisions.
+ * readings tell something of, else the newest of both that are sold. Null where a part has no revisions.
  */
 export function choosePair(joint: JointPage, wishes: Wishes): FitCell | null {
   const own = (ids: readonly number[], wish: number | null): number | null => {
@@ -21,7 +21,17 @@ export function choosePair(joint: JointPage, wishes: Wishes): FitCell | null {
   const fitting = joint.cells.filter(
     (cell) => (a === null || cell.revisionA === a) && (b === null || cell.revisionB === b),
   );
-  return fitting.findLast((cell) => cell.verdict !== 'not-known') ?? fitting.at(-1) ?? null;
+  const announced = new Set([...announcedOf(joint.sideA), ...announcedOf(joint.sideB)]);
+  return (
+    fitting.findLast((cell) => cell.verdict !== 'not-known') ??
+    fitting.findLast((cell) => !announced.has(cell.revisionA) && !announced.has(cell.revisionB)) ??
+    fitting.at(-1) ??
+    null
+  );
+}
+
+function announcedOf(side: JointPage['sideA']): number[] {
+  return side.revisions.flatMap(({ revision }) => (revision.announced ? [revision.id] : []));
 }
 
 function idsOf(side: JointPage['sideA']): number[] {

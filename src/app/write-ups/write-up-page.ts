@@ -3,6 +3,7 @@ import { ChangeDetectionStrategy, Component, computed, effect, inject, linkedSig
 import { ActivatedRoute, RouterLink } from '@angular/router';
 import { catchError, map, of, switchMap } from 'rxjs';
 import type { Trial } from '../../../shared/contract/write-ups';
+import { jointOfWriteUp } from '../../../shared/fit/joint-of-write-up';
 import { loadEach } from '../core/load';
 import { Session } from '../core/session';
 import { ShimloreTitles } from '../core/titles';
@@ -11,7 +12,6 @@ import { Icon } from '../ui/icon/icon';
 import { LoadStateView } from '../ui/load-state/load-state';
 import { EditionPage } from './edition-page/edition-page';
 import { JointHead } from './joint-head';
-import { jointOfWriteUp } from './joint-of-write-up';
 import { writeUpData } from './structured-data';
 import { TitleBlock } from './title-block';
 import { TrialForm } from './trial-form';

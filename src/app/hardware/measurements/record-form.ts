@@ -81,7 +81,7 @@ export class RecordForm implements OnInit {
 
   ngOnInit(): void {
     const { revisionId, unit, instrument } = this.form.controls;
-    const first = this.likely() ?? this.revisions().at(-1)?.id;
+    const first = this.likely() ?? this.revisions().findLast((revision) => !revision.announced)?.id;
     revisionId.setValue(first === undefined ? '' : String(first));
     unit.setValue(this.spec().unit === 'mm' ? this.wish : this.spec().unit);
     if (this.spec().unit === 'count') instrument.setValue('count');

@@ -22,6 +22,7 @@ const revision = (photos: RevisionPhoto[]): Revision => ({
   id: 5,
   partId: 1,
   label: 'Rev B',
+  announcedAt: null,
   soldFrom: null,
   soldTo: null,
   howToTell: 'A blue stripe.',

@@ -1,5 +1,6 @@
 import { ChangeDetectionStrategy, Component, computed, input } from '@angular/core';
-import type { DimensionShape, Drawing, Shape } from '../../../../shared/drawing/shapes';
+import { dimensionAnchor, dimensionHeads, dimensionLines } from '../../../../shared/drawing/dimension-lines';
+import type { Drawing, Shape } from '../../../../shared/drawing/shapes';
 
 let drawn = 0;
 
@@ -171,6 +172,9 @@ export class JointDrawing {
     { name: 'a', angle: 45 },
     { name: 'b', angle: -45 },
   ];
+  protected readonly linesOf = dimensionLines;
+  protected readonly headsOf = dimensionHeads;
+  protected readonly anchorOf = dimensionAnchor;
   protected readonly scaleWords = computed(() => {
     const { scale, tiltFactor } = this.drawing();
     if (scale === null) return 'not to scale';
@@ -182,24 +186,5 @@ export class JointDrawing {
     return shape.kind === 'path' && (shape.role === 'a' || shape.role === 'b')
       ? `url(#${this.id}${shape.role})`
       : null;
-  }
-
-  protected linesOf(shape: DimensionShape): string {
-    const line = `M${shape.from.join(' ')}L${shape.to.join(' ')}`;
-    return line + shape.extensions.map(([x1, y1, x2, y2]) => `M${x1} ${y1}L${x2} ${y2}`).join('');
-  }
-
-  /** Slim arrow heads; outside pointing in where there is no room between the ends. */
-  protected headsOf({ from, to, vertical }: DimensionShape): string {
-    const length = vertical ? to[1] - from[1] : to[0] - from[0];
-    const inward = Math.abs(length) < 16 ? -1 : 1;
-    const head = (x: number, y: number, direction: number): string =>
-      vertical ? `M${x} ${y}l-2 ${7 * direction}l4 0Z` : `M${x} ${y}l${7 * direction} -2l0 4Z`;
-    return head(from[0], from[1], inward) + head(to[0], to[1], -inward);
-  }
-
-  protected anchorOf({ vertical, textAt, from }: DimensionShape): 'start' | 'middle' | 'end' {
-    if (!vertical) return 'middle';
-    return textAt[0] < from[0] ? 'end' : 'start';
   }
 }

@@ -1,5 +1,5 @@
-import type { JointRef } from '../../../shared/contract/joints';
-import type { EditionView } from '../../../shared/contract/write-ups';
+import type { JointRef } from '../contract/joints.js';
+import type { EditionView } from '../contract/write-ups.js';
 
 /** The known joint between the two parts of a write-up's first joint, whichever way round it is written; null where none is. */
 export function jointOfWriteUp(joints: readonly JointRef[], view: EditionView): JointRef | null {
