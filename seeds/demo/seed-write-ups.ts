@@ -102,6 +102,7 @@ export async function seedWriteUps(
         number,
         state: item.state,
         author_id: known(accounts, item.by),
+        base_edition_id: rows.publishedEditions.find((entry) => entry.id === id)?.edition ?? null,
         title: content.title,
         content: JSON.stringify(content),
         change_note: item.note,

@@ -1,3 +1,5 @@
+import type { PostingLimit } from './caller.js';
+import { termInWords } from './term-words.js';
 import {
   problemTypes,
   type FieldProblem,
@@ -12,7 +14,7 @@ export class ProblemError extends Error {
     readonly status: number,
     readonly detail: string,
     readonly remedy?: string,
-    readonly extras: Partial<Pick<Problem, 'fields' | 'current' | 'changed'>> & {
+    readonly extras: Partial<Pick<Problem, 'fields' | 'current' | 'base' | 'changed' | 'withdrawal'>> & {
       retryAfterSeconds?: number;
     } = {},
   ) {
@@ -67,6 +69,18 @@ export class NotSignedIn extends ProblemError {
 export class NotAllowed extends ProblemError {
   constructor(detail = 'Your role does not cover this.', remedy = 'Ask somebody whose role covers it.') {
     super('not-allowed', 403, detail, remedy);
+  }
+}
+
+/** The desk has limited the account: it reads, but does not post. */
+export class PostingLimited extends ProblemError {
+  constructor(limit: PostingLimit) {
+    super(
+      'posting-limited',
+      403,
+      `You may read, but not post, ${termInWords(limit.until)}. The desk’s reason: ${limit.reason}`,
+      'Your account page says what holds. Your bench, your watches and what you wrote stay yours.',
+    );
   }
 }
 

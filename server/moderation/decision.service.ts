@@ -3,10 +3,12 @@ import type { AuditLog } from '../audit/audit.js';
 import { missingFromContent } from '../../shared/contract/edition-completeness.js';
 import type { Happenings } from '../watches/happenings.js';
 import { partIdsOf, revisionIdsOf } from '../write-ups/edition-links.js';
-import { NotComplete } from '../write-ups/edition-problems.js';
+import { isOvertaken } from '../write-ups/edition-lines.js';
+import { EditionOvertaken, NotComplete } from '../write-ups/edition-problems.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { CautionMissing, openHazards } from './caution-missing.js';
+import type { DeskClaims } from './claims.js';
 import { noSuchEdition } from './desk.service.js';
 import type { DeskStore } from './desk.store.js';
 
@@ -31,6 +33,7 @@ export interface DecisionParts {
   readonly searchOutbox: IndexNotice;
   readonly audit: AuditLog;
   readonly happenings: Happenings;
+  readonly claims: Pick<DeskClaims, 'demandFree'>;
 }
 
 export type DecisionService = ReturnType<typeof createDecisionService>;
@@ -45,18 +48,21 @@ export function createDecisionService({
   searchOutbox,
   audit,
   happenings,
+  claims,
 }: DecisionParts) {
   return {
-    /** NotComplete, CautionMissing or WrongState say what stands in the way; nothing is changed then. */
+    /** NotComplete, CautionMissing, EditionOvertaken WrongState or ClaimedByAnother say what stands in the way; nothing is changed then. */
     async publishEdition(
       moderatorId: number,
       editionId: number,
       note: string,
     ): Promise<{ slug: string; number: number }> {
       const writeUpId = await writeUpOf(editionId);
+      await claims.demandFree({ kind: 'edition', id: editionId }, moderatorId);
       return knex.transaction(async (trx) => {
         const held = await writeUps.holdSubmitted(trx, writeUpId, editionId);
         const { content, authorId } = held.edition;
+        if (isOvertaken(held.edition)) throw new EditionOvertaken(await writeUps.mergeGround(held.edition));
         const missing = missingFromContent(content);
         if (missing.length > 0) throw new NotComplete(missing);
         const open = openHazards(content, await writeUps.cautionsOf(writeUpId, trx));
@@ -94,6 +100,7 @@ export function createDecisionService({
 
     async returnEdition(moderatorId: number, editionId: number, reason: string): Promise<void> {
       const writeUpId = await writeUpOf(editionId);
+      await claims.demandFree({ kind: 'edition', id: editionId }, moderatorId);
       await knex.transaction(async (trx) => {
         const { edition } = await writeUps.holdSubmitted(trx, writeUpId, editionId);
         const { authorId, number, content } = edition;

@@ -1,25 +1,25 @@
-import { isDeepStrictEqual } from 'node:util';
 import type { Knex } from 'knex';
 import { z } from 'zod';
 import { missingFromContent } from '../../shared/contract/edition-completeness.js';
-import { emptyContent, type EditionContent } from '../../shared/contract/edition-content.js';
+import { emptyContent } from '../../shared/contract/edition-content.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
 import type { EditionState } from '../../shared/contract/vocabulary.js';
 import type { Draft, EditionView, MyWriteUp } from '../../shared/contract/write-ups.js';
-import { isModerator, type MemberCaller } from '../http/caller.js';
+import type { MemberCaller } from '../http/caller.js';
 import { readCursor, toPage } from '../http/pages.js';
-import { NotAllowed, NotValid } from '../http/problems.js';
+import { NotValid } from '../http/problems.js';
+import type { Happenings } from '../watches/happenings.js';
+import { changedFields, type DraftReader } from './draft-reader.js';
 import type { DraftStore, EditionRow, SavedText } from './draft.store.js';
-import { photoIdsOf } from './edition-links.js';
 import {
   EditionMovedOn,
+  EditionOvertaken,
   NoSuchDraft,
-  NoSuchWriteUp,
   NotComplete,
   WrongState,
   wrongState,
 } from './edition-problems.js';
-import type { EditionViews, PhotoLookup } from './edition-view.js';
+import type { EditionViews } from './edition-view.js';
 import { publicationStore } from './publication.store.js';
 import type { PublishedStore } from './published.store.js';
 import type { ReferenceCheck } from './reference-check.js';
@@ -33,7 +33,8 @@ export interface DraftParts {
   readonly published: PublishedStore;
   readonly references: ReferenceCheck;
   readonly views: EditionViews;
-  readonly photos: PhotoLookup;
+  readonly reader: DraftReader;
+  readonly happenings: Happenings;
 }
 
 export type DraftService = ReturnType<typeof createDraftService>;
@@ -46,7 +47,8 @@ export function createDraftService({
   published,
   references,
   views,
-  photos,
+  reader,
+  happenings,
 }: DraftParts) {
   return {
     async startWriteUp(caller: MemberCaller, title: string): Promise<Draft> {
@@ -54,50 +56,31 @@ export function createDraftService({
       const id = await knex.transaction(async (trx) => {
         const writeUpId = await drafts.addWriteUp(trx, caller.accountId, at);
         const content = { ...emptyContent, title };
-        return drafts.addDraft(trx, { writeUpId, number: 1, authorId: caller.accountId, content, at });
-      });
-      return readOwn(caller, id);
-    },
-
-    /** The caller's open edition of the write-up, or a new one with the published text and the same keys of its fixes. */
-    async startEdition(caller: MemberCaller, slug: string): Promise<Draft> {
-      const writeUp = await published.bySlug(slug);
-      if (!writeUp) throw new NoSuchWriteUp();
-      const id = await knex.transaction(async (trx) => {
-        await publicationStore.lockWriteUp(trx, writeUp.id);
-        const authors = await published.authorIds(trx, writeUp.id);
-        if (!authors.includes(caller.accountId) && !isModerator(caller)) {
-          throw new NotAllowed(
-            'Only its authors and moderators start another edition of a write-up.',
-            'Report a trial, or write your own.',
-          );
-        }
-        const open = await drafts.openEditionOf(trx, writeUp.id, caller.accountId);
-        if (open !== undefined) return open;
-        const content = await published.publishedContent(trx, writeUp.id);
-        if (!content) throw new NoSuchWriteUp();
-        const number = await drafts.nextNumber(trx, writeUp.id);
-        return drafts.addDraft(trx, {
-          writeUpId: writeUp.id,
-          number,
+        const first = {
+          writeUpId,
+          number: 1,
           authorId: caller.accountId,
-          content,
-          at: clock(),
-        });
+          baseEditionId: null,
+          changeNote: '',
+        };
+        return drafts.addDraft(trx, { ...first, content, at });
       });
-      return readOwn(caller, id);
+      return reader.readOwn(caller, id);
     },
 
-    readDraft: readOwn,
+    readDraft: reader.readOwn,
 
     async previewDraft(caller: MemberCaller, id: number): Promise<EditionView> {
-      const edition = await ownEdition(caller, id);
+      const edition = await reader.ownEdition(caller, id);
       return views.viewOf(edition.content, edition.writeUpId);
     },
 
-    /** NotValid for broken references; EditionMovedOn for a version that is not the newest. */
+    /**
+     * NotValid for broken references; EditionMovedOn for a version that is not the newest; EditionOvertaken for a merge with an
+     * edition that is not the published one any more.
+     */
     async saveDraft(caller: MemberCaller, id: number, version: number, text: SavedText): Promise<Draft> {
-      const edition = await ownEdition(caller, id);
+      const edition = await reader.ownEdition(caller, id);
       demandWorkable(edition);
       if (edition.version !== version) throw await movedOn(edition, text);
       const broken = await references.findBroken(text.content, {
@@ -106,31 +89,45 @@ export function createDraftService({
       });
       if (broken.length > 0)
         throw new NotValid(broken.map((field) => ({ ...field, path: `content.${field.path}` })));
-      if (!(await drafts.save(id, caller.accountId, version, text, clock())))
-        throw await whyNot(caller, id, text);
-      return readOwn(caller, id);
+      const outcome = await knex.transaction(async (trx) => {
+        const { baseEditionId } = text;
+        const isOld = async () => baseEditionId !== (await lockedPublication(trx, edition));
+        if (baseEditionId !== undefined && (await isOld())) return 'overtaken';
+        return (await drafts.save(trx, id, caller.accountId, version, text, clock())) ? 'saved' : 'moved-on';
+      });
+      if (outcome === 'overtaken') throw await overtaken(caller, id);
+      if (outcome === 'moved-on') throw await whyNot(caller, id, text);
+      return reader.readOwn(caller, id);
     },
 
+    /** EditionOvertaken where another edition than its base is published; the owners of the write-up are told of a proposal. */
     async submitDraft(caller: MemberCaller, id: number, version: number): Promise<Draft> {
-      const edition = await ownEdition(caller, id);
+      const edition = await reader.ownEdition(caller, id);
       demandWorkable(edition);
       if (edition.version !== version) throw await movedOn(edition);
       const missing = await missingFrom(edition);
       if (missing.length > 0) throw new NotComplete(missing);
-      if (!(await drafts.submit(id, caller.accountId, version, clock()))) throw await whyNot(caller, id);
-      return readOwn(caller, id);
+      const outcome = await knex.transaction(async (trx) => {
+        if ((await lockedPublication(trx, edition)) !== edition.baseEditionId) return 'overtaken';
+        if (!(await drafts.submit(trx, id, caller.accountId, version, clock()))) return 'moved-on';
+        await tellOwners(trx, edition);
+        return 'submitted';
+      });
+      if (outcome === 'overtaken') throw await overtaken(caller, id);
+      if (outcome === 'moved-on') throw await whyNot(caller, id);
+      return reader.readOwn(caller, id);
     },
 
     async recallDraft(caller: MemberCaller, id: number): Promise<Draft> {
-      await ownEdition(caller, id);
+      await reader.ownEdition(caller, id);
       if (!(await drafts.recall(id, caller.accountId, clock()))) {
-        throw wrongState(await ownEdition(caller, id), 'an edition on the desk');
+        throw wrongState(await reader.ownEdition(caller, id), 'an edition on the desk');
       }
-      return readOwn(caller, id);
+      return reader.readOwn(caller, id);
     },
 
     async discardDraft(caller: MemberCaller, id: number): Promise<void> {
-      const edition = await ownEdition(caller, id);
+      const edition = await reader.ownEdition(caller, id);
       if (!(await drafts.discard(id, caller.accountId, clock())))
         throw wrongState(edition, 'a draft or a returned edition');
     },
@@ -152,7 +149,7 @@ export function createDraftService({
           throw new WrongState('It was not thrown away.', 'Go on with it as it is.');
         }
       });
-      return readOwn(caller, id);
+      return reader.readOwn(caller, id);
     },
 
     async listMine(
@@ -170,35 +167,6 @@ export function createDraftService({
     },
   };
 
-  async function ownEdition(caller: MemberCaller, id: number): Promise<EditionRow> {
-    const edition = await drafts.editionOfAuthor(id, caller.accountId);
-    if (!edition || edition.discardedAt !== null) throw new NoSuchDraft();
-    return edition;
-  }
-
-  async function readOwn(caller: MemberCaller, id: number): Promise<Draft> {
-    return draftOf(await ownEdition(caller, id));
-  }
-
-  async function draftOf(row: EditionRow): Promise<Draft> {
-    const ids = photoIdsOf(row.content);
-    const found = await photos.photosByIds(ids);
-    return {
-      id: row.id,
-      writeUpId: row.writeUpId,
-      slug: row.slug,
-      number: row.number,
-      state: row.state,
-      author: { id: row.authorId, displayName: row.authorName },
-      changeNote: row.changeNote,
-      content: row.content,
-      version: row.version,
-      updatedAt: row.updatedAt.toISOString(),
-      returnReason: row.returnReason,
-      photos: ids.flatMap((photoId) => found.get(photoId) ?? []),
-    };
-  }
-
   /** What an edition lacks before the desk can take it. */
   async function missingFrom(edition: EditionRow): Promise<FieldProblem[]> {
     const missing = missingFromContent(edition.content).concat(
@@ -215,12 +183,40 @@ export function createDraftService({
   }
 
   async function movedOn(current: EditionRow, sent?: SavedText): Promise<EditionMovedOn> {
-    return new EditionMovedOn(await draftOf(current), sent ? changedFields(current, sent) : []);
+    const changed = sent ? changedFields(current.content, sent.content) : [];
+    if (sent && sent.changeNote !== current.changeNote) changed.push('changeNote');
+    return new EditionMovedOn(await reader.draftOf(current), changed);
+  }
+
+  /** The edition that is published while the transaction holds the write-up. */
+  async function lockedPublication(trx: Knex, edition: EditionRow): Promise<number | null> {
+    return (await publicationStore.lockWriteUp(trx, edition.writeUpId))?.publishedEditionId ?? null;
+  }
+
+  async function overtaken(caller: MemberCaller, id: number): Promise<EditionOvertaken> {
+    return new EditionOvertaken(await reader.mergeGround(await reader.ownEdition(caller, id)));
+  }
+
+  /** Tells the authors of a published write-up, and nobody else, that somebody proposes an edition of it. */
+  async function tellOwners(trx: Knex, edition: EditionRow): Promise<void> {
+    const authors = await published.authorIds(trx, edition.writeUpId);
+    const owners = authors.filter((accountId) => accountId !== edition.authorId);
+    if (owners.length === 0) return;
+    await happenings.add(trx, {
+      kind: 'edition-proposed',
+      key: `edition-proposed:${edition.id}`,
+      title: `${edition.authorName} proposes an edition of “${edition.content.title}”`,
+      text: edition.changeNote,
+      path: `/my/proposed-editions/${edition.id}`,
+      actorId: edition.authorId,
+      about: {},
+      people: owners.map((accountId) => ({ accountId, atOnce: false })),
+    });
   }
 
   /** The compare-and-set found another row than the check before it: somebody was quicker. */
   async function whyNot(caller: MemberCaller, id: number, sent?: SavedText): Promise<Error> {
-    const edition = await ownEdition(caller, id);
+    const edition = await reader.ownEdition(caller, id);
     return isWorkable(edition)
       ? movedOn(edition, sent)
       : wrongState(edition, 'a draft or a returned edition');
@@ -233,13 +229,4 @@ function isWorkable(edition: EditionRow): boolean {
 
 function demandWorkable(edition: EditionRow): void {
   if (!isWorkable(edition)) throw wrongState(edition, 'a draft or a returned edition');
-}
-
-/** Top-level fields in which what is there differs from what was sent. */
-function changedFields(current: SavedText, sent: SavedText): string[] {
-  const fields = Object.keys(sent.content) as (keyof EditionContent)[];
-  const changed: string[] = fields.filter(
-    (field) => !isDeepStrictEqual(current.content[field], sent.content[field]),
-  );
-  return current.changeNote === sent.changeNote ? changed : [...changed, 'changeNote'];
 }

@@ -13,6 +13,10 @@ export interface EditionRow {
   readonly state: EditionState;
   readonly authorId: number;
   readonly authorName: string;
+  /** The published edition it was started from or last merged with; null for a first edition. */
+  readonly baseEditionId: number | null;
+  /** The edition that is published now. */
+  readonly publishedEditionId: number | null;
   readonly changeNote: string;
   readonly content: EditionContent;
   readonly version: number;
@@ -25,6 +29,8 @@ export interface EditionRow {
 export interface SavedText {
   readonly content: EditionContent;
   readonly changeNote: string;
+  /** The edition that the text was merged with since; undefined leaves its base as it is. */
+  readonly baseEditionId?: number | undefined;
 }
 
 export type DraftStore = ReturnType<typeof createDraftStore>;
@@ -39,6 +45,8 @@ export function createDraftStore(knex: Knex) {
         writeUpId: 'e.write_up_id',
         authorId: 'e.author_id',
         authorName: 'a.display_name',
+        baseEditionId: 'e.base_edition_id',
+        publishedEditionId: 'w.published_edition_id',
         changeNote: 'e.change_note',
         updatedAt: 'e.updated_at',
         submittedAt: 'e.submitted_at',
@@ -79,15 +87,24 @@ export function createDraftStore(knex: Knex) {
 
     async addDraft(
       trx: Knex,
-      draft: { writeUpId: number; number: number; authorId: number; content: EditionContent; at: Date },
+      draft: {
+        writeUpId: number;
+        number: number;
+        authorId: number;
+        baseEditionId: number | null;
+        content: EditionContent;
+        changeNote: string;
+        at: Date;
+      },
     ): Promise<number> {
       const [id] = await trx('editions').insert({
         write_up_id: draft.writeUpId,
         number: draft.number,
         author_id: draft.authorId,
+        base_edition_id: draft.baseEditionId,
         title: draft.content.title,
         content: JSON.stringify(draft.content),
-        change_note: '',
+        change_note: draft.changeNote,
         created_at: draft.at,
         updated_at: draft.at,
       });
@@ -100,21 +117,29 @@ export function createDraftStore(knex: Knex) {
     },
 
     /** Compare and set: false where the row is not in that version, not the author's, on the desk or thrown away. */
-    async save(id: number, authorId: number, version: number, text: SavedText, at: Date): Promise<boolean> {
-      const changed = await workable(knex, id, authorId)
+    async save(
+      trx: Knex,
+      id: number,
+      authorId: number,
+      version: number,
+      text: SavedText,
+      at: Date,
+    ): Promise<boolean> {
+      const changed = await workable(trx, id, authorId)
         .where('version', version)
         .update({
           title: text.content.title,
           content: JSON.stringify(text.content),
           change_note: text.changeNote,
+          ...(text.baseEditionId === undefined ? {} : { base_edition_id: text.baseEditionId }),
           version: version + 1,
           updated_at: at,
         });
       return changed > 0;
     },
 
-    async submit(id: number, authorId: number, version: number, at: Date): Promise<boolean> {
-      const changed = await workable(knex, id, authorId)
+    async submit(trx: Knex, id: number, authorId: number, version: number, at: Date): Promise<boolean> {
+      const changed = await workable(trx, id, authorId)
         .where('version', version)
         .update({ state: 'submitted', submitted_at: at, updated_at: at, version: version + 1 });
       return changed > 0;

@@ -1,5 +1,6 @@
 import type { FieldProblem } from '../../shared/contract/problem.js';
 import { editionStateWords, type EditionState } from '../../shared/contract/vocabulary.js';
+import type { MergeGround } from '../../shared/contract/proposed-editions.js';
 import type { Draft } from '../../shared/contract/write-ups.js';
 import { NotFound, ProblemError } from '../http/problems.js';
 
@@ -12,6 +13,20 @@ export class EditionMovedOn extends ProblemError {
       'This draft was saved from somewhere else since you read it.',
       'Compare your text with the one that is there now, then save on top of it.',
       { current, changed },
+    );
+  }
+}
+
+/** Another edition was published since this one was begun; carries both and what differs between them. */
+export class EditionOvertaken extends ProblemError {
+  constructor({ base, current, changed }: MergeGround) {
+    const { number, author } = current.edition;
+    super(
+      'edition-moved-on',
+      409,
+      `Edition ${number} by ${author.displayName} was published since this one was begun.`,
+      'Merge the two texts, so that nothing of either is lost.',
+      { base, current, changed },
     );
   }
 }

@@ -10,10 +10,11 @@ import { isModerator, type Caller } from '../http/caller.js';
 import { NotFound } from '../http/problems.js';
 import type { EditionComparer } from './comparison.js';
 import type { DraftStore } from './draft.store.js';
-import { NoSuchWriteUp } from './edition-problems.js';
+import { lineOf, peopleOf } from './edition-lines.js';
 import type { EditionViews } from './edition-view.js';
 import type { PublishedEditionRow, PublishedStore, WriteUpRow } from './published.store.js';
 import type { TrialStore } from './trial.store.js';
+import type { WithdrawalService } from './withdrawal.service.js';
 import type { Knex } from 'knex';
 
 export interface PageParts {
@@ -23,27 +24,36 @@ export interface PageParts {
   readonly trials: TrialStore;
   readonly views: EditionViews;
   readonly comparer: EditionComparer;
+  readonly withdrawals: WithdrawalService;
 }
 
 export type PageService = ReturnType<typeof createPageService>;
 
 /** What everybody can read: published editions, as they are and as they were. */
-export function createPageService({ knex, published, drafts, trials, views, comparer }: PageParts) {
+export function createPageService({
+  knex,
+  published,
+  drafts,
+  trials,
+  views,
+  comparer,
+  withdrawals,
+}: PageParts) {
   return {
     async readWriteUp(caller: Caller, slug: string): Promise<WriteUpPage> {
       const writeUp = await published.withContent(slug);
-      if (!writeUp) throw new NoSuchWriteUp();
+      if (!writeUp) throw await withdrawals.missing(caller, slug);
       const [editions, view, reported, myDraftId] = await Promise.all([
         published.editionsOf(writeUp.id),
         views.viewOf(writeUp.content, writeUp.id),
-        trials.trialsOf(writeUp.id),
+        trials.trialsOf(writeUp.id, caller),
         caller.accountId === null ? undefined : drafts.openEditionOf(knex, writeUp.id, caller.accountId),
       ]);
       const authors = peopleOf(editions);
       return {
         id: writeUp.id,
         slug: writeUp.slug,
-        edition: lineOf(editions.find((edition) => edition.id === writeUp.publishedEditionId)),
+        edition: lineOf(shownOf(editions, writeUp)),
         editionCount: editions.length,
         firstPublishedAt: writeUp.firstPublishedAt.toISOString(),
         authors,
@@ -54,27 +64,38 @@ export function createPageService({ knex, published, drafts, trials, views, comp
       };
     },
 
-    async listEditions(slug: string): Promise<EditionLine[]> {
-      return (await published.editionsOf((await find(slug)).id)).map(lineOf);
+    /** Who wrote the published editions of a write-up, withdrawn or not, and how many there are. */
+    async writtenBy(writeUpId: number): Promise<{ authors: PersonRef[]; editionCount: number }> {
+      const editions = await published.editionsOf(writeUpId);
+      return { authors: peopleOf(editions), editionCount: editions.length };
+    },
+
+    async listEditions(caller: Caller, slug: string): Promise<EditionLine[]> {
+      return (await published.editionsOf((await withdrawals.withHistory(caller, slug)).id)).map(lineOf);
     },
 
     async readEdition(
+      caller: Caller,
       slug: string,
       number: number,
     ): Promise<{ slug: string; edition: EditionLine; latestNumber: number; view: EditionView }> {
-      const writeUp = await find(slug);
+      const writeUp = await withdrawals.withHistory(caller, slug);
       const editions = await published.editionsOf(writeUp.id);
       const edition = editionNumbered(editions, number);
       return {
         slug,
         edition: lineOf(edition),
-        latestNumber: lineOf(editions.find((each) => each.id === writeUp.publishedEditionId)).number,
+        latestNumber: shownOf(editions, writeUp).number,
         view: await views.viewOf(await contentOf(edition.id), writeUp.id),
       };
     },
 
-    async compareEditions(slug: string, numbers: { from: number; to: number }): Promise<EditionComparison> {
-      const editions = await published.editionsOf((await find(slug)).id);
+    async compareEditions(
+      caller: Caller,
+      slug: string,
+      numbers: { from: number; to: number },
+    ): Promise<EditionComparison> {
+      const editions = await published.editionsOf((await withdrawals.withHistory(caller, slug)).id);
       const from = editionNumbered(editions, numbers.from);
       const to = editionNumbered(editions, numbers.to);
       const contents = await published.contents([from.id, to.id]);
@@ -84,12 +105,6 @@ export function createPageService({ knex, published, drafts, trials, views, comp
       );
     },
   };
-
-  async function find(slug: string): Promise<WriteUpRow> {
-    const writeUp = await published.bySlug(slug);
-    if (!writeUp) throw new NoSuchWriteUp();
-    return writeUp;
-  }
 
   async function contentOf(editionId: number): Promise<EditionContent> {
     return textIn(await published.contents([editionId]), editionId);
@@ -102,30 +117,16 @@ function textIn(contents: ReadonlyMap<number, EditionContent>, editionId: number
   return content;
 }
 
+/** The edition that a write-up shows. */
+function shownOf(editions: readonly PublishedEditionRow[], writeUp: WriteUpRow): PublishedEditionRow {
+  const edition = editions.find((each) => each.id === writeUp.publishedEditionId);
+  if (!edition) throw new Error('The edition that a write-up shows is not among its published ones.');
+  return edition;
+}
+
 function editionNumbered(editions: readonly PublishedEditionRow[], number: number): PublishedEditionRow {
   const edition = editions.find((each) => each.number === number);
   if (!edition)
     throw new NotFound(`There is no published edition ${number}.`, 'Choose one from the list of editions.');
   return edition;
-}
-
-/** Everybody who wrote one of the editions, the first author first. */
-function peopleOf(editionsNewestFirst: readonly PublishedEditionRow[]): PersonRef[] {
-  const people = new Map<number, PersonRef>();
-  for (const { authorId, authorName } of [...editionsNewestFirst].reverse()) {
-    people.set(authorId, { id: authorId, displayName: authorName });
-  }
-  return [...people.values()];
-}
-
-function lineOf(edition: PublishedEditionRow | undefined): EditionLine {
-  if (!edition) throw new Error('The edition that a write-up shows is not among its published ones.');
-  return {
-    id: edition.id,
-    number: edition.number,
-    author: { id: edition.authorId, displayName: edition.authorName },
-    changeNote: edition.changeNote,
-    publishedAt: edition.publishedAt.toISOString(),
-    title: edition.title,
-  };
 }

@@ -1,21 +1,33 @@
 import type { Response } from 'express';
 import type { Draft } from '../../shared/contract/write-ups.js';
-import { writeUpRoutes as routes } from '../../shared/contract/write-ups.js';
+import { proposedEditionRoutes } from '../../shared/contract/proposed-editions.js';
+import { writeUpRoutes } from '../../shared/contract/write-ups.js';
 import { bind, memberOf, type RouteBinding } from '../http/binding.js';
 import type { WriteUpService } from './write-ups.js';
+
+const routes = { ...writeUpRoutes, ...proposedEditionRoutes };
 
 export function writeUpBindings(writeUps: WriteUpService): RouteBinding[] {
   return [
     bind(routes.readWriteUp, ({ caller, params }) => writeUps.readWriteUp(caller, params.slug)),
-    bind(routes.listEditions, async ({ params }) => ({ items: await writeUps.listEditions(params.slug) })),
-    bind(routes.readEdition, ({ params }) => writeUps.readEdition(params.slug, params.number)),
-    bind(routes.compareEditions, ({ params, query }) => writeUps.compareEditions(params.slug, query)),
+    bind(routes.listEditions, async ({ caller, params }) => ({
+      items: await writeUps.listEditions(caller, params.slug),
+    })),
+    bind(routes.readEdition, ({ caller, params }) =>
+      writeUps.readEdition(caller, params.slug, params.number),
+    ),
+    bind(routes.compareEditions, ({ caller, params, query }) =>
+      writeUps.compareEditions(caller, params.slug, query),
+    ),
     bind(routes.listMine, ({ caller, query }) => writeUps.listMine(memberOf(caller), query)),
     bind(routes.startWriteUp, async ({ caller, body, response }) =>
       tagged(response, await writeUps.startWriteUp(memberOf(caller), body.title ?? '')),
     ),
     bind(routes.startEdition, async ({ caller, params, response }) =>
       tagged(response, await writeUps.startEdition(memberOf(caller), params.slug)),
+    ),
+    bind(routes.bringEditionBack, async ({ caller, params, response }) =>
+      tagged(response, await writeUps.bringEditionBack(memberOf(caller), params.slug, params.number)),
     ),
     bind(routes.readDraft, async ({ caller, params, response }) =>
       tagged(response, await writeUps.readDraft(memberOf(caller), params.id)),
@@ -35,6 +47,18 @@ export function writeUpBindings(writeUps: WriteUpService): RouteBinding[] {
     ),
     bind(routes.recallDraft, async ({ caller, params, response }) =>
       tagged(response, await writeUps.recallDraft(memberOf(caller), params.id)),
+    ),
+    bind(routes.readMergeGround, ({ caller, params }) =>
+      writeUps.readMergeGround(memberOf(caller), params.id),
+    ),
+    bind(routes.listProposedEditions, ({ caller, query }) =>
+      writeUps.listProposedEditions(memberOf(caller), query),
+    ),
+    bind(routes.readProposedEdition, ({ caller, params }) =>
+      writeUps.readProposedEdition(memberOf(caller), params.id),
+    ),
+    bind(routes.giveOpinion, ({ caller, params, body }) =>
+      writeUps.giveOpinion(memberOf(caller), params.id, body),
     ),
     bind(routes.reportTrial, ({ caller, params, body }) =>
       writeUps.reportTrial(memberOf(caller), params.slug, body),

@@ -1,20 +1,9 @@
 import { z } from 'zod';
 import { EditionState, HazardKind, SignalWord } from './vocabulary.js';
-import { Id, IdText, Instant, PageQuery, line, pageOf, passage } from './primitives.js';
+import { Id, IdText, Instant, line, passage } from './primitives.js';
 import { moderators, route } from './route.js';
-import { Caution, EditionComparison, EditionView, PersonRef } from './write-ups.js';
-
-export const DeskLine = z.object({
-  editionId: Id,
-  number: z.number().int(),
-  title: z.string(),
-  author: PersonRef,
-  submittedAt: Instant,
-  changeNote: z.string(),
-  /** Hazards named in the text that no caution answers yet. */
-  openHazards: z.number().int(),
-});
-export type DeskLine = z.infer<typeof DeskLine>;
+import { Opinion } from './proposed-editions.js';
+import { Caution, EditionComparison, EditionLine, EditionView, PersonRef } from './write-ups.js';
 
 /** A hazard that the rule list found in a text, with the words that gave it away. */
 export const FoundHazard = z.object({
@@ -22,6 +11,9 @@ export const FoundHazard = z.object({
   /** The fix whose text names it; null: the write-up's own text. */
   fixKey: z.string().nullable(),
   fixTitle: z.string().nullable(),
+  /** The step of that fix whose text names it, and which it is from 1; null: another text of the fix, or of the write-up. */
+  stepKey: z.string().nullable(),
+  step: z.number().int().nullable(),
   words: z.array(z.string()),
   answered: z.boolean(),
 });
@@ -50,12 +42,20 @@ export const DeskEdition = z.object({
   view: EditionView,
   /** Against the edition that is published now; null for a first edition. */
   comparison: EditionComparison.nullable(),
+  /** The published edition it builds on; null for a first edition. */
+  base: EditionLine.nullable(),
+  /** Published since, without its knowing: it cannot be published before its author has merged the two. */
+  overtakenBy: EditionLine.nullable(),
+  /** Who wrote the published editions; where its author is not among them, it is a proposal. */
+  writtenBy: z.array(PersonRef),
+  /** What they told the desk of it. */
+  opinions: z.array(Opinion),
   hazards: z.array(FoundHazard),
   cautions: z.array(Caution),
 });
 export type DeskEdition = z.infer<typeof DeskEdition>;
 
-const CautionWords = {
+export const CautionWords = {
   signalWord: SignalWord,
   hazards: z.array(HazardKind).max(12),
   hazard: line(200, 3),
@@ -66,6 +66,8 @@ const CautionWords = {
 export const PlaceCaution = z.strictObject({
   editionId: Id,
   fixKey: z.string().min(8).max(36).nullable(),
+  /** One step of that fix; null: all of it. */
+  stepKey: z.string().min(8).max(36).nullable().default(null),
   /** The library entry it was taken from, if any. */
   libraryId: Id.nullable(),
   ...CautionWords,
@@ -76,15 +78,6 @@ const idParams = z.object({ id: IdText });
 const tag = 'desk';
 
 export const deskRoutes = {
-  readDesk: route({
-    method: 'get',
-    path: '/api/desk',
-    tag,
-    access: moderators,
-    summary: 'Editions that wait, the longest wait first',
-    query: PageQuery,
-    response: pageOf(DeskLine),
-  }),
   readDeskEdition: route({
     method: 'get',
     path: '/api/desk/editions/:id',
@@ -122,6 +115,21 @@ export const deskRoutes = {
     body: z.strictObject(CautionWords),
     response: Caution,
   }),
+  moveCaution: route({
+    method: 'put',
+    path: '/api/desk/cautions/:id/place',
+    tag,
+    access: moderators,
+    summary: 'Move a caution to another place of an edition: a step, a fix, or the whole write-up',
+    params: idParams,
+    body: z.strictObject({
+      editionId: Id,
+      fixKey: z.string().min(8).max(36).nullable(),
+      stepKey: z.string().min(8).max(36).nullable(),
+    }),
+    response: Caution,
+    problems: ['caution-missing'],
+  }),
   removeCaution: route({
     method: 'delete',
     path: '/api/desk/cautions/:id',
@@ -140,7 +148,7 @@ export const deskRoutes = {
     params: idParams,
     body: z.strictObject({ note: passage(2000) }),
     response: z.object({ slug: z.string(), number: z.number().int() }),
-    problems: ['caution-missing', 'edition-state', 'not-complete'],
+    problems: ['caution-missing', 'claimed-by-another', 'edition-moved-on', 'edition-state', 'not-complete'],
   }),
   returnEdition: route({
     method: 'post',
@@ -150,6 +158,6 @@ export const deskRoutes = {
     summary: 'Return to the author with a reason',
     params: idParams,
     body: z.strictObject({ reason: passage(2000, 10) }),
-    problems: ['edition-state'],
+    problems: ['claimed-by-another', 'edition-state'],
   }),
 };

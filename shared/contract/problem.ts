@@ -19,9 +19,15 @@ export const Problem = z.object({
   remedy: z.string().optional(),
   requestId: z.string().optional(),
   fields: z.array(FieldProblem).optional(),
-  /** For `edition-moved-on`: the draft as it stands now and the top-level fields that differ. */
+  /**
+   * For `edition-moved-on`: what stands there now and the top-level fields that differ. With 412 it is the draft, saved from
+   * elsewhere; with 409 the edition that was published in the meantime, and `base` the one the draft began from.
+   */
   current: z.unknown().optional(),
+  base: z.unknown().optional(),
   changed: z.array(z.string()).optional(),
+  /** For `withdrawn`: the notice that stands at the address, as `WithdrawalNotice` has it. */
+  withdrawal: z.unknown().optional(),
 });
 export type Problem = z.infer<typeof Problem>;
 
@@ -40,12 +46,16 @@ export const problemTypes = {
   'csrf-token-missing': 'The request did not come from a page of this site',
   'too-many-requests': 'Too many tries in a short time',
   'precondition-needed': 'The version that was read must be named',
-  'edition-moved-on': 'Somebody saved this draft in the meantime',
+  'edition-moved-on': 'The text has moved on since it was read',
   'edition-state': 'The edition is not in a state for this',
   'not-complete': 'The write-up is not complete yet',
   'caution-missing': 'A hazard has no caution yet',
   'photo-refused': 'The photo cannot be taken',
   'already-there': 'That is there already',
+  withdrawn: 'The desk has withdrawn this write-up',
+  'moved-on': 'Somebody saved this in the meantime',
+  'posting-limited': 'You may read, but not post, for now',
+  'account-blocked': 'This account is blocked',
   'taken-down': 'The desk has taken this down',
   'claimed-by-another': 'Somebody else at the desk has this in hand',
   'search-unavailable': 'Search does not answer at the moment',

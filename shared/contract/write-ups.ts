@@ -3,6 +3,7 @@ import { Callout } from './callouts.js';
 import { EditionContent, Acceptance } from './edition-content.js';
 import { PartRef, RevisionRef, Symptom } from './hardware.js';
 import { Photo } from './photos.js';
+import { TakenDown } from './taken-down.js';
 import { WorksheetRecord } from './worksheet.js';
 import { Id, IdText, Instant, PageQuery, Slug, line, pageOf, passage } from './primitives.js';
 import { anyone, route, signedIn } from './route.js';
@@ -26,10 +27,11 @@ export type PersonRef = z.infer<typeof PersonRef>;
 export const RichText = z.object({ source: z.string(), html: z.string() });
 export type RichText = z.infer<typeof RichText>;
 
-/** A moderator's safety notice. `fixKey` null: it stands on the whole write-up. Texts are plain. */
+/** A moderator's safety notice. `fixKey` null: placed on the whole write-up; `stepKey` null: on all of the fix. Texts are plain. */
 export const Caution = z.object({
   id: Id,
   fixKey: z.string().nullable(),
+  stepKey: z.string().nullable(),
   signalWord: SignalWord,
   /** The hazards this caution answers. */
   hazards: z.array(HazardKind),
@@ -50,6 +52,8 @@ export const Trial = z.object({
   figure: z.number().nullable(),
   worksheet: WorksheetRecord.nullable(),
   createdAt: Instant,
+  /** Only its writer and moderators are given a trial that is taken down. */
+  takenDown: TakenDown.nullable(),
 });
 export type Trial = z.infer<typeof Trial>;
 
@@ -90,7 +94,15 @@ export const FixView = z.object({
   why: RichText,
   tools: z.array(z.string()),
   materials: z.array(z.string()),
-  steps: z.array(z.object({ key: z.string(), text: RichText, photo: PhotoShown.nullable() })),
+  steps: z.array(
+    z.object({
+      key: z.string(),
+      text: RichText,
+      photo: PhotoShown.nullable(),
+      /** Those that stand on this step; they are shown above it. */
+      cautions: z.array(Caution),
+    }),
+  ),
   revisions: z.array(RevisionRef.extend({ partName: z.string() })),
   afterwards: z.array(Afterwards),
   afterwardsNote: z.string(),
@@ -152,7 +164,7 @@ export const WriteUpPage = z.object({
   authors: z.array(PersonRef),
   view: EditionView,
   trials: z.array(Trial),
-  /** Whether the caller may start another edition. */
+  /** Whether it is the caller's own to edit, as one of its authors or from the desk; others who are signed in propose an edition. */
   mayEdit: z.boolean(),
   /** The caller's open draft of it, if any. */
   myDraftId: Id.nullable(),
@@ -194,6 +206,12 @@ export const Draft = z.object({
   returnReason: z.string().nullable(),
   /** Photos the content points at. */
   photos: z.array(Photo),
+  /** The published edition whose text it was started from or last merged with; null for a first edition. */
+  base: EditionLine.nullable(),
+  /** The edition that has been published since; it has to be merged before the desk can take this one. */
+  overtakenBy: EditionLine.nullable(),
+  /** Who wrote the published editions, the first author first; empty for a first edition. */
+  writtenBy: z.array(PersonRef),
 });
 export type Draft = z.infer<typeof Draft>;
 
@@ -282,7 +300,7 @@ export const writeUpRoutes = {
     access: signedIn,
     status: 201,
     summary:
-      'Start the next edition from the published one (its authors and moderators); an open draft of the caller is given back instead of a second one',
+      'Start the next edition from the published one, on anybody’s write-up; an open draft of the caller is given back instead of a second one',
     params: slugParams,
     response: Draft,
   }),
@@ -303,7 +321,12 @@ export const writeUpRoutes = {
     ifMatch: true,
     summary: 'Save a draft; a lost update is refused with what changed',
     params: idParams,
-    body: z.strictObject({ content: EditionContent, changeNote }),
+    body: z.strictObject({
+      content: EditionContent,
+      changeNote,
+      /** The edition that is published now, once the text has been merged with it. */
+      baseEditionId: Id.optional(),
+    }),
     response: Draft,
     problems: ['edition-moved-on', 'precondition-needed', 'edition-state'],
   }),

@@ -14,7 +14,7 @@ import { editionForm, textOf, type EditionForm, type EditionText } from './editi
 import { contentFields, limitsBroken, limitsProblem } from './edition-limits';
 import { mergeRows, mergedText, type MergeRow, type Side } from './edition-merge';
 import { PartDirectory } from './part-directory';
-import { same } from './same';
+import { same } from '../../../../shared/editions/same';
 
 /** A text that was not taken when two were merged; kept in sight so that nothing is lost. */
 export interface SetAside {

@@ -1,6 +1,6 @@
 import type { EditionContent } from '../../../../shared/contract/edition-content';
 import type { EditionText } from './edition-form';
-import { same } from './same';
+import { same } from '../../../../shared/editions/same';
 
 export type Side = 'mine' | 'theirs';
 
