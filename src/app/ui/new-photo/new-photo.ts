@@ -20,6 +20,7 @@ import { tellFields } from '../../core/told-fields';
 import { Field, Labelled } from '../labelled/labelled';
 import { ProblemNote } from '../problem-note/problem-note';
 import { PhotoUpload } from './photo-upload';
+import { tooLarge } from './too-large';
 
 /** A photo on its way: shown from the file, stored once it is said what it shows. A refusal keeps the words. */
 @Component({
@@ -164,15 +165,4 @@ export class NewPhoto {
       },
     });
   }
-}
-
-function tooLarge(file: File): Problem {
-  const megabytes = (file.size / 1024 / 1024).toFixed(1);
-  return {
-    type: '/problems/body-too-large',
-    title: 'The photo is too large',
-    status: 413,
-    detail: `“${file.name}” has ${megabytes} MB.`,
-    remedy: 'Make it smaller than 20 MB and choose it again.',
-  };
 }

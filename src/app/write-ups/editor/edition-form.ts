@@ -1,4 +1,5 @@
 import { FormArray, FormControl, FormGroup } from '@angular/forms';
+import type { Callout } from '../../../../shared/contract/callouts';
 import type {
   Acceptance,
   EditionContent,
@@ -98,6 +99,7 @@ export const photoForm = (photo: PhotoUse) =>
     photoId: new FormControl(photo.photoId, { nonNullable: true }),
     alt: words(photo.alt),
     caption: words(photo.caption),
+    callouts: value<Callout[]>(photo.callouts ?? []),
   });
 
 export type EditionForm = ReturnType<typeof editionForm>;

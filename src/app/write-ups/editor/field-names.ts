@@ -33,6 +33,8 @@ const names: Record<string, string> = {
   photos: 'photo',
   alt: 'alternative text',
   caption: 'caption',
+  callouts: 'callout',
+  label: 'words',
   sources: 'sources',
   changeNote: 'change note',
 };
