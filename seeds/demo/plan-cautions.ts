@@ -54,7 +54,7 @@ export function planCautions(
     }
     const found = answerHazards(
       findHazards(content),
-      placed.map(({ slug, fixKey }) => ({ fixKey, hazards: [...libraryEntry(slug).hazards] })),
+      placed.map(({ slug, fixKey }) => ({ fixKey, stepKey: null, hazards: [...libraryEntry(slug).hazards] })),
     );
     for (const hazard of found.filter((item) => !item.answered)) place(usual[hazard.hazard], hazard.fixKey);
     return placed.slice(before);

@@ -1,3 +1,5 @@
+import type { PostingLimit } from '../http/caller.js';
+import { termInWords } from '../http/term-words.js';
 import { ProblemError } from '../http/problems.js';
 
 export class SignInRefused extends ProblemError {
@@ -18,6 +20,18 @@ export class EmailNotConfirmed extends ProblemError {
       403,
       'The e-mail address is not confirmed yet.',
       'Follow the link in the mail, or have it sent again.',
+    );
+  }
+}
+
+/** The desk has blocked the account for a term. */
+export class AccountBlocked extends ProblemError {
+  constructor({ reason, until }: PostingLimit) {
+    super(
+      'account-blocked',
+      403,
+      `This account is blocked ${termInWords(until)}. The desk’s reason: ${reason}`,
+      'Answer the mail that told you of it if you think this is wrong.',
     );
   }
 }

@@ -9,6 +9,10 @@ export function accountView(account: StoredAccount): Account {
     displayName: account.displayName,
     role: account.role,
     noticeMail: account.noticeMail,
+    mailRhythm: account.mailRhythm,
+    safetyMail: account.safetyMail,
+    benchWatch: account.benchWatch,
+    mailRefusedAt: account.mailRefusedAt?.toISOString() ?? null,
     units: account.units,
     createdAt: account.createdAt.toISOString(),
   };

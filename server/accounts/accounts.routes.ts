@@ -66,6 +66,10 @@ export function bindAccountRoutes(parts: {
     bind(accountRoutes.changeProfile, async ({ body, caller }) => ({
       account: await people.changeProfile(memberOf(caller).accountId, body),
     })),
+    bind(accountRoutes.confirmAddressAgain, async ({ caller }) => {
+      await entry.confirmAddressAgain(memberOf(caller).accountId);
+      return mailed;
+    }),
     bind(accountRoutes.listAccounts, ({ query }) => people.listAccounts(query)),
     bind(accountRoutes.changeRole, ({ params, body, caller }) =>
       people.changeRole(params.id, body.role, memberOf(caller).accountId),

@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
 import type { AccountRole } from '../../shared/contract/vocabulary.js';
-import type { Account } from '../../shared/contract/accounts.js';
+import type { Account, MailRhythm } from '../../shared/contract/accounts.js';
 
 /** An account as the table holds it. */
 export interface StoredAccount {
@@ -11,6 +11,10 @@ export interface StoredAccount {
   readonly passwordHash: string;
   readonly confirmedAt: Date | null;
   readonly noticeMail: boolean;
+  readonly mailRhythm: MailRhythm;
+  readonly safetyMail: boolean;
+  readonly benchWatch: boolean | null;
+  readonly mailRefusedAt: Date | null;
   readonly units: Account['units'];
   readonly createdAt: Date;
 }
@@ -23,6 +27,10 @@ interface AccountRecord {
   password_hash: string;
   confirmed_at: Date | null;
   notice_mail: number;
+  mail_rhythm: MailRhythm;
+  safety_mail: number;
+  bench_watch: number | null;
+  mail_refused_at: Date | null;
   units: Account['units'];
   created_at: Date;
 }
@@ -35,6 +43,10 @@ const columns = [
   'password_hash',
   'confirmed_at',
   'notice_mail',
+  'mail_rhythm',
+  'safety_mail',
+  'bench_watch',
+  'mail_refused_at',
   'units',
   'created_at',
 ];
@@ -87,6 +99,10 @@ export interface AccountChange {
   readonly displayName?: string | undefined;
   readonly passwordHash?: string | undefined;
   readonly noticeMail?: boolean | undefined;
+  readonly mailRhythm?: MailRhythm | undefined;
+  readonly safetyMail?: boolean | undefined;
+  readonly benchWatch?: boolean | undefined;
+  readonly mailRefusedAt?: null | undefined;
   readonly units?: Account['units'] | undefined;
   readonly role?: AccountRole | undefined;
   readonly confirmedAt?: Date | undefined;
@@ -98,6 +114,10 @@ export async function changeAccount(trx: Knex, id: number, change: AccountChange
     display_name: change.displayName,
     password_hash: change.passwordHash,
     notice_mail: change.noticeMail,
+    mail_rhythm: change.mailRhythm,
+    safety_mail: change.safetyMail,
+    bench_watch: change.benchWatch,
+    mail_refused_at: change.mailRefusedAt,
     units: change.units,
     role: change.role,
     confirmed_at: change.confirmedAt,
@@ -134,6 +154,10 @@ function toStored(record: AccountRecord | undefined): StoredAccount | undefined 
       passwordHash: record.password_hash,
       confirmedAt: record.confirmed_at,
       noticeMail: Boolean(record.notice_mail),
+      mailRhythm: record.mail_rhythm,
+      safetyMail: Boolean(record.safety_mail),
+      benchWatch: record.bench_watch === null ? null : Boolean(record.bench_watch),
+      mailRefusedAt: record.mail_refused_at,
       units: record.units,
       createdAt: record.created_at,
     }

@@ -5,12 +5,14 @@ import { createAuthenticator, type Authenticator } from '../http/session.js';
 import { bindAccountRoutes } from './accounts.routes.js';
 import { createEntryService, type EntryDependencies } from './entry.service.js';
 import { createLocalStrategy } from './local-strategy.js';
+import { createMakerRole, type MakerRole } from './maker-role.js';
 import { createPeopleService } from './people.service.js';
 
 export interface Accounts {
   readonly bindings: RouteBinding[];
   /** Knows who a request comes from; sessions are built on it. */
   readonly authenticator: Authenticator;
+  readonly makerRole: MakerRole;
 }
 
 export function createAccounts(needs: EntryDependencies & { csrf: Csrf; audit: AuditLog }): Accounts {
@@ -20,5 +22,9 @@ export function createAccounts(needs: EntryDependencies & { csrf: Csrf; audit: A
     strategy: createLocalStrategy(entry),
     findAccount: (id) => people.findAccount(id),
   });
-  return { bindings: bindAccountRoutes({ entry, people, authenticator, csrf: needs.csrf }), authenticator };
+  return {
+    bindings: bindAccountRoutes({ entry, people, authenticator, csrf: needs.csrf }),
+    authenticator,
+    makerRole: createMakerRole(needs),
+  };
 }

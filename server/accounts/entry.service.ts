@@ -2,18 +2,27 @@ import type { Knex } from 'knex';
 import { endSessionsOf } from '../http/session-store.js';
 import type { RateLimits } from '../http/rate-limits.js';
 import type { MailQueue } from '../mail/mail-queue.js';
-import { EmailNotConfirmed, TokenNotValid } from './account-problems.js';
+import type { LimitLookup } from '../members/members.js';
+import { AccountBlocked, EmailNotConfirmed, TokenNotValid } from './account-problems.js';
 import {
   accountByEmail,
   accountById,
   addAccountUnlessThere,
   changeAccount,
   lockedAccountByEmail,
+  lockedAccountById,
   type StoredAccount,
 } from './accounts.store.js';
 import { hashOfToken, newMailedToken } from './mailed-token.js';
 import { hashPassword, passwordMatches } from './password.js';
-import { addToken, endTokens, useToken, type TokenPurpose } from './tokens.store.js';
+import {
+  addToken,
+  endTokens,
+  newestSignUp,
+  useToken,
+  type PendingSignUp,
+  type TokenPurpose,
+} from './tokens.store.js';
 
 const hour = 60 * 60 * 1000;
 const lifeOf: Record<TokenPurpose, number> = { 'confirm-email': 24 * hour, 'reset-password': hour };
@@ -23,37 +32,45 @@ export interface EntryDependencies {
   readonly clock: () => Date;
   readonly mail: MailQueue;
   readonly limits: RateLimits;
+  readonly limitOn: LimitLookup;
 }
 
 export type EntryService = ReturnType<typeof createEntryService>;
 
 /** How people come in: sign-up, confirmation, sign-in, and a new password when the old one is lost. */
-export function createEntryService({ knex, clock, mail, limits }: EntryDependencies) {
+export function createEntryService({ knex, clock, mail, limits, limitOn }: EntryDependencies) {
   const mailToken = async (
     trx: Knex.Transaction,
     account: StoredAccount,
     purpose: TokenPurpose,
+    signUp: PendingSignUp | null = null,
   ): Promise<void> => {
     const now = clock();
     const { token, hash } = newMailedToken();
     const expiresAt = new Date(now.getTime() + lifeOf[purpose]);
-    const tokenId = await addToken(trx, { accountId: account.id, purpose, hash, expiresAt, now });
+    const tokenId = await addToken(trx, { accountId: account.id, purpose, hash, expiresAt, now, signUp });
     const letter = {
       accountId: account.id,
       email: account.email,
-      displayName: account.displayName,
+      displayName: signUp?.displayName ?? account.displayName,
       token,
       tokenId,
     };
-    if (purpose === 'confirm-email') await mail.queueEmailConfirmation(trx, letter);
-    else await mail.queuePasswordReset(trx, letter);
+    if (purpose === 'reset-password') await mail.queuePasswordReset(trx, letter);
+    else if (account.confirmedAt) await mail.queueAddressCheck(trx, letter);
+    else await mail.queueEmailConfirmation(trx, letter);
+  };
+
+  const demandNotBlocked = async (accountId: number): Promise<void> => {
+    const limit = await limitOn(accountId);
+    if (limit?.kind === 'blocked') throw new AccountBlocked(limit);
   };
 
   return {
     /**
      * Adds an account and mails the link to confirm it. Where the address has one already, its owner is told by mail
-     * and the caller learns nothing. An account that was never confirmed takes over the newest name and password, so
-     * that nobody can reserve a stranger's address under a password of their own.
+     * and the caller learns nothing. While an account is not confirmed, each sign-up under its address stays apart: name
+     * and password are those of the mail that is followed, so that nobody can slip theirs under a stranger's address.
      */
     async signUp(wish: { email: string; displayName: string; password: string; ip: string }): Promise<void> {
       await limits.take('sign-up', wish.ip);
@@ -72,22 +89,33 @@ export function createEntryService({ knex, clock, mail, limits }: EntryDependenc
           await mail.queueAlreadyHasAccount(trx, account);
           return;
         }
-        await changeAccount(trx, account.id, { displayName: wish.displayName, passwordHash });
-        await mailToken(trx, { ...account, displayName: wish.displayName }, 'confirm-email');
+        await mailToken(trx, account, 'confirm-email', { displayName: wish.displayName, passwordHash });
       });
     },
 
-    /** Confirms the address; throws TokenNotValid. */
+    /** Confirms the address, with the name and password of the sign-up that the mail was for; throws TokenNotValid. */
     async confirmEmail(token: string, ip: string): Promise<StoredAccount> {
       await limits.take('token', ip);
       return knex.transaction(async (trx) => {
         const now = clock();
-        const accountId = await useToken(trx, 'confirm-email', hashOfToken(token), now);
-        if (accountId === undefined) throw new TokenNotValid();
-        await changeAccount(trx, accountId, { confirmedAt: now });
+        const used = await useToken(trx, 'confirm-email', hashOfToken(token), now);
+        const before = used && (await lockedAccountById(trx, used.accountId));
+        if (!before) throw new TokenNotValid();
+        await demandNotBlocked(before.id);
+        // Whoever has confirmed already keeps their name and password, whatever else was asked for under the address.
+        const signUp = before.confirmedAt ? null : used.signUp;
+        await changeAccount(trx, before.id, { ...signUp, confirmedAt: now, mailRefusedAt: null });
+        await endTokens(trx, before.id, 'confirm-email', now);
+        return { ...before, ...signUp, confirmedAt: now, mailRefusedAt: null };
+      });
+    },
+
+    /** Mails a link by which an address that mail came back from proves that it takes mail again. */
+    async confirmAddressAgain(accountId: number): Promise<void> {
+      await limits.take('account-mail', `again:${accountId}`);
+      await knex.transaction(async (trx) => {
         const account = await accountById(trx, accountId);
-        if (!account) throw new TokenNotValid();
-        return account;
+        if (account) await mailToken(trx, account, 'confirm-email');
       });
     },
 
@@ -95,13 +123,14 @@ export function createEntryService({ knex, clock, mail, limits }: EntryDependenc
       await limits.take('account-mail', email);
       await knex.transaction(async (trx) => {
         const account = await lockedAccountByEmail(trx, email);
-        if (account && !account.confirmedAt) await mailToken(trx, account, 'confirm-email');
+        if (!account || account.confirmedAt) return;
+        await mailToken(trx, account, 'confirm-email', await newestSignUp(trx, account.id));
       });
     },
 
     /**
-     * The account of a right pair of address and password, undefined for a wrong one. Throws EmailNotConfirmed, and
-     * TooManyRequests when too many wrong ones came for this address or from this network address.
+     * The account of a right pair of address and password, undefined for a wrong one. Throws EmailNotConfirmed,
+     * AccountBlocked, and TooManyRequests when too many wrong ones came for this address or from this network address.
      */
     async checkPassword(email: string, password: string, ip: string): Promise<StoredAccount | undefined> {
       await limits.take('sign-in-anywhere', ip);
@@ -111,6 +140,7 @@ export function createEntryService({ knex, clock, mail, limits }: EntryDependenc
       await limits.giveBack('sign-in-anywhere', ip);
       await limits.giveBack('sign-in', email, ip);
       if (!account.confirmedAt) throw new EmailNotConfirmed();
+      await demandNotBlocked(account.id);
       return account;
     },
 
@@ -128,10 +158,14 @@ export function createEntryService({ knex, clock, mail, limits }: EntryDependenc
       const passwordHash = await hashPassword(password);
       await knex.transaction(async (trx) => {
         const now = clock();
-        const accountId = await useToken(trx, 'reset-password', hashOfToken(token), now);
-        const account = accountId === undefined ? undefined : await accountById(trx, accountId);
+        const used = await useToken(trx, 'reset-password', hashOfToken(token), now);
+        const account = used && (await accountById(trx, used.accountId));
         if (!account) throw new TokenNotValid();
-        await changeAccount(trx, account.id, { passwordHash, confirmedAt: account.confirmedAt ?? now });
+        await changeAccount(trx, account.id, {
+          passwordHash,
+          confirmedAt: account.confirmedAt ?? now,
+          mailRefusedAt: null,
+        });
         await endTokens(trx, account.id, 'reset-password', now);
         await endTokens(trx, account.id, 'confirm-email', now);
         await endSessionsOf(trx, account.id);

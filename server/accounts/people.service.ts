@@ -7,20 +7,36 @@ import { readCursor, toPage } from '../http/pages.js';
 import { NotAllowed, NotFound } from '../http/problems.js';
 import type { SessionAccount } from '../http/session.js';
 import type { AuditLog } from '../audit/audit.js';
+import type { LimitLookup } from '../members/members.js';
 import { accountRow, accountView } from './account-view.js';
-import { accountById, accountsNewestFirst, changeAccount, lockedAccountById } from './accounts.store.js';
+import {
+  accountById,
+  accountsNewestFirst,
+  changeAccount,
+  lockedAccountById,
+  type AccountChange,
+} from './accounts.store.js';
 
 const ListKey = z.tuple([Id]);
 
 export type PeopleService = ReturnType<typeof createPeopleService>;
 
 /** The accounts there are: each person's own, and the administrator's view of all. */
-export function createPeopleService({ knex, audit }: { knex: Knex; audit: AuditLog }) {
+export function createPeopleService({
+  knex,
+  audit,
+  limitOn,
+}: {
+  knex: Knex;
+  audit: AuditLog;
+  limitOn: LimitLookup;
+}) {
   return {
-    /** What every request needs to know of its caller; undefined once the account is gone. */
+    /** What every request needs to know of its caller; undefined once the account is gone or blocked. */
     async findAccount(id: number): Promise<SessionAccount | undefined> {
-      const account = await accountById(knex, id);
-      return account && { id: account.id, role: account.role };
+      const [account, limit] = await Promise.all([accountById(knex, id), limitOn(id)]);
+      if (!account || limit?.kind === 'blocked') return undefined;
+      return { id: account.id, role: account.role, limit: limit ?? null };
     },
 
     async readAccount(id: number | null): Promise<Account | null> {
@@ -30,11 +46,10 @@ export function createPeopleService({ knex, audit }: { knex: Knex; audit: AuditL
 
     async changeProfile(
       id: number,
-      change: {
-        displayName?: string | undefined;
-        units?: Account['units'] | undefined;
-        noticeMail?: boolean | undefined;
-      },
+      change: Pick<
+        AccountChange,
+        'displayName' | 'units' | 'noticeMail' | 'mailRhythm' | 'safetyMail' | 'benchWatch'
+      >,
     ): Promise<Account | null> {
       await changeAccount(knex, id, change);
       return this.readAccount(id);

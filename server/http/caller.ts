@@ -6,6 +6,15 @@ export type Caller = { readonly role: 'visitor'; readonly accountId: null } | Me
 export interface MemberCaller {
   readonly role: Exclude<Role, 'visitor'>;
   readonly accountId: number;
+  /** What the desk has set on the account; blocked ones are visitors. */
+  readonly limit?: PostingLimit | null;
+}
+
+/** Reading goes on; posting does not. */
+export interface PostingLimit {
+  readonly reason: string;
+  /** It holds before this instant; null: until it is lifted. */
+  readonly until: Date | null;
 }
 
 export const visitor: Caller = { role: 'visitor', accountId: null };

@@ -4,7 +4,7 @@ import type { RouteDefinition } from '../../shared/contract/route.js';
 import type { RouteBinding } from './binding.js';
 import type { Caller } from './caller.js';
 import { fieldProblems } from './field-problems.js';
-import { NotAllowed, NotFound, NotSignedIn, NotValid, ProblemError } from './problems.js';
+import { NotAllowed, NotFound, NotSignedIn, NotValid, PostingLimited, ProblemError } from './problems.js';
 
 const jsonBody = express.json({ limit: '3mb', type: 'application/json' });
 
@@ -48,9 +48,12 @@ function nameOf(route: RouteDefinition): string {
 }
 
 function allowOnly(route: RouteDefinition, callerOf: (request: Request) => Caller): RequestHandler {
+  const posts = route.method !== 'get' && !route.limitedMay && !route.access.includes('visitor');
   return (request, _response, next) => {
-    const { role } = callerOf(request);
+    const caller = callerOf(request);
+    const { role } = caller;
     if (!route.access.includes(role)) throw role === 'visitor' ? new NotSignedIn() : new NotAllowed();
+    if (posts && role !== 'visitor' && caller.limit) throw new PostingLimited(caller.limit);
     next();
   };
 }
@@ -131,7 +134,7 @@ function versionOf(request: Request): number {
       'precondition-needed',
       428,
       'The version that was read must be named.',
-      'Send If-Match with the ETag of the draft as you read it.',
+      'Send If-Match with the ETag of what you read.',
     );
   }
   return Number(match[1]);

@@ -3,7 +3,7 @@ import expressSession from 'express-session';
 import type { Knex } from 'knex';
 import passport, { type Strategy } from 'passport';
 import type { AccountRole } from '../../shared/contract/vocabulary.js';
-import { visitor, type Caller } from './caller.js';
+import { visitor, type Caller, type PostingLimit } from './caller.js';
 import { SessionStore } from './session-store.js';
 
 const fourteenDays = 14 * 24 * 60 * 60 * 1000;
@@ -15,6 +15,8 @@ export type Authenticator = InstanceType<typeof passport.Passport>;
 export interface SessionAccount {
   readonly id: number;
   readonly role: AccountRole;
+  /** Reads, but does not post. */
+  readonly limit?: PostingLimit | null;
 }
 
 export interface SessionParts {
@@ -24,7 +26,7 @@ export interface SessionParts {
 
 /**
  * Passport with the strategy people sign in by. `findAccount` is asked on every request of a member, so that a changed
- * role or a removed account acts at once.
+ * role, a limit or a removed account acts at once.
  */
 export function createAuthenticator(options: {
   strategy: Strategy;
@@ -62,7 +64,8 @@ export function createSessions(options: {
     handlers: [session, options.authenticator.session()],
     callerOf(request) {
       const account = request.user as SessionAccount | undefined;
-      return account ? { role: account.role, accountId: account.id } : visitor;
+      if (!account) return visitor;
+      return { role: account.role, accountId: account.id, limit: account.limit ?? null };
     },
   };
 }

@@ -1,7 +1,10 @@
 import type { Knex } from 'knex';
+import { createDeskMail, type DeskWords } from './desk-mail.js';
 import { htmlOf, subjectOf, textOf, type Letter } from './letter.js';
 import type { Letters } from './letters.js';
 import { addMail, countMails } from './mail-outbox.store.js';
+import { createLimitMail, type LimitMail } from './limit-mail.js';
+import { createMakerMail, type MakerMail } from './maker-mail.js';
 import { noticeRecipient, type Recipient } from './recipients.store.js';
 import { unsubscribeToken } from './unsubscribe-token.js';
 
@@ -17,7 +20,7 @@ interface AccountLetter {
  * Puts mails into the outbox, within the transaction whose outcome they tell of: they are sent when it is committed
  * and never when it is not.
  */
-export interface MailQueue {
+export interface MailQueue extends MakerMail, DeskWords, LimitMail {
   queueEditionPublished(
     trx: Knex,
     edition: { authorId: number; editionId: number; number: number; title: string; slug: string },
@@ -37,6 +40,8 @@ export interface MailQueue {
     },
   ): Promise<void>;
   queueEmailConfirmation(trx: Knex, letter: AccountLetter): Promise<void>;
+  /** To an address that was confirmed once and sends mail back. */
+  queueAddressCheck(trx: Knex, letter: AccountLetter): Promise<void>;
   queuePasswordReset(trx: Knex, letter: AccountLetter): Promise<void>;
   queueAlreadyHasAccount(
     trx: Knex,
@@ -97,6 +102,10 @@ export function createMailQueue(needs: { letters: Letters; secret: string; clock
   };
 
   return {
+    ...createDeskMail({ page: letters.page, queueNotice }),
+    ...createLimitMail({ page: letters.page, queueAccountMail }),
+    ...createMakerMail({ clock, page: letters.page, queueAccountMail, queueNotice }),
+
     queueEditionPublished: (trx, edition) =>
       queueNotice(trx, `edition-published:${edition.editionId}:${edition.authorId}`, edition.authorId, (to) =>
         letters.editionPublished({ ...edition, ...to }),
@@ -118,6 +127,9 @@ export function createMailQueue(needs: { letters: Letters; secret: string; clock
 
     queueEmailConfirmation: (trx, letter) =>
       queueAccountMail(trx, `confirm-email:${letter.tokenId}`, letter, letters.emailConfirmation(letter)),
+
+    queueAddressCheck: (trx, letter) =>
+      queueAccountMail(trx, `confirm-email:${letter.tokenId}`, letter, letters.addressCheck(letter)),
 
     queuePasswordReset: (trx, letter) =>
       queueAccountMail(trx, `reset-password:${letter.tokenId}`, letter, letters.passwordReset(letter)),

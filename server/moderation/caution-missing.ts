@@ -5,7 +5,7 @@ import type { Caution } from '../../shared/contract/write-ups.js';
 import { answerHazards, findHazards, type NamedHazard } from '../../shared/safety/hazards.js';
 import { ProblemError } from '../http/problems.js';
 
-/** Hazards stand without a caution; names each with its fix and the words that name it. */
+/** Hazards stand without a caution; names each with its fix, its step and the words that name it. */
 export class CautionMissing extends ProblemError {
   constructor(detail: string, remedy: string, content: EditionContent, open: readonly NamedHazard[]) {
     super('caution-missing', 409, detail, remedy, { fields: open.map((hazard) => fieldOf(content, hazard)) });
@@ -19,11 +19,25 @@ export function openHazards(content: EditionContent, cautions: readonly Caution[
   );
 }
 
-function fieldOf(content: EditionContent, { hazard, fixKey, fixTitle, words }: NamedHazard): FieldProblem {
+function fieldOf(content: EditionContent, named: NamedHazard): FieldProblem {
+  const { hazard, fixKey, fixTitle, step, words } = named;
   const quoted = words.map((word) => `“${word}”`).join(', ');
+  const where =
+    fixTitle === null ? 'The write-up' : step === null ? `“${fixTitle}”` : `Step ${step} of “${fixTitle}”`;
+  const places = [
+    ...(step === null ? [] : ['the step']),
+    ...(fixKey === null ? [] : ['the fix']),
+    'the write-up',
+  ];
   return {
-    path: fixKey === null ? '' : `fixes.${content.fixes.findIndex((fix) => fix.key === fixKey)}`,
-    message: `${fixTitle === null ? 'The write-up' : `“${fixTitle}”`} names ${quoted}: ${hazardKindWords[hazard]}`,
-    remedy: `Place a caution that answers “${hazardKindWords[hazard]}” on ${fixKey === null ? 'the write-up' : 'the fix or the write-up'}.`,
+    path: pathOf(content, named),
+    message: `${where} names ${quoted}: ${hazardKindWords[hazard]}`,
+    remedy: `Place a caution that answers “${hazardKindWords[hazard]}” on ${places.join(' or ')}.`,
   };
+}
+
+function pathOf(content: EditionContent, { fixKey, step }: NamedHazard): string {
+  if (fixKey === null) return '';
+  const fix = `fixes.${content.fixes.findIndex((each) => each.key === fixKey)}`;
+  return step === null ? fix : `${fix}.steps.${step - 1}`;
 }

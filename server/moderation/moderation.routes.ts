@@ -6,12 +6,14 @@ import type { DeskService } from './desk.service.js';
 
 export function moderationBindings(desk: DeskService & CautionService & DecisionService): RouteBinding[] {
   return [
-    bind(routes.readDesk, ({ query }) => desk.readDesk(query)),
     bind(routes.readDeskEdition, ({ params }) => desk.readDeskEdition(params.id)),
     bind(routes.listLibraryCautions, async () => ({ items: await desk.listLibraryCautions() })),
     bind(routes.placeCaution, ({ caller, body }) => desk.placeCaution(memberOf(caller).accountId, body)),
     bind(routes.changeCaution, ({ caller, params, body }) =>
       desk.changeCaution(memberOf(caller).accountId, params.id, body),
+    ),
+    bind(routes.moveCaution, ({ caller, params, body }) =>
+      desk.moveCaution(memberOf(caller).accountId, params.id, body),
     ),
     bind(routes.removeCaution, ({ caller, params }) =>
       desk.removeCaution(memberOf(caller).accountId, params.id),

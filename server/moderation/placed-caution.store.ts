@@ -4,16 +4,18 @@ import type { Caution } from '../../shared/contract/write-ups.js';
 import { fromJson } from '../rows.js';
 
 /** What a caution says. */
-export type CautionWords = Omit<Caution, 'id' | 'fixKey'>;
+export type CautionWords = Omit<Caution, 'id' | 'fixKey' | 'stepKey'>;
 
 export type PlacedCautionStore = ReturnType<typeof createPlacedCautionStore>;
 
 /** Writes cautions, and keeps the library they are taken from. What stands on a write-up is read by the write-ups themselves. */
 export function createPlacedCautionStore(knex: Knex) {
   return {
+    /** What is offered: the entries that are not retired. */
     async library(): Promise<LibraryCaution[]> {
       const rows: (Omit<LibraryCaution, 'hazards'> & { hazards: unknown })[] = await knex('caution_library')
         .select('id', 'name', 'hazards', 'hazard', 'consequence', 'avoidance', { signalWord: 'signal_word' })
+        .whereNull('retired_at')
         .orderBy(['position', 'id']);
       return rows.map((row) => ({ ...row, hazards: fromJson(row.hazards) }));
     },
@@ -27,6 +29,7 @@ export function createPlacedCautionStore(knex: Knex) {
       caution: {
         writeUpId: number;
         fixId: number | null;
+        stepKey: string | null;
         libraryId: number | null;
         words: CautionWords;
         placedBy: number;
@@ -36,6 +39,7 @@ export function createPlacedCautionStore(knex: Knex) {
       const [id] = await trx('cautions').insert({
         write_up_id: caution.writeUpId,
         fix_id: caution.fixId,
+        step_key: caution.stepKey,
         library_id: caution.libraryId,
         ...columnsOf(caution.words),
         placed_by: caution.placedBy,
@@ -52,6 +56,10 @@ export function createPlacedCautionStore(knex: Knex) {
 
     async reword(trx: Knex, id: number, words: CautionWords): Promise<void> {
       await trx('cautions').where('id', id).update(columnsOf(words));
+    },
+
+    async move(trx: Knex, id: number, to: { fixId: number | null; stepKey: string | null }): Promise<void> {
+      await trx('cautions').where('id', id).update({ fix_id: to.fixId, step_key: to.stepKey });
     },
 
     async takeOff(trx: Knex, id: number, at: Date): Promise<void> {

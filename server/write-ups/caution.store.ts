@@ -15,6 +15,7 @@ export function createCautionStore(knex: Knex) {
       .select('c.id', 'c.hazards', 'c.hazard', 'c.consequence', 'c.avoidance', {
         writeUpId: 'c.write_up_id',
         fixKey: 'f.fix_key',
+        stepKey: 'c.step_key',
         signalWord: 'c.signal_word',
       });
 

@@ -2,13 +2,13 @@ import type { EditionContent, Fix, JointSide, PhotoUse } from '../../shared/cont
 import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type { Photo } from '../../shared/contract/photos.js';
 import type {
-  Caution,
   EditionView,
   FixView,
   JointSideView,
   PhotoShown,
   RichText,
 } from '../../shared/contract/write-ups.js';
+import { cautionsAt } from '../../shared/safety/caution-places.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { CautionStore } from './caution.store.js';
 import { partIdsOf, photoIdsOf } from './edition-links.js';
@@ -32,7 +32,7 @@ export type EditionViews = ReturnType<typeof createEditionViews>;
 /** Draws an edition up as its page shows it: published, as it once was, or as a draft. Six queries side by side. */
 export function createEditionViews({ hardware, photos, renderText, fixes, cautions }: ViewParts) {
   return {
-    /** Cautions and standings are always those of today. A joint with a part not chosen yet is left out. */
+    /** Cautions and standings are always those of today, and no caution is left out. A joint with a part not chosen yet is left out. */
     async viewOf(content: EditionContent, writeUpId: number): Promise<EditionView> {
       const partIds = partIdsOf(content);
       const [parts, revisionsOf, symptoms, pictures, known, placed] = await Promise.all([
@@ -63,14 +63,14 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
         fixes: content.fixes.map((fix) => ({
           ...textOf(fix),
           ...evidenceOf(known.get(fix.key)),
-          cautions: placed.filter((caution) => caution.fixKey === fix.key),
+          cautions: cautionsAt(content, placed, { fixKey: fix.key, stepKey: null }),
         })),
         photos: content.photos.flatMap((use) => {
           const photo = pictures.get(use.photoId);
           return photo ? [{ ...shownAs(photo, use), caption: use.caption }] : [];
         }),
         sources: renderText(content.sources),
-        cautions: placed.filter((caution: Caution) => caution.fixKey === null),
+        cautions: cautionsAt(content, placed, { fixKey: null, stepKey: null }),
       };
 
       function partNameOf(revision: RevisionRef | undefined): string | null {
@@ -108,6 +108,7 @@ export function createEditionViews({ hardware, photos, renderText, fixes, cautio
             key: step.key,
             text: renderText(step.text),
             photo: photoOfStep(step.photoId),
+            cautions: cautionsAt(content, placed, { fixKey: fix.key, stepKey: step.key }),
           })),
           revisions: fix.revisionIds.flatMap((id) => {
             const revision = revisions.get(id);

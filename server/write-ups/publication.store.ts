@@ -1,5 +1,6 @@
 import type { Knex } from 'knex';
 import { isDuplicate } from '../rows.js';
+import { notWithdrawn } from './withdrawal.store.js';
 import type { EditionLinks } from './edition-links.js';
 
 export interface LockedWriteUp {
@@ -66,6 +67,8 @@ export const publicationStore = {
       .update({
         published_edition_id: editionId,
         first_published_at: trx.raw('COALESCE(first_published_at, ?)', [at]),
+        // The mended text is out: what was withdrawn no longer is.
+        ...notWithdrawn,
       });
   },
 

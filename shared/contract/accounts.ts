@@ -12,13 +12,25 @@ export const Password = z
 export const DisplayName = line(60, 2);
 const Token = z.string().min(20).max(100);
 
+/** When mail about what somebody watches comes. */
+export const MailRhythm = z.enum(['at-once', 'daily', 'weekly', 'none']);
+export type MailRhythm = z.infer<typeof MailRhythm>;
+
 export const Account = z.object({
   id: Id,
   email: z.string(),
   displayName: z.string(),
   role: AccountRole,
-  /** Whether mail that is not needed for the account itself may be sent. */
+  /** Whether the desk's word on their own editions and proposals is mailed. */
   noticeMail: z.boolean(),
+  /** When mail about what they watch comes. */
+  mailRhythm: MailRhythm,
+  /** Whether a caution on a fix they tried is mailed, at once and whatever the rhythm. */
+  safetyMail: z.boolean(),
+  /** Whether they are told of what changes on their bench; null until they have answered. */
+  benchWatch: z.boolean().nullable(),
+  /** Since when mail to them comes back, and so none but account mail is sent. */
+  mailRefusedAt: Instant.nullable(),
   units: z.enum(['mm', 'in']),
   createdAt: Instant,
 });
@@ -125,13 +137,28 @@ export const accountRoutes = {
     path: '/api/account/profile',
     tag,
     access: signedIn,
+    limitedMay: true,
     summary: 'Change name, units or mail preference',
     body: z.strictObject({
       displayName: DisplayName.optional(),
       units: z.enum(['mm', 'in']).optional(),
       noticeMail: z.boolean().optional(),
+      mailRhythm: MailRhythm.optional(),
+      safetyMail: z.boolean().optional(),
+      benchWatch: z.boolean().optional(),
     }),
     response: Session,
+  }),
+  confirmAddressAgain: route({
+    method: 'post',
+    path: '/api/account/confirm-again',
+    tag,
+    access: signedIn,
+    limitedMay: true,
+    status: 202,
+    summary: 'Mail a link to confirm the own address, after mail to it came back',
+    response: z.object({ mailed: z.literal(true) }),
+    problems: ['too-many-requests'],
   }),
   unsubscribe: route({
     method: 'post',

@@ -109,14 +109,30 @@ describe('words that name a hazard', () => {
 });
 
 describe('where a hazard is named', () => {
-  it('tells the fix and each different word once', () => {
+  it('tells the fix, its steps apart from the rest of it, and each different word once', () => {
     const content = withFix({
       title: 'Trim the lip',
       tools: ['hobby knife', 'razor blade'],
       ...step('Turn the knife slowly.'),
     });
+    const fix = { fixKey: 'fix-aaaa', fixTitle: 'Trim the lip' };
     expect(findHazards(content)).toEqual([
-      { hazard: 'blade', fixKey: 'fix-aaaa', fixTitle: 'Trim the lip', words: ['knife', 'razor blade'] },
+      { hazard: 'blade', ...fix, stepKey: null, step: null, words: ['knife', 'razor blade'] },
+      { hazard: 'blade', ...fix, stepKey: 'step-aaaa', step: 1, words: ['knife'] },
+    ]);
+  });
+
+  it('tells which step names it, by its key and by its number', () => {
+    const steps = ['Wipe it.', 'Sand it flat.', 'Glue it.'].map((text, index) => ({
+      key: `step-${index}aaa`,
+      text,
+      photoId: null,
+    }));
+    expect(
+      findHazards(withFix({ steps })).map(({ hazard, stepKey, step }) => [hazard, stepKey, step]),
+    ).toEqual([
+      ['dust', 'step-1aaa', 2],
+      ['adhesive', 'step-2aaa', 3],
     ]);
   });
 
@@ -127,7 +143,7 @@ describe('where a hazard is named', () => {
       sources: 'The acetone data sheet.',
     };
     expect(findHazards(content)).toEqual([
-      { hazard: 'adhesive', fixKey: null, fixTitle: null, words: ['epoxy'] },
+      { hazard: 'adhesive', fixKey: null, fixTitle: null, stepKey: null, step: null, words: ['epoxy'] },
     ]);
   });
 });
@@ -138,18 +154,35 @@ describe('whether a caution answers a hazard', () => {
     answerHazards(named, cautions).map((found) => found.answered);
 
   it('does when it lists the hazard and stands on the same fix or on the whole write-up', () => {
-    expect(answered({ fixKey: 'fix-aaaa', hazards: ['dust', 'blade'] })).toEqual([true]);
-    expect(answered({ fixKey: null, hazards: ['blade'] })).toEqual([true]);
+    expect(answered({ fixKey: 'fix-aaaa', stepKey: null, hazards: ['dust', 'blade'] })).toEqual([true]);
+    expect(answered({ fixKey: null, stepKey: null, hazards: ['blade'] })).toEqual([true]);
   });
 
   it('does not when it stands on another fix, lists another hazard or is not there', () => {
-    expect(answered({ fixKey: 'fix-bbbb', hazards: ['blade'] })).toEqual([false]);
-    expect(answered({ fixKey: 'fix-aaaa', hazards: ['dust'] })).toEqual([false]);
+    expect(answered({ fixKey: 'fix-bbbb', stepKey: null, hazards: ['blade'] })).toEqual([false]);
+    expect(answered({ fixKey: 'fix-aaaa', stepKey: null, hazards: ['dust'] })).toEqual([false]);
     expect(answered()).toEqual([false]);
   });
 
   it('does not for the write-up’s own text when it stands on a fix', () => {
     const own = findHazards({ ...emptyContent, cause: 'A knife slipped.' });
-    expect(answerHazards(own, [{ fixKey: 'fix-aaaa', hazards: ['blade'] }])[0]?.answered).toBe(false);
+    expect(answerHazards(own, [{ fixKey: 'fix-aaaa', stepKey: null, hazards: ['blade'] }])[0]?.answered).toBe(
+      false,
+    );
+  });
+
+  it('does for a step when it stands on that step, on all of the fix or on the write-up, and for no other step', () => {
+    const ofStep = findHazards(withFix(step('Cut it with a knife.')));
+    const answers = (fixKey: string | null, stepKey: string | null) =>
+      answerHazards(ofStep, [{ fixKey, stepKey, hazards: ['blade'] }])[0]?.answered;
+    expect(answers('fix-aaaa', 'step-aaaa')).toBe(true);
+    expect(answers('fix-aaaa', null)).toBe(true);
+    expect(answers(null, null)).toBe(true);
+    expect(answers('fix-aaaa', 'step-bbbb')).toBe(false);
+    expect(answers('fix-bbbb', 'step-aaaa')).toBe(false);
+  });
+
+  it('does not for all of the fix when it stands on one of its steps', () => {
+    expect(answered({ fixKey: 'fix-aaaa', stepKey: 'step-aaaa', hazards: ['blade'] })).toEqual([false]);
   });
 });

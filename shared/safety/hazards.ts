@@ -20,38 +20,62 @@ const rules = hazardRules.map((rule) => ({
 
 /**
  * The hazards that an edition's texts name, by the list in hazard-rules.ts: those of the write-up's own text first, then
- * fix by fix, with the words that gave each away. Read are titles, summary, what is noticed, cause and photo texts of the write-up,
- * and title, why, tools, materials, steps and notes of each fix; sources are not. O(text × rules).
+ * fix by fix, those of all of a fix before those of its steps, with the words that gave each away. Read are titles, summary,
+ * what is noticed, cause and photo texts of the write-up, and title, why, tools, materials, notes and steps of each fix; sources
+ * are not. O(text × rules).
  */
 export function findHazards(content: EditionContent): NamedHazard[] {
   const own = find(ownPieces(content)).map(([hazard, words]) => ({
     hazard,
     fixKey: null,
     fixTitle: null,
+    stepKey: null,
+    step: null,
     words,
   }));
-  const ofFixes = content.fixes.flatMap((fix) =>
-    find(fixPieces(fix)).map(([hazard, words]) => ({ hazard, fixKey: fix.key, fixTitle: fix.title, words })),
-  );
-  return [...own, ...ofFixes];
+  return [...own, ...content.fixes.flatMap(hazardsOfFix)];
 }
 
+function hazardsOfFix(fix: Fix): NamedHazard[] {
+  const at = { fixKey: fix.key, fixTitle: fix.title };
+  const whole = find(fixPieces(fix)).map(([hazard, words]) => ({
+    hazard,
+    ...at,
+    stepKey: null,
+    step: null,
+    words,
+  }));
+  const inSteps = fix.steps.flatMap((step, index) =>
+    find(plain([step.text])).map(([hazard, words]) => ({
+      hazard,
+      ...at,
+      stepKey: step.key,
+      step: index + 1,
+      words,
+    })),
+  );
+  return [...whole, ...inSteps];
+}
+
+/** Where a caution was placed, and what it answers. */
+export type Answer = Pick<Caution, 'fixKey' | 'stepKey' | 'hazards'>;
+
 /**
- * Says of each hazard whether a caution answers it: one that lists the hazard and stands on the same fix or on the whole
- * write-up. Pass only cautions that have not been taken off.
+ * Says of each hazard whether a caution answers it: one that lists the hazard and was placed on the same step, on all of
+ * its fix or on the whole write-up. One whose step or fix is gone stands further up, but answers for nothing there until the
+ * desk has looked at it. Pass only cautions that have not been taken off.
  */
-export function answerHazards(
-  found: readonly NamedHazard[],
-  cautions: readonly Pick<Caution, 'fixKey' | 'hazards'>[],
-): FoundHazard[] {
+export function answerHazards(found: readonly NamedHazard[], cautions: readonly Answer[]): FoundHazard[] {
   return found.map((named) => ({
     ...named,
-    answered: cautions.some(
-      (caution) =>
-        caution.hazards.includes(named.hazard) &&
-        (caution.fixKey === null || caution.fixKey === named.fixKey),
-    ),
+    answered: cautions.some((caution) => caution.hazards.includes(named.hazard) && covers(caution, named)),
   }));
+}
+
+function covers(caution: Answer, { fixKey, stepKey }: NamedHazard): boolean {
+  if (caution.fixKey === null) return true;
+  if (caution.fixKey !== fixKey) return false;
+  return caution.stepKey === null || caution.stepKey === stepKey;
 }
 
 function ownPieces(content: EditionContent): Piece[] {
@@ -68,7 +92,7 @@ function fixPieces(fix: Fix): Piece[] {
   return [
     ...plain([fix.title, ...fix.why.split(/\n{2,}/)]),
     ...fix.tools.map((text) => ({ text, isTool: true })),
-    ...plain([...fix.materials, ...fix.steps.map((step) => step.text), fix.afterwardsNote]),
+    ...plain([...fix.materials, fix.afterwardsNote]),
   ];
 }
 

@@ -116,16 +116,33 @@ describe('a sign-up for an address that has an account', () => {
     expect((await signIn(email, 'another long password').answer).status).toBe(401);
   });
 
-  it('replaces one that was never confirmed, so that nobody can reserve a stranger’s address', async () => {
+  it('stays apart from one that was never confirmed: name and password are those of the mail that is followed', async () => {
+    const email = newAddress();
+    await signUp(email, 'Rightful Owner', password);
+    const ownersToken = await app.mailbox.tokenFor(email);
+    await signUp(email, 'Late Comer', 'password of a stranger');
+    const strangersToken = await app.mailbox.waitFor(email, 2).then(() => app.mailbox.tokenFor(email));
+
+    const confirmed = await app.visitor().post('/api/account/confirm-email').send({ token: ownersToken });
+
+    expect(confirmed.body.account.displayName).toBe('Rightful Owner');
+    expect((await signIn(email).answer).status).toBe(200);
+    expect((await signIn(email, 'password of a stranger').answer).status).toBe(401);
+    const late = await app.visitor().post('/api/account/confirm-email').send({ token: strangersToken });
+    expect([late.status, late.body.type]).toEqual([422, '/problems/token-not-valid']);
+  });
+
+  it('reserves nothing: whoever follows their own mail has their own name and password', async () => {
     const email = newAddress();
     await signUp(email, 'First Comer', 'password of a stranger');
-    const firstToken = await app.mailbox.tokenFor(email);
+    await app.mailbox.waitFor(email, 1);
     await signUp(email, 'Rightful Owner', password);
-    const secondToken = await app.mailbox.waitFor(email, 2).then(() => app.mailbox.tokenFor(email));
+    const [mail] = await app.mailbox.waitFor(email, 2);
+    expect(mail?.text).toContain('Hello Rightful Owner');
+    const token = await app.mailbox.tokenFor(email);
 
-    const early = await app.visitor().post('/api/account/confirm-email').send({ token: firstToken });
-    expect([early.status, early.body.type]).toEqual([422, '/problems/token-not-valid']);
-    const confirmed = await app.visitor().post('/api/account/confirm-email').send({ token: secondToken });
+    const confirmed = await app.visitor().post('/api/account/confirm-email').send({ token });
+
     expect(confirmed.body.account.displayName).toBe('Rightful Owner');
     expect((await signIn(email, 'password of a stranger').answer).status).toBe(401);
   });

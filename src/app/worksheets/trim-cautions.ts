@@ -39,7 +39,7 @@ export function trimCautions(hazards: readonly HazardKind[]): readonly Caution[]
   return hazards
     .flatMap((hazard, index) => {
       const found = words[hazard];
-      return found ? [{ id: index + 1, fixKey: null, hazards: [hazard], ...found }] : [];
+      return found ? [{ id: index + 1, fixKey: null, stepKey: null, hazards: [hazard], ...found }] : [];
     })
     .sort((one, other) => rank(one) - rank(other));
 }

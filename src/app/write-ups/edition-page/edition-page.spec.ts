@@ -10,6 +10,7 @@ const rich = (html: string): RichText => ({ source: html, html });
 const caution: Caution = {
   id: 1,
   fixKey: 'trim-lip',
+  stepKey: null,
   signalWord: 'danger',
   hazards: ['power-tool'],
   hazard: 'Rotary tool',
@@ -27,7 +28,7 @@ const fix: FixView = {
   why: none,
   tools: ['rotary tool'],
   materials: [],
-  steps: [{ key: 'step-one', text: rich('<p>Cut the lip.</p>'), photo: null }],
+  steps: [{ key: 'step-one', text: rich('<p>Cut the lip.</p>'), photo: null, cautions: [] }],
   revisions: [],
   afterwards: ['flats'],
   afterwardsNote: '',
