@@ -29,6 +29,16 @@ export default defineConfig({
       },
       {
         test: {
+          name: 'faults',
+          include: ['test/faults/**/*.spec.ts'],
+          testTimeout: 180_000,
+          hookTimeout: 180_000,
+          // Each file has a database and a server of its own, which it kills.
+          maxWorkers: 1,
+        },
+      },
+      {
+        test: {
           name: 'browser',
           include: ['test/browser/**/*.spec.ts'],
           globalSetup: ['test/browser/support/global-setup.ts'],

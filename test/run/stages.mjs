@@ -37,6 +37,7 @@ export const stages = {
     ]);
   },
   api: (workDir) => vitestProject('api', workDir),
+  faults: (workDir) => vitestProject('faults', workDir),
   build: async (workDir) => {
     await ensureBuilt({ projectDir, logDir: workDir, say: console.log });
     return { passed: 1, failed: 0 };

@@ -6,13 +6,13 @@ import { createMailboxServer } from './http.js';
 import { createMailbox, type Mail, type Mailbox } from './mailbox.js';
 import { createSmtpServer } from './smtp.js';
 
-const mail = (to: string, subject = 'Hello'): Omit<Mail, 'id'> => ({
+const mail = (to: string, subject = 'Hello', headers: Mail['headers'] = {}): Omit<Mail, 'id' | 'copies'> => ({
   from: 'desk@shimlore.example',
   to: [to],
   subject,
   text: 'Text',
   html: null,
-  headers: {},
+  headers,
   receivedAt: '2026-12-01T10:00:00.000Z',
 });
 
@@ -21,6 +21,16 @@ describe('the kept mails', () => {
     const mailbox = createMailbox(2);
     for (const subject of ['first', 'second', 'third']) mailbox.add(mail('a@x.example', subject));
     expect(mailbox.list().map((kept) => kept.subject)).toEqual(['third', 'second']);
+  });
+
+  it('hold a mail that came twice under one Message-ID once, and say how often it came', () => {
+    const mailbox = createMailbox();
+    const named = { 'message-id': '<one@shimlore.example>' };
+    for (const to of ['a@x.example', 'a@x.example', 'b@x.example']) mailbox.add(mail(to, 'Hello', named));
+    expect(mailbox.list().map(({ to, copies }) => [...to, copies])).toEqual([
+      ['b@x.example', 1],
+      ['a@x.example', 2],
+    ]);
   });
 
   it('are found by their address, whatever its case', () => {

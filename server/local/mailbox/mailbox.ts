@@ -8,10 +8,12 @@ export interface Mail {
   readonly html: string | null;
   readonly headers: Readonly<Record<string, string>>;
   readonly receivedAt: string;
+  /** How often it came: mails of one Message-ID to the same people are one mail (RFC 5322, 3.6.4). */
+  readonly copies: number;
 }
 
 export interface Mailbox {
-  add(mail: Omit<Mail, 'id'>): void;
+  add(mail: Omit<Mail, 'id' | 'copies'>): void;
   /** Newest first; only those to `address` where one is given, upper and lower case alike. */
   list(address?: string): Mail[];
   find(id: number): Mail | undefined;
@@ -24,8 +26,13 @@ export function createMailbox(capacity = 500): Mailbox {
   let lastId = 0;
   return {
     add(mail) {
+      const known = mails.find((kept) => isSame(kept, mail));
+      if (known) {
+        mails = mails.map((kept) => (kept === known ? { ...kept, copies: kept.copies + 1 } : kept));
+        return;
+      }
       lastId += 1;
-      mails = [{ id: lastId, ...mail }, ...mails].slice(0, capacity);
+      mails = [{ id: lastId, ...mail, copies: 1 }, ...mails].slice(0, capacity);
     },
     list(address) {
       const wanted = address?.trim().toLowerCase();
@@ -36,4 +43,9 @@ export function createMailbox(capacity = 500): Mailbox {
       mails = [];
     },
   };
+}
+
+function isSame(kept: Mail, mail: Omit<Mail, 'id' | 'copies'>): boolean {
+  const id = mail.headers['message-id'];
+  return id !== undefined && kept.headers['message-id'] === id && kept.to.join() === mail.to.join();
 }

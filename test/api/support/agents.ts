@@ -23,6 +23,12 @@ export type MemberAgent = Agent & { readonly account: TestAccount };
 const password = 'a long enough password';
 let passwordHash: Promise<string> | undefined;
 
+/** What a first visit leaves in a browser, as `name=value`. */
+export async function cookiesOfFirstVisit(url: string): Promise<string[]> {
+  const answer = await fetch(`${url}/api/account/session`);
+  return answer.headers.getSetCookie().map((cookie) => cookie.split(';')[0] ?? '');
+}
+
 /** A browser that has opened the site once, whose cookies are `cookies` (`name=value`). */
 export function openAgent(url: string, cookies: readonly string[]): Agent {
   const agent = request.agent(url);

@@ -13,7 +13,14 @@ import { readSettings } from '../../../server/config.js';
 import { ensureSearchIndex } from '../../../server/search/index-settings.js';
 import type { Worker } from '../../../server/worker.js';
 import type { AccountRole } from '../../../shared/contract/vocabulary.js';
-import { insertAccount, openAgent, signIn, type Agent, type MemberAgent } from './agents.js';
+import {
+  cookiesOfFirstVisit,
+  insertAccount,
+  openAgent,
+  signIn,
+  type Agent,
+  type MemberAgent,
+} from './agents.js';
 import { openEmptyDatabase } from './database.js';
 import { fromSetUp, workerNumber } from './environment.js';
 import { openMailbox, type TestMailbox } from './mailbox.js';
@@ -61,6 +68,7 @@ export async function startTestApp(
     SEARCH_INDEX: `write-ups-${workerNumber}`,
     PHOTO_DIR: photoDir,
     SESSION_SECRET: 'a session secret for the tests only',
+    BOUNCE_SECRET: 'a bounce secret for the tests only',
     LOG_LEVEL: process.env['LOG_LEVEL'] ?? 'silent',
   });
   const search = new Meilisearch({
@@ -120,9 +128,4 @@ function startedOnce(worker: Worker): Worker {
     },
     stop: async () => (started ? worker.stop() : undefined),
   };
-}
-
-async function cookiesOfFirstVisit(url: string): Promise<string[]> {
-  const answer = await fetch(`${url}/api/account/session`);
-  return answer.headers.getSetCookie().map((cookie) => cookie.split(';')[0] ?? '');
 }
