@@ -16,7 +16,7 @@ afterAll(() => site.stop());
 
 /** A photo that no other one equals, with enough in it to take a while. */
 async function grain(seed: number): Promise<Buffer> {
-  const [width, height] = [1600, 1200];
+  const [width, height] = [960, 720];
   const pixels = Buffer.alloc(width * height * 3);
   let state = seed + 1;
   for (let index = 0; index < pixels.length; index += 1) {
@@ -60,7 +60,7 @@ describe('photos that are being uploaded', () => {
     'are all there with all their files when the %s is killed, and one that was cut off can be sent again',
     async (what) => {
       const offset = what === 'server' ? 0 : 100;
-      const photos = await Promise.all([0, 1, 2, 3, 4, 5].map((seed) => grain(offset + seed)));
+      const photos = await Promise.all([0, 1, 2, 3].map((seed) => grain(offset + seed)));
       const uploading = uploadUntilRefused(photos);
       const before = Number(await countOfPhotos());
       while (Number(await countOfPhotos()) < before + 2) await pause(50);
