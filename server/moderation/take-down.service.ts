@@ -7,8 +7,11 @@ import type { DeskWords } from '../mail/desk-mail.js';
 import type { MeasurementService } from '../measurements/measurements.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
+import { deskLookStore } from './desk-look.store.js';
+import { flagStore } from './flag.store.js';
 import { readSubject } from './subject.store.js';
 import { markedKinds, takeDownStore as store } from './take-down.store.js';
+import { tellTellers } from './tellers.js';
 
 /** Who takes what down, or puts it back, and why. */
 export interface TakeDownOrder {
@@ -21,7 +24,7 @@ export interface TakeDownOrder {
 export interface TakeDownParts {
   readonly clock: () => Date;
   readonly audit: AuditLog;
-  readonly mail: Pick<DeskWords, 'queueTakenDown' | 'queuePutBack'>;
+  readonly mail: DeskWords;
   readonly measurements: Pick<MeasurementService, 'decideWithin' | 'remakeConsensus'>;
   readonly writeUps: Pick<WriteUpService, 'judgeAnew'>;
   readonly searchOutbox: IndexNotice;
@@ -34,10 +37,15 @@ export function createTakeDownService(parts: TakeDownParts) {
   const { clock, audit, mail, measurements, writeUps, searchOutbox } = parts;
 
   return {
-    /** NotFound; AlreadyThere where it is off the pages already. Its writer is told by mail. */
+    /**
+     * NotFound; AlreadyThere where it is off the pages already. Its writer is told by mail. What waits at the desk on the
+     * same thing is settled with it, and those who told of it hear so.
+     */
     async takeDown(trx: Knex, order: TakeDownOrder): Promise<void> {
       await change(trx, order, 'take-down');
-      await mail.queueTakenDown(trx, await matterOf(trx, order));
+      const matter = await matterOf(trx, order);
+      await mail.queueTakenDown(trx, matter);
+      await closeOn(trx, order, matter.path);
     },
 
     /** NotFound; AlreadyThere where it stands on the pages. Its writer is told by mail. */
@@ -61,6 +69,10 @@ export function createTakeDownService(parts: TakeDownParts) {
       for (const kind of markedKinds) count += await store.markAllOf(trx, kind, accountId, by);
       const features = await store.setAsideAllOf(trx, accountId, by);
       await followAllOf(trx, accountId, features);
+      await deskLookStore.closeAllOf(trx, accountId, moderatorId, by.at);
+      const settlement = { outcome: 'taken-down', reason, by: moderatorId, at: by.at } as const;
+      const tellers = await flagStore.settleAllOf(trx, accountId, settlement);
+      await tellTellers(trx, mail, tellers, { ...settlement, path: '/' });
       await noteAll(trx, accountId, moderatorId, 'all-taken-down', reason);
       return { at: by.at, count };
     },
@@ -98,6 +110,15 @@ export function createTakeDownService(parts: TakeDownParts) {
       subject: { kind: auditKinds[kind], id, name: subject?.title ?? kind },
       reason,
     });
+  }
+
+  async function closeOn(trx: Knex, order: TakeDownOrder, path: string): Promise<void> {
+    const { moderatorId, reason } = order;
+    const at = clock();
+    await deskLookStore.closeOn(trx, order, moderatorId, at);
+    const settlement = { outcome: 'taken-down', reason, by: moderatorId, at } as const;
+    const tellers = await flagStore.settleOn(trx, order, settlement);
+    await tellTellers(trx, mail, tellers, { ...settlement, path });
   }
 
   /** Standings rest on trials. Few write-ups are concerned; each is held while it is judged. */
