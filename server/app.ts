@@ -6,7 +6,9 @@ import type { Logger } from 'pino';
 import { routes } from '../shared/contract/routes.js';
 import { createAccounts } from './accounts/accounts.js';
 import { createAuditLog } from './audit/audit.js';
+import { createAuditReader } from './audit/audit-reader.js';
 import { createBench } from './bench/bench.js';
+import { createCautionLibrary } from './caution-library/caution-library.js';
 import type { Settings } from './config.js';
 import { createHardware } from './hardware/hardware.js';
 import { createCsrf } from './http/csrf.js';
@@ -21,8 +23,15 @@ import { sessionSweeper } from './http/session-sweeper.js';
 import { createSessions } from './http/session.js';
 import { createJoints } from './joints/joints.js';
 import { createMail } from './mail/mail.js';
+import { createMakers } from './makers/makers.js';
 import { createMeasurements } from './measurements/measurements.js';
+import { createLimitLookup, createMembers } from './members/members.js';
+import { createDeskClaims } from './moderation/claims.js';
+import { createDeskInbox } from './moderation/desk-inbox.js';
+import { createDesk } from './moderation/desk.js';
 import { createModeration } from './moderation/moderation.js';
+import { createTakeDownService } from './moderation/take-down.service.js';
+import { createWithdrawals } from './moderation/withdrawals.js';
 import { createPhotos } from './photos/photos.js';
 import { createProposals } from './proposals/proposals.js';
 import { createQuestions } from './questions/questions.js';
@@ -30,6 +39,7 @@ import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
 import { renderText } from './text/render-text.js';
 import { createHappenings } from './watches/happenings.js';
+import { createWatches } from './watches/watches.js';
 import { createWhichOne } from './which-one/which-one.js';
 import type { Worker } from './worker.js';
 import { createWorksheets } from './worksheets/worksheets.js';
@@ -71,6 +81,8 @@ export function createApp(around: Surroundings): Composition {
 
   const audit = createAuditLog({ clock });
   const happenings = createHappenings({ clock });
+  const claims = createDeskClaims({ knex, clock });
+  const deskInbox = createDeskInbox({ clock });
   const mail = createMail({
     knex,
     transport: around.mailTransport,
@@ -79,8 +91,11 @@ export function createApp(around: Surroundings): Composition {
     publicAddress: settings.PUBLIC_ADDRESS,
     logger,
     secret,
+    bounceSecret: settings.BOUNCE_SECRET,
   });
-  const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf, audit });
+  const limitOn = createLimitLookup({ knex, clock });
+  const watches = createWatches({ knex, clock, logger, mail });
+  const accounts = createAccounts({ knex, clock, mail: mail.queue, limits, csrf, audit, limitOn });
   const sessions = createSessions({ knex, secret, secure, authenticator: accounts.authenticator });
   const photos = createPhotos({ knex, photoDir: settings.PHOTO_DIR, clock, limits });
   const hardware = createHardware({ knex });
@@ -101,6 +116,7 @@ export function createApp(around: Surroundings): Composition {
     renderText,
     searchOutbox: search.outbox,
     happenings,
+    deskInbox,
   });
   const moderation = createModeration({
     knex,
@@ -110,6 +126,7 @@ export function createApp(around: Surroundings): Composition {
     searchOutbox: search.outbox,
     audit,
     happenings,
+    claims,
   });
   const measurements = createMeasurements({
     knex,
@@ -118,6 +135,7 @@ export function createApp(around: Surroundings): Composition {
     limits,
     audit,
     happenings,
+    deskInbox,
   });
   const whichOne = createWhichOne({ knex, clock, hardware: hardware.service });
   const proposals = createProposals({
@@ -130,12 +148,15 @@ export function createApp(around: Surroundings): Composition {
     searchOutbox: search.outbox,
     audit,
     happenings,
+    claims,
+    deskInbox,
   });
   const joints = createJoints({
     knex,
     clock,
     measurements: measurements.service,
     writeUps: writeUps.service,
+    deskInbox,
   });
   const questions = createQuestions({
     knex,
@@ -144,8 +165,61 @@ export function createApp(around: Surroundings): Composition {
     writeUps: writeUps.service,
     renderText,
     limits,
+    deskInbox,
+  });
+  const takeDown = createTakeDownService({
+    clock,
+    audit,
+    mail: mail.queue,
+    measurements: measurements.service,
+    writeUps: writeUps.service,
+    searchOutbox: search.outbox,
+  });
+  const desk = createDesk({
+    knex,
+    clock,
+    audit,
+    mail: mail.queue,
+    writeUps: writeUps.service,
+    claims,
+    takeDown,
+    limits,
+  });
+  const makers = createMakers({
+    knex,
+    clock,
+    limits,
+    mail: mail.queue,
+    hardware: hardware.service,
+    writeUps: writeUps.service,
+    joints: joints.service,
+    renderText,
+    makerRole: accounts.makerRole,
+    audit,
+    happenings,
+    publicAddress: settings.PUBLIC_ADDRESS,
   });
   const worksheets = createWorksheets({ knex });
+  const cautionLibrary = createCautionLibrary({ knex, clock, audit, cautions: moderation.cautions });
+  const withdrawals = createWithdrawals({
+    knex,
+    clock,
+    writeUps: writeUps.service,
+    mail: mail.queue,
+    searchOutbox: search.outbox,
+    audit,
+    happenings,
+  });
+  const members = createMembers({
+    knex,
+    clock,
+    audit,
+    mail: mail.queue,
+    takeDown,
+    withdrawals: withdrawals.desk,
+    writeUps: writeUps.service,
+  });
+  const auditReader = createAuditReader({ knex, clock });
   const system = createSystem({
     knex,
     publicAddress: settings.PUBLIC_ADDRESS,
@@ -157,6 +231,7 @@ export function createApp(around: Surroundings): Composition {
     ...system.bindings,
     ...accounts.bindings,
     ...mail.bindings,
+    ...watches.bindings,
     ...photos.bindings,
     ...hardware.bindings,
     ...whichOne.bindings,
@@ -165,8 +240,14 @@ export function createApp(around: Surroundings): Composition {
     ...search.bindings,
     ...writeUps.bindings,
     ...moderation.bindings,
+    ...desk.bindings,
+    ...cautionLibrary.bindings,
+    ...withdrawals.bindings,
+    ...members.bindings,
+    ...auditReader.bindings,
     ...measurements.bindings,
     ...joints.bindings,
+    ...makers.bindings,
     ...worksheets.bindings,
     ...questions.bindings,
   ];
@@ -187,7 +268,10 @@ export function createApp(around: Surroundings): Composition {
   app.use(['/api', '/photos'], nothingHere, problemHandler);
   if (around.pages) app.use(around.pages.rendered, nothingHere, pageProblemHandler);
   app.use(nothingHere, problemHandler);
-  return { app, workers: [mail.worker, search.worker, sessionSweeper({ knex, clock, logger })] };
+  return {
+    app,
+    workers: [mail.worker, ...watches.workers, search.worker, sessionSweeper({ knex, clock, logger })],
+  };
 }
 
 function unlessPhotoFile(handler: RequestHandler): RequestHandler {

@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import type { Feature, PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type { JointKind } from '../../shared/fit/joint-kinds.js';
 import type { Process } from '../../shared/statistics/consensus.js';
+import { revisionRefColumns, toRevisionRef, type RevisionRefRow } from '../revision-ref.js';
 
 /** A feature with the part it belongs to. */
 export interface JointFeature {
@@ -98,14 +99,16 @@ export function createJointStore(knex: Knex) {
     },
 
     async revisionsOfParts(partIds: readonly number[]): Promise<RevisionRef[]> {
-      return knex('revisions')
+      const rows: RevisionRefRow[] = await knex('revisions')
         .whereIn('part_id', partIds)
-        .select('id', 'label', { partId: 'part_id' })
+        .select(revisionRefColumns)
         .orderBy(['part_id', 'position']);
+      return rows.map(toRevisionRef);
     },
 
     async revisionsByIds(ids: readonly number[]): Promise<RevisionRef[]> {
-      return knex('revisions').whereIn('id', ids).select('id', 'label', { partId: 'part_id' });
+      const rows: RevisionRefRow[] = await knex('revisions').whereIn('id', ids).select(revisionRefColumns);
+      return rows.map(toRevisionRef);
     },
 
     /** Parts by slug with what the comparison shows of them, in the order of the slugs. */
@@ -135,16 +138,20 @@ export function createJointStore(knex: Knex) {
       );
     },
 
-    async saveReport(report: {
-      jointId: number;
-      revisionA: number;
-      revisionB: number;
-      accountId: number;
-      sat: boolean;
-      note: string;
-      at: Date;
-    }): Promise<void> {
-      await knex('fit_reports')
+    /** One report for each person and pair: a second one takes the place of the first. Returns its id. */
+    async saveReport(
+      report: {
+        jointId: number;
+        revisionA: number;
+        revisionB: number;
+        accountId: number;
+        sat: boolean;
+        note: string;
+        at: Date;
+      },
+      trx: Knex,
+    ): Promise<number> {
+      await trx('fit_reports')
         .insert({
           joint_id: report.jointId,
           revision_a: report.revisionA,
@@ -156,6 +163,15 @@ export function createJointStore(knex: Knex) {
         })
         .onConflict(['joint_id', 'revision_a', 'revision_b', 'account_id'])
         .merge();
+      const row = await trx('fit_reports')
+        .where({
+          joint_id: report.jointId,
+          revision_a: report.revisionA,
+          revision_b: report.revisionB,
+          account_id: report.accountId,
+        })
+        .first('id');
+      return row.id;
     },
 
     /**
@@ -177,6 +193,7 @@ export function createJointStore(knex: Knex) {
           'joint_id',
           joints.map((joint) => joint.id),
         )
+        .whereNull('taken_down_at')
         .select('sat', {
           jointId: 'joint_id',
           revisionA: 'revision_a',
@@ -217,6 +234,7 @@ async function trialPairs(
       .whereIn('ra.part_id', parts)
       .whereIn('rb.part_id', parts)
       .whereRaw('ra.part_id <> rb.part_id')
+      .whereNull('t.taken_down_at')
       .distinct({
         partA: 'ra.part_id',
         partB: 'rb.part_id',

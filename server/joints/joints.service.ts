@@ -1,3 +1,4 @@
+import type { Knex } from 'knex';
 import type { PartRef, RevisionRef } from '../../shared/contract/hardware.js';
 import type {
   ComparedPart,
@@ -12,6 +13,7 @@ import type { Caution } from '../../shared/contract/write-ups.js';
 import { FieldNotValid, NotFound } from '../http/problems.js';
 import type { KnownDimensions, MeasurementService } from '../measurements/measurements.js';
 import { groupBy } from '../rows.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { comparedPart } from './compared-part.js';
 import { chanceOf, verdictOfPair, type KnownFeature } from './fit-cell.js';
@@ -37,13 +39,15 @@ interface Knowledge {
 export type JointService = ReturnType<typeof createJointService>;
 
 export function createJointService(around: {
+  knex: Knex;
   clock: () => Date;
   store: JointStore;
   pairs: JointWriteUpStore;
   measurements: Pick<MeasurementService, 'knownOf'>;
   writeUps: Pick<WriteUpService, 'cautionsOfMany'>;
+  deskInbox: DeskInbox;
 }) {
-  const { clock, store, pairs, measurements, writeUps } = around;
+  const { knex, clock, store, pairs, measurements, writeUps, deskInbox } = around;
 
   async function withFeatures(rows: readonly JointRow[]): Promise<Joint[]> {
     const features = await store.features(rows.flatMap((row) => [row.featureA, row.featureB]));
@@ -159,7 +163,11 @@ export function createJointService(around: {
         return found;
       };
       const [a, b] = [sideOf('revisionA', joint.a), sideOf('revisionB', joint.b)];
-      await store.saveReport({ ...report, jointId: joint.id, accountId, at: clock() });
+      await knex.transaction(async (trx) => {
+        const id = await store.saveReport({ ...report, jointId: joint.id, accountId, at: clock() }, trx);
+        const title = `Fit report on “${joint.name}”`;
+        await deskInbox.firstPost(trx, { kind: 'fit-report', id, accountId, title });
+      });
       return cellOf(joint, a, b, await knowledgeOf([joint]));
     },
 
@@ -178,7 +186,7 @@ export function createJointService(around: {
       };
     },
 
-    /** Parts in the order asked, each with its newest revision (or the one among `revisionIds`) against the revisions named. */
+    /** Parts in the order asked, each with its newest revision that is sold (or the one among `revisionIds`) against the revisions named. */
     async compare(slugs: readonly string[], revisionIds: readonly number[]): Promise<ComparedPart[]> {
       const parts = await store.partsBySlugs(slugs);
       if (parts.length === 0) return [];
@@ -191,7 +199,7 @@ export function createJointService(around: {
       const others = mine.filter((revision) => !partIds.includes(revision.partId));
       const chosen = parts.map((part) => {
         const own = all.filter((revision) => revision.partId === part.id);
-        return own.find((revision) => revisionIds.includes(revision.id)) ?? own.at(-1);
+        return own.find((revision) => revisionIds.includes(revision.id)) ?? newestSold(own);
       });
       const lines = await checkFit(
         [...others, ...chosen.flatMap((revision) => (revision ? [revision] : []))].map(
@@ -204,6 +212,11 @@ export function createJointService(around: {
       );
     },
   };
+}
+
+/** What a shop has: an announced revision only where there is no other. */
+function newestSold(revisions: readonly RevisionRef[]): RevisionRef | undefined {
+  return revisions.findLast((revision) => !revision.announced) ?? revisions.at(-1);
 }
 
 function pairsOf(a: readonly RevisionRef[], b: readonly RevisionRef[]): [RevisionRef, RevisionRef][] {

@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import type { RouteBinding } from '../http/binding.js';
 import type { MeasurementService } from '../measurements/measurements.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import { createJointWriteUpStore } from './joint-write-ups.store.js';
 import { createJointStore } from './joint.store.js';
 import { jointBindings } from './joints.routes.js';
@@ -13,17 +14,16 @@ export function createJoints(around: {
   clock: () => Date;
   measurements: MeasurementService;
   writeUps: WriteUpService;
+  deskInbox: DeskInbox;
 }): {
   bindings: RouteBinding[];
   service: JointService;
 } {
-  const { knex, clock, measurements, writeUps } = around;
+  const { knex } = around;
   const service = createJointService({
-    clock,
+    ...around,
     store: createJointStore(knex),
     pairs: createJointWriteUpStore(knex),
-    measurements,
-    writeUps,
   });
   return { bindings: jointBindings(service), service };
 }

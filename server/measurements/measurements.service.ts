@@ -14,6 +14,7 @@ import { typeA } from '../../shared/statistics/summary.js';
 import type { AuditLog } from '../audit/audit.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import { groupBy } from '../rows.js';
 import type { Happenings } from '../watches/happenings.js';
 import { dimensionConsensus } from './consensus.js';
@@ -36,8 +37,9 @@ export function createMeasurementService(around: {
   store: MeasurementStore;
   audit: AuditLog;
   happenings: Happenings;
+  deskInbox: DeskInbox;
 }) {
-  const { knex, clock, hardware, store, audit, happenings } = around;
+  const { knex, clock, hardware, store, audit, happenings, deskInbox } = around;
 
   /** Makes the consensus of a place anew; the feature must be held. */
   async function refresh(place: Place, feature: FeatureRow, trx: Knex): Promise<DimensionConsensus | null> {
@@ -194,6 +196,9 @@ export function createMeasurementService(around: {
           actorId: accountId,
           about: { parts: [feature.partId], revisions: [input.revisionId] },
         });
+        const title = `Reading: ${spec.label} of ${feature.name} on ${part.name}`;
+        await deskInbox.firstPost(trx, { kind: 'reading', id, accountId, title });
+        await deskInbox.photosUsed(trx, input.photoId === null ? [] : [input.photoId]);
         return { measurement: toMeasurement((await store.byId(id, trx))!, consensus), consensus };
       });
     },

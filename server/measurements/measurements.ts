@@ -3,6 +3,7 @@ import type { AuditLog } from '../audit/audit.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { createMeasurementStore } from './measurement.store.js';
 import { measurementBindings } from './measurements.routes.js';
@@ -22,6 +23,7 @@ export function createMeasurements(around: {
   limits: RateLimits;
   audit: AuditLog;
   happenings: Happenings;
+  deskInbox: DeskInbox;
 }): {
   bindings: RouteBinding[];
   service: MeasurementService;

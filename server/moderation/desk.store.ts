@@ -3,50 +3,10 @@ import type { EditionContent } from '../../shared/contract/edition-content.js';
 import type { EditionLine } from '../../shared/contract/write-ups.js';
 import { fromJson } from '../rows.js';
 
-export interface WaitingRow {
-  readonly editionId: number;
-  readonly writeUpId: number;
-  readonly number: number;
-  readonly title: string;
-  readonly authorId: number;
-  readonly authorName: string;
-  readonly submittedAt: Date;
-  readonly changeNote: string;
-  readonly content: EditionContent;
-}
-
 export type DeskStore = ReturnType<typeof createDeskStore>;
 
 export function createDeskStore(knex: Knex) {
   return {
-    /** Editions that wait, the longest wait first. */
-    async waiting(options: {
-      after?: { at: Date; id: number } | undefined;
-      rows: number;
-    }): Promise<WaitingRow[]> {
-      const query = knex('editions as e')
-        .join('accounts as a', 'a.id', 'e.author_id')
-        .where('e.state', 'submitted')
-        .orderBy(['e.submitted_at', 'e.id'])
-        .limit(options.rows)
-        .select('e.number', 'e.title', 'e.content', {
-          editionId: 'e.id',
-          writeUpId: 'e.write_up_id',
-          authorId: 'a.id',
-          authorName: 'a.display_name',
-          submittedAt: 'e.submitted_at',
-          changeNote: 'e.change_note',
-        });
-      const { after } = options;
-      if (after) {
-        void query
-          .where('e.submitted_at', '>=', after.at)
-          .where((either) => either.where('e.submitted_at', '>', after.at).orWhere('e.id', '>', after.id));
-      }
-      const rows: (Omit<WaitingRow, 'content'> & { content: unknown })[] = await query;
-      return rows.map((row) => ({ ...row, content: fromJson<EditionContent>(row.content) }));
-    },
-
     /** The edition that is published now, with its text. */
     async publishedEdition(
       writeUpId: number,

@@ -4,7 +4,8 @@ import type { RouteBinding } from '../http/binding.js';
 import type { Happenings } from '../watches/happenings.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
-import { createCautionService } from './caution.service.js';
+import { createCautionService, type CautionService } from './caution.service.js';
+import type { DeskClaims } from './claims.js';
 import { createDecisionService, type DeskMail } from './decision.service.js';
 import { createDeskService } from './desk.service.js';
 import { createDeskStore } from './desk.store.js';
@@ -19,19 +20,25 @@ export interface ModerationSurroundings {
   readonly searchOutbox: IndexNotice;
   readonly audit: AuditLog;
   readonly happenings: Happenings;
+  readonly claims: DeskClaims;
 }
 
 /** The moderators' desk: queue, cautions, decisions. */
-export function createModeration(around: ModerationSurroundings): { bindings: RouteBinding[] } {
+export function createModeration(around: ModerationSurroundings): {
+  bindings: RouteBinding[];
+  cautions: CautionService;
+} {
   const parts = {
     ...around,
     desk: createDeskStore(around.knex),
     placed: createPlacedCautionStore(around.knex),
   };
+  const cautions = createCautionService(parts);
   return {
+    cautions,
     bindings: moderationBindings({
       ...createDeskService(parts),
-      ...createCautionService(parts),
+      ...cautions,
       ...createDecisionService(parts),
     }),
   };

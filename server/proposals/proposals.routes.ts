@@ -19,6 +19,7 @@ export function proposalBindings(
       proposals.listMine(memberOf(caller).accountId, query),
     ),
     bind(routes.listDeskProposals, ({ query }) => proposals.listWaiting(query)),
+    bind(routes.readDeskProposal, ({ params }) => proposals.readForDesk(params.id)),
     bind(routes.takeProposal, ({ caller, params, body }) =>
       proposals.take(params.id, memberOf(caller).accountId, body.entry),
     ),

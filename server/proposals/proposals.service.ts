@@ -5,6 +5,8 @@ import type { RevisionPhoto } from '../../shared/contract/hardware.js';
 import type { DeskProposal, Proposal, Propose, Proposed } from '../../shared/contract/proposals.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { AlreadyThere, FieldNotValid, NotFound } from '../http/problems.js';
+import type { DeskClaims } from '../moderation/claims.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { catalogueEntryStore as catalogue } from './catalogue-entry.store.js';
 import type { ProposalRow, ProposalStore } from './proposal.store.js';
@@ -43,8 +45,10 @@ export function createProposalService(around: {
   photos: ProposalPhotos;
   audit: AuditLog;
   happenings: Happenings;
+  claims: Pick<DeskClaims, 'demandFree'>;
+  deskInbox: DeskInbox;
 }) {
-  const { knex, clock, store, mail, audit, happenings } = around;
+  const { knex, clock, store, mail, audit, happenings, claims, deskInbox } = around;
   const proposedPhotos = createProposedPhotos(around.photos);
 
   return {
@@ -66,6 +70,7 @@ export function createProposalService(around: {
           'Wait for the desk, or give it another name if it is another thing.',
         );
       }
+      await deskInbox.photosUsed(knex, proposedPhotos.idsIn(entry));
       return (await proposalsOf([(await store.byId(id))!]))[0]!;
     },
 
@@ -75,6 +80,13 @@ export function createProposalService(around: {
       const rows = await store.ofAccount(accountId, { before, rows: query.limit + 1 });
       const page = toPage(rows, query.limit, ({ id }) => ({ id }));
       return { items: await proposalsOf(page.items), next: page.next };
+    },
+
+    /** A proposal in whatever state, for the desk. */
+    async readForDesk(id: number): Promise<DeskProposal> {
+      const row = await store.byId(id);
+      if (!row) throw new NotFound('There is no such proposal.', 'Read the queue again.');
+      return { ...(await proposalsOf([row]))[0]!, person: personOf(row) };
     },
 
     /** What waits, the longest wait first. */
@@ -95,6 +107,7 @@ export function createProposalService(around: {
      * decision and the mail. The kind cannot be changed.
      */
     async take(id: number, moderatorId: number, amended: Proposed | null): Promise<{ slug: string }> {
+      await claims.demandFree({ kind: 'proposal', id }, moderatorId);
       return knex.transaction(async (trx) => {
         const proposal = await holdWaiting(id, trx);
         const entry = amended ?? proposal.entry;
@@ -139,6 +152,7 @@ export function createProposalService(around: {
     },
 
     async decline(id: number, moderatorId: number, reason: string): Promise<void> {
+      await claims.demandFree({ kind: 'proposal', id }, moderatorId);
       await knex.transaction(async (trx) => {
         const { entry, partId, accountId, part } = await holdWaiting(id, trx);
         const decision = { state: 'declined', entry, partId, reason } as const;

@@ -3,6 +3,8 @@ import type { AuditLog } from '../audit/audit.js';
 import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
 import type { MeasurementService } from '../measurements/measurements.js';
+import type { DeskClaims } from '../moderation/claims.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { createMergeService, type IndexNotices } from './merge.service.js';
 import { createProposalStore } from './proposal.store.js';
@@ -21,6 +23,8 @@ export function createProposals(around: {
   searchOutbox: IndexNotices;
   audit: AuditLog;
   happenings: Happenings;
+  claims: Pick<DeskClaims, 'demandFree'>;
+  deskInbox: DeskInbox;
 }): { bindings: RouteBinding[] } {
   const proposals = createProposalService({ ...around, store: createProposalStore(around.knex) });
   return { bindings: proposalBindings(proposals, createMergeService(around), around.limits) };

@@ -24,6 +24,9 @@ export function createProposedPhotos(photos: ProposalPhotos) {
       demand(entry, own, 'is not a photo of yours', 'Add the photo first.');
     },
 
+    /** Photos that the entry names. */
+    idsIn: (entry: Proposed): number[] => idsIn([entry]),
+
     /** NotValid where the desk names one that the proposer did not. */
     demandOffered(entry: Proposed, proposed: Proposed): void {
       demand(entry, new Set(idsIn([proposed])), 'is not a photo of this proposal', 'Leave it out.');

@@ -98,8 +98,8 @@ export function createQuestionStore(knex: Knex) {
       return rows.map(toReply);
     },
 
-    /** Stores the question and gives back its slug, which ends in its id and so is nobody else's. */
-    async add(question: NewQuestion, trx: Knex): Promise<string> {
+    /** Stores the question under a slug that ends in its id and so is nobody else's. */
+    async add(question: NewQuestion, trx: Knex): Promise<{ id: number; slug: string }> {
       const [id] = await trx('questions').insert({
         title: question.title,
         text: question.text,
@@ -122,7 +122,7 @@ export function createQuestionStore(knex: Knex) {
         await trx('question_symptoms').insert(
           question.symptomIds.map((symptom_id) => ({ question_id: id, symptom_id })),
         );
-      return slug;
+      return { id: id!, slug };
     },
 
     async addReply(

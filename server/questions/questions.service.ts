@@ -15,6 +15,7 @@ import type { HardwareService } from '../hardware/hardware.js';
 import { visitor, type Caller, type MemberCaller } from '../http/caller.js';
 import { readCursor, toPage } from '../http/pages.js';
 import { FieldNotValid, NotAllowed, NotFound, NotValid, TakenDownByDesk } from '../http/problems.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import { mayReadTakenDown, takenDownOf } from '../taken-down.js';
 import { slugFrom } from '../write-ups/slug.js';
 import type { QuestionRow, QuestionStore, ReplyRow } from './question.store.js';
@@ -33,8 +34,9 @@ export function createQuestionService(around: {
   writeUps: PublishedFixes;
   renderText: (source: string) => RichText;
   store: QuestionStore;
+  deskInbox: DeskInbox;
 }) {
-  const { knex, clock, hardware, writeUps, renderText, store } = around;
+  const { knex, clock, hardware, writeUps, renderText, store, deskInbox } = around;
 
   async function linesOf(rows: readonly QuestionRow[]): Promise<QuestionLine[]> {
     const links = await store.partsOf(rows.map((row) => row.id));
@@ -138,25 +140,32 @@ export function createQuestionService(around: {
         ),
       ];
       if (broken.length > 0) throw new NotValid(broken);
-      const slug = await knex.transaction((trx) =>
-        store.add(
+      const slug = await knex.transaction(async (trx) => {
+        const { accountId } = caller;
+        const added = await store.add(
           {
             ...question,
             slugBase: slugBaseOf(question.title),
             symptomIds: [...new Set([...symptoms.values()].map((symptom) => symptom.id))],
-            accountId: caller.accountId,
+            accountId,
             createdAt: clock(),
           },
           trx,
-        ),
-      );
+        );
+        const title = `Question “${question.title}”`;
+        await deskInbox.firstPost(trx, { kind: 'question', id: added.id, accountId, title });
+        return added.slug;
+      });
       return read(slug, caller);
     },
 
     async reply(slug: string, { accountId }: MemberCaller, reply: AddReply): Promise<Reply> {
       return knex.transaction(async (trx) => {
-        const { id: questionId } = await existing(slug, trx, visitor);
-        return toReply(await store.addReply({ ...reply, questionId, accountId, createdAt: clock() }, trx));
+        const { id: questionId, title } = await existing(slug, trx, visitor);
+        const added = await store.addReply({ ...reply, questionId, accountId, createdAt: clock() }, trx);
+        const posted = { kind: 'reply', id: added.id, accountId, title: `Reply to “${title}”` } as const;
+        await deskInbox.firstPost(trx, posted);
+        return toReply(added);
       });
     },
 

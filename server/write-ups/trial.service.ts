@@ -9,6 +9,7 @@ import type { HardwareService } from '../hardware/hardware.js';
 import type { MemberCaller } from '../http/caller.js';
 import { NotValid } from '../http/problems.js';
 import { groupBy } from '../rows.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { partIdsOf } from './edition-links.js';
 import { NoSuchWriteUp } from './edition-problems.js';
@@ -31,6 +32,7 @@ export interface TrialParts {
   readonly trials: TrialStore;
   readonly searchOutbox: IndexNotice;
   readonly happenings: Happenings;
+  readonly deskInbox: DeskInbox;
 }
 
 export type TrialService = ReturnType<typeof createTrialService>;
@@ -44,6 +46,7 @@ export function createTrialService({
   trials,
   searchOutbox,
   happenings,
+  deskInbox,
 }: TrialParts) {
   return {
     /** As `reportTrialWithin`, in a transaction of its own. */
@@ -102,6 +105,8 @@ export function createTrialService({
       actorId: accountId,
       about: { writeUps: [writeUp.id], revisions: report.revisionIds },
     });
+    const title = `Trial of “${fix.title}”`;
+    await deskInbox.firstPost(trx, { kind: 'trial', id: trialId, accountId, title });
     if (await judgeStandings(trx, writeUp.id, content)) await searchOutbox.add(trx, writeUp.id);
     return { writeUpId: writeUp.id, trialId };
   }

@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import type { RichText } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
+import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { createCautionStore } from './caution.store.js';
 import { createEditionComparer } from './comparison.js';
@@ -33,6 +34,7 @@ export interface WriteUpSurroundings {
   readonly renderText: (source: string) => RichText;
   readonly searchOutbox: IndexNotice;
   readonly happenings: Happenings;
+  readonly deskInbox: DeskInbox;
 }
 
 export type WriteUpService = ReturnType<typeof createWriteUpService>;

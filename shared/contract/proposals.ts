@@ -142,6 +142,15 @@ export const proposalRoutes = {
     query: PageQuery,
     response: pageOf(DeskProposal),
   }),
+  readDeskProposal: route({
+    method: 'get',
+    path: '/api/desk/proposals/:id',
+    tag,
+    access: moderators,
+    summary: 'One proposal, waiting or decided',
+    params: byId,
+    response: DeskProposal,
+  }),
   takeProposal: route({
     method: 'post',
     path: '/api/desk/proposals/:id/take',
@@ -151,7 +160,7 @@ export const proposalRoutes = {
     params: byId,
     body: z.strictObject({ entry: Proposed.refine(inOrder.check, inOrder.told).nullable() }),
     response: z.object({ slug: Slug }),
-    problems: ['already-there'],
+    problems: ['already-there', 'claimed-by-another'],
   }),
   declineProposal: route({
     method: 'post',
@@ -161,7 +170,7 @@ export const proposalRoutes = {
     summary: 'Decline a proposal with a reason that goes to the proposer',
     params: byId,
     body: z.strictObject({ reason: passage(1000, 10) }),
-    problems: ['already-there'],
+    problems: ['already-there', 'claimed-by-another'],
   }),
   merge: route({
     method: 'post',
