@@ -10,6 +10,7 @@ import { createAuditReader } from './audit/audit-reader.js';
 import { createBench } from './bench/bench.js';
 import { createCautionLibrary } from './caution-library/caution-library.js';
 import type { Settings } from './config.js';
+import { createExport } from './export/export.js';
 import { createHardware } from './hardware/hardware.js';
 import { createCsrf } from './http/csrf.js';
 import { mountRoutes } from './http/mount.js';
@@ -220,6 +221,7 @@ export function createApp(around: Surroundings): Composition {
     writeUps: writeUps.service,
   });
   const auditReader = createAuditReader({ knex, clock });
+  const ownData = createExport({ knex, clock, limits, photos: photos.service });
   const system = createSystem({
     knex,
     publicAddress: settings.PUBLIC_ADDRESS,
@@ -250,6 +252,7 @@ export function createApp(around: Surroundings): Composition {
     ...makers.bindings,
     ...worksheets.bindings,
     ...questions.bindings,
+    ...ownData.bindings,
   ];
 
   const app = express();

@@ -22,6 +22,10 @@ const limits = {
   question: { points: 20, duration: 60 * 60 },
   /** Things of which one account tells the desk. */
   flag: { points: 20, duration: 60 * 60 },
+  /** Archives of one account's own data. */
+  export: { points: 10, duration: 60 * 60 },
+  /** Deletions asked for by one account: each tries a password. */
+  deletion: { points: 10, duration: 60 * 60 },
   /** Requests to speak for a maker by one account. */
   'maker-request': { points: 10, duration: 60 * 60 },
   /** Answers and announcements in the name of makers by one account. */

@@ -1,4 +1,5 @@
 import { readFile } from 'node:fs/promises';
+import type { Readable } from 'node:stream';
 import type { Photo } from '../../shared/contract/photos.js';
 import { NotFound } from '../http/problems.js';
 import { createGate } from './gate.js';
@@ -47,9 +48,8 @@ export function createPhotoService({
     return photo;
   }
 
-  async function hasFilesOf({ hash, widths }: Photo): Promise<boolean> {
-    const names = widths.flatMap((width) => photoFormats.map((format) => photoFileName(hash, width, format)));
-    return (await Promise.all(names.map((name) => files.has(name)))).every(Boolean);
+  async function hasFilesOf(photo: Photo): Promise<boolean> {
+    return (await Promise.all(filesOf(photo).map((name) => files.has(name)))).every(Boolean);
   }
 
   return {
@@ -70,6 +70,15 @@ export function createPhotoService({
       return new Set(await photos.idsOwnedBy(accountId, ids));
     },
 
+    /** The largest WebP file of a photo as a stream; null where its files are gone. */
+    openLargest: ({ hash, widths }: Pick<Photo, 'hash' | 'widths'>): Promise<Readable | null> =>
+      files.open(photoFileName(hash, Math.max(...widths), 'webp')),
+
+    /** Takes every file of this content away. Nothing may show it any more. */
+    async removeFiles(photo: Pick<Photo, 'hash' | 'widths'>): Promise<void> {
+      await Promise.all(filesOf(photo).map((name) => files.remove(name)));
+    },
+
     /** The bytes of a photo file. Throws NotFound. */
     async readFile(name: string): Promise<Buffer> {
       const bytes = await files.get(name);
@@ -81,4 +90,9 @@ export function createPhotoService({
       return bytes;
     },
   };
+}
+
+/** Names of all files of a photo. */
+function filesOf({ hash, widths }: Pick<Photo, 'hash' | 'widths'>): string[] {
+  return widths.flatMap((width) => photoFormats.map((format) => photoFileName(hash, width, format)));
 }

@@ -87,7 +87,11 @@ describe('what an edition lacks before it can go to the desk', () => {
       { fixes: [{ ...fix, steps: [{ ...fix.steps[0]!, text: ' \n' }] }] },
       'fixes.0.steps',
     ],
-    ['a photo without alternative text', { photos: [{ photoId: 1, alt: '', caption: 'x', callouts: [] }] }, 'photos.0.alt'],
+    [
+      'a photo without alternative text',
+      { photos: [{ photoId: 1, alt: '', caption: 'x', callouts: [] }] },
+      'photos.0.alt',
+    ],
   ])('names %s', (_name, over, path) => {
     expect(missing(over)).toEqual([path]);
   });

@@ -1,6 +1,7 @@
 import { accountRoutes } from './accounts.js';
 import { auditRoutes } from './audit.js';
 import { cautionLibraryRoutes } from './caution-library.js';
+import { exportRoutes } from './export.js';
 import { benchRoutes, hardwareRoutes } from './hardware.js';
 import { jointRoutes } from './joints.js';
 import { mailRoutes } from './mail.js';
@@ -51,5 +52,6 @@ export const routes = {
   ...watchRoutes,
   ...noticeRoutes,
   ...mailRoutes,
+  ...exportRoutes,
 };
 export type RouteName = keyof typeof routes;

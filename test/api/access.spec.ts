@@ -214,5 +214,6 @@ function accessTable(): Record<keyof typeof routes, readonly Role[]> {
     addReply: accounts,
     settleQuestion: accounts,
     reopenQuestion: accounts,
+    exportOwnData: accounts,
   };
 }
