@@ -9,6 +9,9 @@ export function createLetters(publicAddress: string) {
   };
 
   return {
+    /** Address of a page as it stands to the outside. */
+    page,
+
     emailConfirmation(to: { displayName: string; token: string }): Letter {
       return {
         subject: 'Confirm your e-mail address',
@@ -17,6 +20,18 @@ export function createLetters(publicAddress: string) {
           'somebody asked for a Shimlore account under this address. If it was you, follow the link within 24 hours; your account is ready after that.',
         ],
         action: { label: 'Confirm this address', url: page('/account/confirm', { token: to.token }) },
+        closing: 'If it was not you, leave the link alone and nothing happens.',
+      };
+    },
+
+    addressCheck(to: { displayName: string; token: string }): Letter {
+      return {
+        subject: 'Does mail reach you here again?',
+        greeting: `Hello ${to.displayName},`,
+        paragraphs: [
+          'mail from Shimlore to this address came back, so no more was sent. You asked to try it again: follow the link within 24 hours, and what you watch is mailed to you as before.',
+        ],
+        action: { label: 'Mail reaches me here', url: page('/account/confirm', { token: to.token }) },
         closing: 'If it was not you, leave the link alone and nothing happens.',
       };
     },

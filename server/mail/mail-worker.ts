@@ -3,7 +3,9 @@ import type { Knex } from 'knex';
 import type { SendMailOptions, Transporter } from 'nodemailer';
 import type { Logger } from 'pino';
 import { repeatedly, type Worker } from '../worker.js';
+import { failureOf, type Bounces } from './bounces.js';
 import { claimDueMails, markFailed, markGivenUp, markSent, type ClaimedMail } from './mail-outbox.store.js';
+import type { ReturnPath } from './return-path.js';
 
 const second = 1000;
 /** How many mails are taken at once, and how long a dead worker keeps them, in milliseconds. */
@@ -20,6 +22,9 @@ export interface MailWorkerNeeds {
   readonly from: string;
   readonly publicAddress: string;
   readonly logger: Logger;
+  readonly bounces: Bounces;
+  /** Where mail comes back to; undefined: to the sender. */
+  readonly returnPath: ReturnPath | undefined;
 }
 
 /**
@@ -31,11 +36,16 @@ export function createMailWorker(needs: MailWorkerNeeds): Worker {
 
   const sendOne = async (mail: ClaimedMail): Promise<void> => {
     if (mail.unwanted) {
-      await markGivenUp(knex, mail.id, clock(), 'The recipient has turned notices off.');
+      await markGivenUp(
+        knex,
+        mail.id,
+        clock(),
+        'The recipient has turned such mail off, or mail to them comes back.',
+      );
       return;
     }
     try {
-      await needs.transport.sendMail(messageOf(mail, needs.from, needs.publicAddress));
+      await needs.transport.sendMail(messageOf(mail, needs));
     } catch (error) {
       await noteFailure(mail, error);
       return;
@@ -47,6 +57,8 @@ export function createMailWorker(needs: MailWorkerNeeds): Worker {
     const reason = error instanceof Error ? error.message : String(error);
     if (isRefusedForGood(error) || mail.attempts >= mostAttempts) {
       await markGivenUp(knex, mail.id, clock(), reason);
+      const status = statusOfRefusedRecipient(error);
+      if (status !== undefined) await needs.bounces.record(mail.id, failureOf(status));
       logger.warn({ mail: mail.dedupeKey, attempts: mail.attempts, reason }, 'mail given up');
       return;
     }
@@ -84,13 +96,33 @@ function isRefusedForGood(error: unknown): boolean {
   return typeof code === 'number' && code >= 500 && code < 600;
 }
 
-function messageOf(mail: ClaimedMail, from: string, publicAddress: string): SendMailOptions {
+/**
+ * What the mail server said of the recipient, as an enhanced status code (RFC 3463); undefined where it did not refuse
+ * the recipient but something else, such as the sign-in or the text.
+ */
+function statusOfRefusedRecipient(error: unknown): string | undefined {
+  const { code, command, responseCode, response } = (error ?? {}) as Record<string, unknown>;
+  if (code !== 'EENVELOPE' || command !== 'RCPT TO' || typeof responseCode !== 'number') return undefined;
+  const given = typeof response === 'string' ? /\b[45]\.\d{1,3}\.\d{1,3}\b/.exec(response)?.[0] : undefined;
+  return given ?? `${Math.floor(responseCode / 100)}.0.0`;
+}
+
+function messageOf(
+  mail: ClaimedMail,
+  { from, publicAddress, returnPath }: Pick<MailWorkerNeeds, 'from' | 'publicAddress' | 'returnPath'>,
+): SendMailOptions {
   return {
     from,
+    ...(returnPath ? { envelope: { from: returnPath.addressFor(mail.id), to: mail.to } } : {}),
     to: { name: '', address: mail.to },
     subject: mail.subject,
     text: mail.text,
     html: mail.html,
+    attachments: (mail.attachments ?? []).map(({ fileName, mediaType, content }) => ({
+      filename: fileName,
+      contentType: mediaType,
+      content,
+    })),
     messageId: messageIdOf(mail.dedupeKey, publicAddress),
     disableFileAccess: true,
     disableUrlAccess: true,
