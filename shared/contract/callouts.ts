@@ -71,6 +71,11 @@ export type DimensionCallout = z.infer<typeof DimensionCallout>;
 export const Callouts = z
   .array(Callout)
   .max(mostCallouts, `takes at most ${mostCallouts} callouts`)
-  .refine((callouts) => new Set(callouts.map((callout) => callout.key)).size === callouts.length, {
-    message: 'has two callouts with one key',
+  .superRefine((callouts, context) => {
+    const seen = new Set<string>();
+    callouts.forEach(({ key }, index) => {
+      if (seen.has(key))
+        context.addIssue({ code: 'custom', path: [index, 'key'], message: 'stands twice on this photo' });
+      seen.add(key);
+    });
   });

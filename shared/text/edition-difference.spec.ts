@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest';
-import { emptyContent, type EditionContent, type Fix } from '../contract/edition-content.js';
+import type { Callout } from '../contract/callouts.js';
+import { emptyContent, type EditionContent, type Fix, type PhotoUse } from '../contract/edition-content.js';
 import { editionDifference } from './edition-difference.js';
 import type { ContentNames } from './edition-fields.js';
 
@@ -167,5 +168,44 @@ describe('edition difference', () => {
     ];
     const changedSecond = [photos[0]!, { photoId: 4, alt: 'The lip from below', caption: '', callouts: [] }];
     expect(fieldsIn(content({ photos }), content({ photos: changedSecond }))).toEqual(['photos.4.2']);
+  });
+
+  it('tells in words what was drawn on a photo, its value changed, or moved', () => {
+    const ring: Callout = {
+      kind: 'ring',
+      key: 'ring-aaaa',
+      label: 'lip',
+      centre: { x: 0.5, y: 0.25 },
+      radius: 0.1,
+    };
+    const across: Callout = {
+      kind: 'dimension',
+      key: 'dimension-aaaa',
+      label: '',
+      from: { x: 0.1, y: 0.5 },
+      to: { x: 0.9, y: 0.5 },
+      value: 22.5,
+      unit: 'mm',
+    };
+    const withCallouts = (...callouts: Callout[]) =>
+      content({ photos: [{ photoId: 4, alt: 'The lip', caption: '', callouts }] });
+    const told = (from: EditionContent, to: EditionContent, kind: 'added' | 'removed') =>
+      editionDifference(from, to, names).changed.flatMap((change) =>
+        change.pieces.filter((piece) => piece.kind === kind).map((piece) => piece.text.trim()),
+      );
+
+    expect(told(withCallouts(), withCallouts(ring, across), 'added').join('\n')).toBe(
+      'ring “lip”, at 50 % across, 25 % down, radius 10 % of the width\n' +
+        'dimension 22.5 mm, from 10 % across, 50 % down to 90 % across, 50 % down',
+    );
+    expect(told(withCallouts(across), withCallouts({ ...across, value: 19.5 }), 'removed')).toEqual(['22.5']);
+    const moved = { ...ring, centre: { x: 0.75, y: 0.25 } };
+    expect(told(withCallouts(ring), withCallouts(moved), 'added')).toEqual(['75']);
+  });
+
+  it('takes an edition from before callouts as one without any', () => {
+    const old = content({ photos: [{ photoId: 4, alt: 'The lip', caption: '' } as PhotoUse] });
+    const now = content({ photos: [{ photoId: 4, alt: 'The lip', caption: '', callouts: [] }] });
+    expect(fieldsIn(old, now)).toEqual([]);
   });
 });
