@@ -214,6 +214,18 @@ function accessTable(): Record<keyof typeof routes, readonly Role[]> {
     addReply: accounts,
     settleQuestion: accounts,
     reopenQuestion: accounts,
+    watch: accounts,
+    endWatch: accounts,
+    listMyWatches: accounts,
+    listMyWatchKeys: accounts,
+    listMyNotices: accounts,
+    countMyNotices: accounts,
+    markNoticesRead: accounts,
+    markNoticesUnread: accounts,
+    readMailChoices: everybody,
+    makeMailChoice: everybody,
+    takeBounce: everybody,
+    confirmAddressAgain: accounts,
     exportOwnData: accounts,
   };
 }
