@@ -42,7 +42,10 @@ export const editionShape: Shape = record({
         afterwards: names,
       }),
     ),
-    photos: list((photo: { photoId: number }) => String(photo.photoId), record()),
+    photos: list(
+      (photo: { photoId: number }) => String(photo.photoId),
+      record({ callouts: list(byKey, whole) }),
+    ),
   }),
 });
 

@@ -1,9 +1,9 @@
-import { Observable, Subject, of, throwError } from 'rxjs';
+import { Observable, Subject, map, of, throwError } from 'rxjs';
 import { emptyContent } from '../../../../shared/contract/edition-content';
 import type { Problem } from '../../../../shared/contract/problem';
 import type { Draft } from '../../../../shared/contract/write-ups';
+import type { EditionText } from '../../../../shared/editions/edition-text';
 import { Autosave, savePause } from './autosave';
-import type { EditionText } from './edition-form';
 
 const titled = (title: string): EditionText => ({ content: { ...emptyContent, title }, changeNote: '' });
 
@@ -21,6 +21,9 @@ function draftOf(text: EditionText, version: number): Draft {
     updatedAt: '2026-12-01T12:03:00.000Z',
     returnReason: null,
     photos: [],
+    base: null,
+    overtakenBy: null,
+    writtenBy: [],
   };
 }
 
@@ -39,7 +42,8 @@ function autosaveThat(...answers: ((text: EditionText, version: number) => Obser
     {
       save: (text, version) => {
         sent.push({ title: text.content.title, version });
-        return (answers.shift() ?? (() => of(draftOf(text, version + 1))))(text, version);
+        const answer = (answers.shift() ?? (() => of(draftOf(text, version + 1))))(text, version);
+        return answer.pipe(map((draft) => ({ draft, heldBack: [] })));
       },
       problemOf: (error) => error as Problem,
     },

@@ -13,21 +13,29 @@ import {
   type Observable,
   type Subscription,
 } from 'rxjs';
-import type { Problem } from '../../../../shared/contract/problem';
+import type { FieldProblem, Problem } from '../../../../shared/contract/problem';
 import type { Draft } from '../../../../shared/contract/write-ups';
-import type { EditionText } from './edition-form';
+import type { EditionText } from '../../../../shared/editions/edition-text';
 
 export type SaveState =
   | { kind: 'saved'; at: Date }
   | { kind: 'waiting' }
   | { kind: 'saving' }
+  /** All but what is named, which cannot be saved as it is. */
+  | { kind: 'partly-saved'; at: Date; heldBack: readonly FieldProblem[] }
   | { kind: 'not-saved'; why: Problem; triesAgain: boolean }
   /** Somebody else, or another tab, saved in the meantime; nothing is sent until `continueFrom`. */
   | { kind: 'moved-on'; theirs: Draft };
 
+/** What a save came to, with what was left out of it. */
+export interface Saved {
+  draft: Draft;
+  heldBack: readonly FieldProblem[];
+}
+
 export interface AutosaveOptions {
   /** Sends the text with the version that it was built on. Errors carry a `problem`. */
-  save(text: EditionText, version: number): Observable<Draft>;
+  save(text: EditionText, version: number): Observable<Saved>;
   problemOf(error: unknown): Problem;
   saved?(draft: Draft): void;
 }
@@ -115,7 +123,7 @@ export class Autosave {
       this.pending = null;
       this.state.set({ kind: 'saving' });
       return this.options.save(text, this.version).pipe(
-        tap((draft) => this.arrived(draft)),
+        tap((saved) => this.arrived(saved)),
         catchError((error: unknown) => {
           this.failed(this.options.problemOf(error), text);
           return EMPTY;
@@ -124,18 +132,18 @@ export class Autosave {
     });
   }
 
-  private arrived(draft: Draft): void {
+  private arrived({ draft, heldBack }: Saved): void {
     this.version = draft.version;
     this.retryWait = firstRetry;
-    this.state.set(
-      this.pending === null ? { kind: 'saved', at: new Date(draft.updatedAt) } : { kind: 'waiting' },
-    );
+    const at = new Date(draft.updatedAt);
+    if (this.pending !== null) this.state.set({ kind: 'waiting' });
+    else this.state.set(heldBack.length > 0 ? { kind: 'partly-saved', at, heldBack } : { kind: 'saved', at });
     this.options.saved?.(draft);
   }
 
   private failed(problem: Problem, text: EditionText): void {
     this.pending ??= text;
-    if (problem.type.endsWith('/edition-moved-on') && problem.current !== undefined) {
+    if (problem.type.endsWith('/edition-moved-on') && problem.status === 412) {
       this.state.set({ kind: 'moved-on', theirs: problem.current as Draft });
       return;
     }

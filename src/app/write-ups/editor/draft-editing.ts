@@ -1,26 +1,27 @@
 import { Injectable, computed, inject, signal, type OnDestroy } from '@angular/core';
-import { Subscription, throwError, type Observable } from 'rxjs';
+import { Subscription, catchError, map, throwError, type Observable } from 'rxjs';
 import { emptyContent } from '../../../../shared/contract/edition-content';
 import { missingFromContent } from '../../../../shared/contract/edition-completeness';
 import type { Photo } from '../../../../shared/contract/photos';
 import type { FieldProblem, Problem } from '../../../../shared/contract/problem';
+import type { MergeGround } from '../../../../shared/contract/proposed-editions';
 import type { Draft } from '../../../../shared/contract/write-ups';
+import type { EditionText } from '../../../../shared/editions/edition-text';
+import { holdBack } from '../../../../shared/editions/hold-back';
+import { mergeEditions } from '../../../../shared/editions/merge-editions';
+import { same } from '../../../../shared/editions/same';
 import { toApiProblem } from '../../core/api-problem';
 import { tellFields } from '../../core/told-fields';
-import { Autosave, type SaveState } from './autosave';
+import { Autosave, type SaveState, type Saved } from './autosave';
 import { DraftBackup } from './draft-backup';
 import { Drafts } from './drafts';
-import { editionForm, textOf, type EditionForm, type EditionText } from './edition-form';
+import { editionForm, textOf, type EditionForm } from './edition-form';
 import { contentFields, limitsBroken, limitsProblem } from './edition-limits';
-import { mergeRows, mergedText, type MergeRow, type Side } from './edition-merge';
+import type { MergeResult } from './merge-panel';
+import { nameOfPiece, wordsOfPiece } from './merge-words';
+import type { Merging } from './merging';
 import { PartDirectory } from './part-directory';
-import { same } from '../../../../shared/editions/same';
-
-/** A text that was not taken when two were merged; kept in sight so that nothing is lost. */
-export interface SetAside {
-  row: MergeRow;
-  side: Side;
-}
+import type { SetAside } from './set-aside';
 
 /** One draft while it is being written: its form, its way to the server, and what to do when somebody else saved it. */
 @Injectable()
@@ -42,17 +43,49 @@ export class DraftEditing implements OnDestroy {
   readonly photos = signal<ReadonlyMap<number, Photo>>(new Map());
   /** Set when what is shown came from this browser, with the text that the server had. */
   readonly restored = signal<{ at: Date; serversText: EditionText } | null>(null);
+  /** Texts that were not taken when two were merged; kept in sight so that nothing is lost. */
   readonly setAside = signal<readonly SetAside[]>([]);
-  /** Set when what this browser kept was built on an older version than the server's: theirs. */
-  private readonly ownMerge = signal<Draft | null>(null);
+  /** Whether this browser could keep what is not saved. */
+  readonly kept = signal(false);
+  /** Set when the server has a newer version than this editor knows of: theirs, and what both began from. */
+  private readonly ownMerge = signal<{ theirs: Draft; base: EditionText } | null>(null);
+  /** Set when the text is to be merged with the edition that was published since it was begun. */
+  private readonly editionMerge = signal<MergeGround | null>(null);
+  /** The published edition that the text was merged with and that no save has named yet. */
+  private mergedWith: number | undefined;
   private readonly savingState = signal<(() => SaveState) | null>(null);
   readonly saveState = computed<SaveState>(() => {
-    const theirs = this.ownMerge();
-    return theirs ? { kind: 'moved-on', theirs } : this.stateOfSaving();
+    const own = this.ownMerge();
+    return own ? { kind: 'moved-on', theirs: own.theirs } : this.stateOfSaving();
   });
-  readonly mergeRows = computed<MergeRow[] | null>(() => {
+  /** What is to be merged before the form goes on; the draft's own two texts come before a published edition. */
+  readonly merging = computed<Merging | null>(() => {
     const state = this.saveState();
-    return state.kind === 'moved-on' ? mergeRows(this.base, this.text(), textOfDraft(state.theirs)) : null;
+    const ground = this.editionMerge();
+    const mine = this.text();
+    const photos = this.photos();
+    if (state.kind === 'moved-on') {
+      const { theirs } = state;
+      const base = this.ownMerge()?.base ?? this.base;
+      const other = { kind: 'draft', by: theirs.author.displayName, at: theirs.updatedAt } as const;
+      return { id: `draft ${theirs.version}`, base, mine, theirs: textOfDraft(theirs), with: other, photos };
+    }
+    if (ground === null) return null;
+    const { changeNote } = mine;
+    return {
+      id: `edition ${ground.current.edition.id}`,
+      base: { content: ground.base?.content ?? emptyContent, changeNote },
+      mine,
+      theirs: { content: ground.current.content, changeNote },
+      with: { kind: 'edition', edition: ground.current.edition },
+      photos,
+    };
+  });
+  /** Fields that could not be saved as they are; they are kept in this browser. */
+  readonly heldBack = computed<readonly FieldProblem[]>(() => {
+    const state = this.saveState();
+    if (state.kind === 'partly-saved') return state.heldBack;
+    return state.kind === 'not-saved' ? (state.why.fields ?? []) : [];
   });
   readonly missing = computed<FieldProblem[]>(() => {
     const missing = missingFromContent(this.content());
@@ -65,6 +98,7 @@ export class DraftEditing implements OnDestroy {
     this.close();
     this.base = textOfDraft(draft);
     this.openDraft.set(draft);
+    this.setAside.set(this.backup.findSetAside(draft.id));
     this.keepPhotos(draft.photos);
     this.autosave = new Autosave(
       {
@@ -75,10 +109,7 @@ export class DraftEditing implements OnDestroy {
       { version: draft.version, at: new Date(draft.updatedAt) },
     );
     this.savingState.set(this.autosave.state);
-    const partIds = draft.content.joints
-      .flatMap((joint) => [joint.a.partId, joint.b.partId])
-      .filter((id) => id !== null);
-    this.directory.learn(partIds).subscribe();
+    this.learnParts(this.base);
 
     const kept = this.backup.find(draft.id);
     if (kept === null || same(kept.text, this.base)) {
@@ -91,7 +122,7 @@ export class DraftEditing implements OnDestroy {
       this.restored.set({ at: kept.at, serversText: this.base });
       this.autosave.note(this.text());
     } else {
-      this.ownMerge.set(draft);
+      this.ownMerge.set({ theirs: draft, base: kept.base });
     }
   }
 
@@ -115,27 +146,54 @@ export class DraftEditing implements OnDestroy {
     const restored = this.restored();
     if (restored === null) return;
     this.restored.set(null);
-    this.putAside(mergeRows(restored.serversText, this.text(), restored.serversText), 'mine');
+    this.keepAside([...this.setAside(), ...this.typedBeyond(restored.serversText)]);
     this.useForm(editionForm(restored.serversText));
     this.changed();
   }
 
+  /** Opens the merge with the edition that was published since the draft was begun. */
+  mergeWith(ground: MergeGround): void {
+    this.keepPhotos([...ground.current.photos, ...(ground.base?.photos ?? [])]);
+    this.learnParts({ content: ground.current.content, changeNote: '' });
+    this.editionMerge.set(ground);
+  }
+
+  /** Whether a refusal was a text that has moved on; the merge is open then. */
+  tookMovedOn(problem: Problem): boolean {
+    if (!problem.type.endsWith('/edition-moved-on')) return false;
+    if (problem.status === 409) {
+      this.mergedWith = undefined;
+      this.mergeWith(problem as unknown as MergeGround);
+    } else {
+      this.ownMerge.set({ theirs: problem.current as Draft, base: this.base });
+    }
+    return true;
+  }
+
   /** Goes on with the text made of both sides. */
-  finishMerge(rows: readonly MergeRow[]): void {
+  finishMerge({ text, setAside }: MergeResult): void {
     const state = this.saveState();
-    if (state.kind !== 'moved-on') return;
-    const theirs = textOfDraft(state.theirs);
-    const merged = mergedText(this.text(), theirs, rows);
-    for (const row of rows)
-      if (row.disputed || row.choice === 'theirs')
-        this.putAside([row], row.choice === 'mine' ? 'theirs' : 'mine');
-    this.base = theirs;
-    this.keepPhotos(state.theirs.photos);
-    this.openDraft.set(state.theirs);
-    this.ownMerge.set(null);
-    this.useForm(editionForm(merged));
-    this.autosave?.continueFrom(state.theirs.version, merged);
-    this.backup.keep(state.theirs.id, state.theirs.version, merged);
+    const ground = this.editionMerge();
+    this.keepAside([...this.setAside(), ...setAside]);
+    if (state.kind === 'moved-on') {
+      this.base = textOfDraft(state.theirs);
+      this.keepPhotos(state.theirs.photos);
+      this.openDraft.set(state.theirs);
+      this.ownMerge.set(null);
+      this.useForm(editionForm(text));
+      this.autosave?.continueFrom(state.theirs.version, text);
+    } else if (ground !== null) {
+      this.mergedWith = ground.current.edition.id;
+      this.editionMerge.set(null);
+      this.useForm(editionForm(text));
+      this.autosave?.note(text);
+    }
+    this.keepHere();
+  }
+
+  keepAside(texts: readonly SetAside[]): void {
+    this.setAside.set(texts);
+    this.backup.keepSetAside(this.draft().id, texts);
   }
 
   /** Takes what another call than a save has made of the draft: handed in, taken back. */
@@ -170,22 +228,69 @@ export class DraftEditing implements OnDestroy {
     this.changes = form.valueChanges.subscribe(() => this.changed());
   }
 
+  /** What the form says otherwise than another text, in words. */
+  private typedBeyond(text: EditionText): SetAside[] {
+    const names = this.directory.namesWith(this.photos());
+    const texts = [this.text(), text];
+    return mergeEditions(text, this.text(), text).rows.flatMap((row) => {
+      const words = wordsOfPiece(row.path, row.mine, texts, names);
+      return words
+        ? [{ name: nameOfPiece(row.path, texts, names), whose: 'What you typed here', words }]
+        : [];
+    });
+  }
+
   private changed(): void {
     const text = textOf(this.form());
     this.text.set(text);
-    this.backup.keep(this.draft().id, this.version(), text);
+    this.keepHere();
     this.autosave?.note(text);
   }
 
-  private send(text: EditionText, version: number): Observable<Draft> {
-    const broken = limitsBroken(text);
-    return broken.length > 0
-      ? throwError(() => limitsProblem(broken))
-      : this.drafts.save(this.draft().id, text, version);
+  private keepHere(): void {
+    this.kept.set(this.backup.keep(this.draft().id, this.version(), this.text(), this.base));
+  }
+
+  private learnParts({ content }: EditionText): void {
+    const ids = content.joints.flatMap((joint) => [joint.a.partId, joint.b.partId]);
+    this.directory.learn(ids.filter((id) => id !== null)).subscribe();
+  }
+
+  private send(text: EditionText, version: number): Observable<Saved> {
+    return this.sendWithout(limitsBroken(text), text, version);
+  }
+
+  /** Sends all but what cannot be saved; where the server refuses more, all but that too. */
+  private sendWithout(
+    heldBack: readonly FieldProblem[],
+    text: EditionText,
+    version: number,
+  ): Observable<Saved> {
+    const rest = holdBack(
+      text,
+      this.base,
+      heldBack.map((field) => field.path),
+    );
+    if (heldBack.length > 0) {
+      tellFields(this.form(), heldBack);
+      if (same(rest, this.base) && this.mergedWith === undefined)
+        return throwError(() => limitsProblem([...heldBack]));
+    }
+    return this.drafts.save(this.draft().id, rest, version, this.mergedWith).pipe(
+      map((draft) => ({ draft, heldBack })),
+      catchError((error: unknown) => {
+        const { problem } = toApiProblem(error);
+        const known = heldBack.map((field) => field.path);
+        const refused = contentFields(problem.fields ?? []).filter((field) => !known.includes(field.path));
+        if (problem.status !== 422 || refused.length === 0) return throwError(() => error);
+        return this.sendWithout([...heldBack, ...refused], text, version);
+      }),
+    );
   }
 
   private problemOf(error: unknown): Problem {
     const { problem } = toApiProblem(error);
+    if (problem.status === 409) this.tookMovedOn(problem);
     const fields = contentFields(problem.fields ?? []);
     tellFields(this.form(), fields);
     return { ...problem, fields };
@@ -193,16 +298,11 @@ export class DraftEditing implements OnDestroy {
 
   private wasSaved(draft: Draft): void {
     this.base = textOfDraft(draft);
+    if (draft.base?.id === this.mergedWith) this.mergedWith = undefined;
     this.openDraft.set(draft);
     this.keepPhotos(draft.photos);
     if (this.autosave?.isSettled()) this.backup.drop(draft.id);
-  }
-
-  private putAside(rows: readonly MergeRow[], side: Side): void {
-    this.setAside.update((texts) => [
-      ...texts,
-      ...rows.filter((row) => row[side] !== undefined).map((row) => ({ row, side })),
-    ]);
+    else this.keepHere();
   }
 
   private close(): void {

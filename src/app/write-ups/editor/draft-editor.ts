@@ -3,6 +3,7 @@ import {
   ChangeDetectionStrategy,
   Component,
   type OnInit,
+  computed,
   inject,
   input,
   output,
@@ -20,13 +21,12 @@ import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { Undo } from '../../ui/undo/undo';
 import { DraftEditing } from './draft-editing';
 import { Drafts } from './drafts';
-import type { MergeRow } from './edition-merge';
 import { contentFields } from './edition-limits';
 import { EditorSection } from './editor-section';
 import { fieldId } from './field-names';
 import { FixesFields } from './fixes-fields';
 import { JointsFields } from './joints-fields';
-import { MergePanel } from './merge-panel';
+import { MergePanel, type MergeResult } from './merge-panel';
 import { MissingList } from './missing-list';
 import { PassageField } from './passage-field';
 import { PhotosFields } from './photos-fields';
@@ -83,6 +83,12 @@ export class DraftEditor implements OnInit {
   protected readonly busy = signal(false);
   protected readonly problem = signal<Problem | null>(null);
   private thrownAway = false;
+  /** Who wrote the write-up, where the member is none of them; empty otherwise. */
+  protected readonly proposedTo = computed(() => {
+    const { author, writtenBy } = this.draft();
+    const isTheirs = writtenBy.every((person) => person.id !== author.id);
+    return isTheirs ? writtenBy.map((person) => person.displayName).join(', ') : '';
+  });
 
   ngOnInit(): void {
     this.editing.open(this.draft());
@@ -103,9 +109,29 @@ export class DraftEditor implements OnInit {
     showField(this.document, path);
   }
 
-  protected finishMerge(rows: MergeRow[]): void {
-    this.editing.finishMerge(rows);
+  protected finishMerge(result: MergeResult): void {
+    this.problem.set(null);
+    this.editing.finishMerge(result);
     setTimeout(() => showField(this.document, 'title'));
+  }
+
+  /** Opens the merge with the edition that was published since. */
+  protected mergeNow(): void {
+    this.problem.set(null);
+    this.busy.set(true);
+    this.drafts
+      .mergeGround(this.draft().id)
+      .pipe(finalize(() => this.busy.set(false)))
+      .subscribe({
+        next: (ground) => this.editing.mergeWith(ground),
+        error: (error: unknown) => this.failed(error),
+      });
+  }
+
+  protected dropSetAside(): void {
+    const texts = this.editing.setAside();
+    this.editing.keepAside([]);
+    this.undo.offer('The texts set aside are dropped', () => this.editing.keepAside(texts));
   }
 
   protected async handIn(): Promise<void> {
@@ -117,6 +143,8 @@ export class DraftEditor implements OnInit {
     this.busy.set(true);
     if (!(await this.editing.flush())) {
       this.busy.set(false);
+      const [held] = this.editing.heldBack();
+      if (held) this.show(held.path);
       return;
     }
     this.drafts
@@ -170,6 +198,7 @@ export class DraftEditor implements OnInit {
 
   private failed(error: unknown): void {
     const { problem } = toApiProblem(error);
+    if (this.editing.tookMovedOn(problem)) return;
     this.problem.set({ ...problem, fields: problem.fields && contentFields(problem.fields) });
   }
 }

@@ -1,9 +1,10 @@
 import { Injectable, inject } from '@angular/core';
 import type { Observable } from 'rxjs';
 import { writeUpRoutes, type Draft, type EditionView } from '../../../../shared/contract/write-ups';
+import { proposedEditionRoutes, type MergeGround } from '../../../../shared/contract/proposed-editions';
 import type { EditionState } from '../../../../shared/contract/vocabulary';
+import type { EditionText } from '../../../../shared/editions/edition-text';
 import { Api } from '../../core/api';
-import type { EditionText } from './edition-form';
 
 /** Drafts of the member who is signed in. */
 @Injectable({ providedIn: 'root' })
@@ -23,8 +24,20 @@ export class Drafts {
     return this.api.call(writeUpRoutes.readDraft, { params: { id } });
   }
 
-  save(id: number, text: EditionText, version: number): Observable<Draft> {
-    return this.api.call(writeUpRoutes.saveDraft, { params: { id }, body: text, ifMatch: version });
+  /** `baseEditionId`: the published edition that the text was merged with since it was saved last. */
+  save(id: number, text: EditionText, version: number, baseEditionId?: number): Observable<Draft> {
+    const body = { ...text, ...(baseEditionId === undefined ? {} : { baseEditionId }) };
+    return this.api.call(writeUpRoutes.saveDraft, { params: { id }, body, ifMatch: version });
+  }
+
+  /** What the draft began from, and what is published now. */
+  mergeGround(id: number): Observable<MergeGround> {
+    return this.api.call(proposedEditionRoutes.readMergeGround, { params: { id } });
+  }
+
+  /** Starts the next edition with the text of an earlier one. */
+  bringBack(slug: string, number: number): Observable<Draft> {
+    return this.api.call(proposedEditionRoutes.bringEditionBack, { params: { slug, number } });
   }
 
   preview(id: number): Observable<{ view: EditionView }> {

@@ -2,7 +2,6 @@ import { FormArray, FormControl, FormGroup } from '@angular/forms';
 import type { Callout } from '../../../../shared/contract/callouts';
 import type {
   Acceptance,
-  EditionContent,
   Fix,
   JointEntry,
   JointSide,
@@ -19,12 +18,7 @@ import type {
   ReadingUnit,
 } from '../../../../shared/contract/vocabulary';
 import type { WorksheetRecord } from '../../../../shared/contract/worksheet';
-
-/** What is saved together: the text of the edition and the word on why it was changed. */
-export interface EditionText {
-  content: EditionContent;
-  changeNote: string;
-}
+import type { EditionText } from '../../../../shared/editions/edition-text';
 
 export const editionForm = (text: EditionText) =>
   new FormGroup({

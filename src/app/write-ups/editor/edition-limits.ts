@@ -1,7 +1,7 @@
 import { EditionContent } from '../../../../shared/contract/edition-content';
 import type { FieldProblem, Problem } from '../../../../shared/contract/problem';
+import type { EditionText } from '../../../../shared/editions/edition-text';
 import { ApiProblem } from '../../core/api-problem';
-import type { EditionText } from './edition-form';
 
 /** What the server would refuse in a text, found before it is sent. Paths are those of the content. */
 export function limitsBroken(text: EditionText): FieldProblem[] {

@@ -1,7 +1,8 @@
 import { ChangeDetectionStrategy, Component, computed, inject, input } from '@angular/core';
+import type { FieldProblem } from '../../../../shared/contract/problem';
 import { DraftEditing } from './draft-editing';
 
-/** One section of the form; it folds, and says how much in it is still missing. */
+/** One section of the form; it folds, and says how much in it is missing or could not be saved. */
 @Component({
   selector: 'sl-editor-section',
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -64,9 +65,14 @@ export class EditorSection {
   private readonly editing = inject(DraftEditing);
 
   protected readonly state = computed(() => {
-    const missing = this.editing
-      .missing()
-      .filter((field) => this.covers().includes(field.path.split('.')[0] ?? '')).length;
-    return missing === 0 ? '' : `${missing} missing`;
+    const held = this.countIn(this.editing.heldBack());
+    const missing = this.countIn(this.editing.missing());
+    return [held === 0 ? '' : `${held} not saved`, missing === 0 ? '' : `${missing} missing`]
+      .filter((words) => words !== '')
+      .join(', ');
   });
+
+  private countIn(fields: readonly FieldProblem[]): number {
+    return fields.filter((field) => this.covers().includes(field.path.split('.')[0] ?? '')).length;
+  }
 }

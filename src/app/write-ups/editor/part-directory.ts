@@ -6,6 +6,8 @@ import {
   type RevisionRef,
   type Symptom,
 } from '../../../../shared/contract/hardware';
+import type { Photo } from '../../../../shared/contract/photos';
+import type { ContentNames } from '../../../../shared/text/edition-fields';
 import { Api } from '../../core/api';
 
 const pageSize = 100;
@@ -36,6 +38,16 @@ export class PartDirectory {
   revisionName(id: number): string {
     const revision = this.revision(id);
     return revision ? `${this.partName(revision.partId)} ${revision.label}` : `revision ${id}`;
+  }
+
+  /** Names for all that a text points at. Symptoms go by the words of their address. */
+  namesWith(photos: ReadonlyMap<number, Photo>): ContentNames {
+    return {
+      part: (id) => this.partName(id),
+      revision: (id) => this.revisionName(id),
+      symptom: (slug) => slug.replaceAll('-', ' '),
+      photo: (id) => photos.get(id)?.alt ?? `photo ${id}`,
+    };
   }
 
   /** Parts whose name or maker matches; at most twelve. Null where the catalogue does not answer. */

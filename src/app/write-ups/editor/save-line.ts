@@ -24,8 +24,24 @@ import { fieldId, fieldName } from './field-names';
       @case ('moved-on') {
         <strong>Not saved: the draft was changed elsewhere</strong>
       }
+      @case ('partly-saved') {
+        <span>Saved {{ now.at | date: 'HH:mm' }}, all but:</span>
+        @for (field of now.heldBack; track field.path) {
+          <a [href]="'#' + fieldId(field.path)" (click)="go($event, field.path)"
+            >{{ fieldName(field.path) }} {{ field.message }}</a
+          >
+        }
+        @if (kept()) {
+          <span>That is kept in this browser.</span>
+        }
+      }
       @case ('not-saved') {
-        <strong>Not saved: {{ now.why.detail }}</strong>
+        <strong
+          >{{ now.triesAgain ? 'Not saved, trying again: ' : 'Not saved: ' }}{{ now.why.detail }}</strong
+        >
+        @if (kept()) {
+          <span>What you typed is kept in this browser.</span>
+        }
         @for (field of now.why.fields; track field.path) {
           <a [href]="'#' + fieldId(field.path)" (click)="go($event, field.path)"
             >{{ fieldName(field.path) }} {{ field.message }}</a
@@ -53,6 +69,8 @@ import { fieldId, fieldName } from './field-names';
 })
 export class SaveLine {
   readonly state = input.required<SaveState>();
+  /** Whether what is not saved is kept in this browser. */
+  readonly kept = input(false);
   readonly tryNow = output();
   /** Path of a field that somebody wants to see. */
   readonly wanted = output<string>();

@@ -1,7 +1,5 @@
-import { ChangeDetectionStrategy, Component, computed, inject, input, output } from '@angular/core';
-import type { SetAside } from './draft-editing';
-import { nameOfPiece, wordsOfPiece } from './merge-words';
-import { PartDirectory } from './part-directory';
+import { ChangeDetectionStrategy, Component, input, output } from '@angular/core';
+import type { SetAside } from './set-aside';
 
 /** Texts that were not taken when two were merged, to copy from. */
 @Component({
@@ -11,9 +9,9 @@ import { PartDirectory } from './part-directory';
     <section aria-labelledby="set-aside-heading">
       <h2 id="set-aside-heading">Set aside</h2>
       <p class="sl-quiet">
-        Texts that were not taken. They are kept here, not in the draft, until you leave.
+        Texts that were not taken. They are kept in this browser, not in the draft, until you drop them.
       </p>
-      @for (text of texts(); track text) {
+      @for (text of setAside(); track $index) {
         <div class="text">
           <h3>
             {{ text.name }} <span class="sl-quiet">{{ text.whose }}</span>
@@ -48,13 +46,4 @@ import { PartDirectory } from './part-directory';
 export class SetAsideList {
   readonly setAside = input.required<readonly SetAside[]>();
   readonly dismissed = output();
-  private readonly names = inject(PartDirectory);
-
-  protected readonly texts = computed(() =>
-    this.setAside().map(({ row, side }) => ({
-      name: nameOfPiece(row.field, row.mine, row.theirs),
-      whose: side === 'mine' ? 'as you typed it' : 'as it was saved elsewhere',
-      words: wordsOfPiece(row.field, row[side], this.names) ?? '',
-    })),
-  );
 }
