@@ -1,3 +1,4 @@
+import { arrow } from '../callouts.js';
 import { meshPlan } from '../../drawing/drive-plans.js';
 import { barrelSection, dovetailSection } from '../../drawing/mating-sections.js';
 import { envelopePlan, ringClampSection } from '../../drawing/plans.js';
@@ -79,7 +80,7 @@ export const cameraWriteUps: readonly DemoWriteUp[] = [
       fix('square-it-with-leaves', 'Square it with feeler leaves', 'adjust', 'reversible', { why: 'Equal gaps are square within what the screws can do; the rest shows on stars.', tools: 'Feeler leaves; hex key 1.5 mm', materials: 'Nail lacquer', steps: ['Camera off, cap on, cooler off and warm.', 'Bring all three gaps to 0.40 mm.', 'Check against a flat plate of glass: light even all round.', 'Lacquer on the screws, wait an hour.', 'Frame at night, corners within reach; turn one screw a sixteenth at a time.'], after: ['flats', 'back-focus'], accept: atMost('spread of the three gaps', 0.02, 'mm'), cautions: 'solvent', trials: 'h0.01 h0.02 h w0.05 h0.02 n0.1' }),
       fix('foil-under-one-side', 'Foil under one side', 'shim', 'reversible', { why: 'For Rev A, which has no screws, and as a stop-gap.', tools: 'Scissors; micrometer', materials: 'Household foil, 0.015 mm a layer', steps: ['Find the corner that focuses short: move focus in steps and note each corner’s best.', 'Lay layers under the opposite side of the flange.', 'Frame again; halve the number until it is even.'], after: ['flats', 'back-focus'], accept: atMost('corners’ best positions apart', 30, 'um'), trials: 'h h w' }),
     ],
-    drawings: [drawing(tiltSection({ title: 'FLANGE OF Q16 REV B', gap: 0.21, span: 62, upper: 'FLANGE', lower: 'BODY' }), 'Side view: gaps that differ by 0.21 mm over 62 mm tilt the flange by 0.19 degrees.', 'Unequal gaps.')],
+    drawings: [drawing(tiltSection({ title: 'FLANGE OF Q16 REV B', gap: 0.21, span: 62, upper: 'FLANGE', lower: 'BODY' }), 'Side view: gaps that differ by 0.21 mm over 62 mm tilt the flange by 0.19 degrees.', 'Unequal gaps.', [arrow('shim-goes-here', 'shim goes here', [520, 210], [664, 342])])],
   }),
   writeUp('g1-guide-camera-sticks-in-the-micro-helical', 'G1 guide camera sticks in the micro helical', {
     by: 'pavo', daysAgo: 290,

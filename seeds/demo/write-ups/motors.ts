@@ -1,3 +1,4 @@
+import { dimension, ring } from '../callouts.js';
 import { envelopePlan, holePlan } from '../../drawing/plans.js';
 import { plotSheet } from '../../drawing/plots.js';
 import { seatSection, tiltSection } from '../../drawing/sections.js';
@@ -38,7 +39,7 @@ export const motorWriteUps: readonly DemoWriteUp[] = [
       }),
       fix('bracket-rev-b-lined', 'Bracket Rev B', 'swap', 'reversible', { why: 'Cut for 66 mm and lined.', tools: 'Hex key', materials: 'M1 rigid bracket Rev B', steps: ['Swap, strap, set the mesh by paper.'], after: ['focus-offsets'], accept: atMost('movement of the motor under 10 N', 0.1, 'mm'), madeRight: 'tarn-m1-rigid-bracket:B' }),
     ],
-    drawings: [drawing(tiltSection({ title: 'BRACKET ROLLS ON THE TUBE', gap: 0.55, span: 38, upper: 'BRACKET', lower: 'TUBE' }), 'Side view: the bracket’s saddle leaves 0.55 mm at one edge over 38 mm.', 'One line of rest.')],
+    drawings: [drawing(tiltSection({ title: 'BRACKET ROLLS ON THE TUBE', gap: 0.55, span: 38, upper: 'BRACKET', lower: 'TUBE' }), 'Side view: the bracket’s saddle leaves 0.55 mm at one edge over 38 mm.', 'One line of rest.', [ring('one-line-of-rest', 'all its weight', [190, 360], 40), dimension('open-edge', 'open', [640, 304], [640, 360], 0.5)])],
   }),
   writeUp('m1-cable-outlet-hits-the-tube-ring', 'M1 cable outlet hits the tube ring', {
     by: 'mirela', daysAgo: 505,
