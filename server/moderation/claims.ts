@@ -34,11 +34,12 @@ export function createDeskClaims({ knex, clock }: { knex: Knex; clock: () => Dat
     async claim(item: ItemRef, moderatorId: number, takeOverFrom: number | null): Promise<Claim> {
       const now = clock();
       const until = new Date(now.getTime() + lasts);
-      const taken =
-        (await claimStore.take(knex, item, moderatorId, now, until)) ||
-        (takeOverFrom !== null && (await claimStore.takeOver(knex, item, takeOverFrom, moderatorId, until)));
+      const taken = await claimStore.take(knex, item, moderatorId, now, until);
+      if (!taken && takeOverFrom !== null)
+        await claimStore.takeOver(knex, item, takeOverFrom, moderatorId, until);
+      // Who has it now says it all: the same moderator may have asked twice at once.
       const holder = await claimStore.standing(knex, item, now);
-      if (!taken || holder?.moderatorId !== moderatorId) throw new ClaimedByAnother(holder);
+      if (holder?.moderatorId !== moderatorId) throw new ClaimedByAnother(holder);
       return toClaim(holder);
     },
 

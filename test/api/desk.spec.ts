@@ -1,5 +1,6 @@
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
-import type { DeskLine, FoundHazard } from '../../shared/contract/moderation.js';
+import type { DeskItem } from '../../shared/contract/desk-queue.js';
+import type { FoundHazard } from '../../shared/contract/moderation.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
 import type { Caution, Draft } from '../../shared/contract/write-ups.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
@@ -58,18 +59,20 @@ describe('the queue', () => {
     );
     const second = await onDesk(completeContent(joint, { title: 'Waits less long' }));
     await saveNewDraft(author, completeContent(joint, { title: 'Still a draft' }));
-    const lines = await throughAllPages<DeskLine>(moderator, '/api/desk');
-    const ids = lines.map((line) => line.editionId);
+    const items = await throughAllPages<DeskItem>(moderator, '/api/desk', { kind: 'edition' });
+    const ids = items.map((item) => item.id);
     expect(new Set(ids).size).toBe(ids.length);
     expect(ids.slice(-2)).toEqual([first.id, second.id]);
-    expect(lines.find((line) => line.editionId === first.id)).toMatchObject({
+    expect(items.find((item) => item.id === first.id)).toMatchObject({
+      kind: 'edition',
       title: 'Waits the longest',
       openHazards: 1,
-      author: { displayName: 'Author' },
+      person: { displayName: 'Author' },
+      path: `/desk/editions/${first.id}`,
     });
-    expect(lines.find((line) => line.editionId === second.id)).toMatchObject({ openHazards: 0 });
-    expect(lines.map((line) => line.title)).not.toContain('Still a draft');
-    const waits = lines.map((line) => line.submittedAt);
+    expect(items.find((item) => item.id === second.id)).toMatchObject({ openHazards: 0 });
+    expect(items.map((item) => item.title)).not.toContain('Still a draft');
+    const waits = items.map((item) => item.since);
     expect(waits).toEqual([...waits].sort());
   });
 
