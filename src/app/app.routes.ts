@@ -3,7 +3,7 @@ import { mustBe, mustSignIn } from './core/guards';
 
 /** Addresses of the editor and of what is not published yet; tested before its code is fetched. */
 const isEditorAddress: CanMatchFn = (_route, segments) =>
-  /^(?:write-ups\/new$|write-ups\/[^/]+\/edit$|drafts\/|my\/)/.test(
+  /^(?:write-ups\/new$|write-ups\/[^/]+\/edit(?:\/\d+)?$|drafts\/|my\/)/.test(
     segments.map((segment) => segment.path).join('/'),
   );
 
@@ -42,6 +42,13 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./hardware/which-one/which-one-page').then((m) => m.WhichOnePage),
   },
   { path: 'parts/:slug', loadComponent: () => import('./hardware/part-page').then((m) => m.PartPage) },
+  {
+    path: 'makers/prove',
+    title: 'Speak for a maker',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./makers/prove-page').then((m) => m.ProvePage),
+  },
+  { path: 'makers/:slug', loadComponent: () => import('./makers/maker-page').then((m) => m.MakerPage) },
   { path: 'questions', loadChildren: () => import('./questions/questions.routes').then((m) => m.routes) },
   { path: 'worksheets', loadChildren: () => import('./worksheets/worksheets.routes').then((m) => m.routes) },
   {

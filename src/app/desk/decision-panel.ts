@@ -32,11 +32,16 @@ export type Decision = { kind: 'published'; slug: string; number: number } | { k
           {{ open === 1 ? 'it' : 'them' }} first.
         </p>
       }
+      @if (edition().overtakenBy; as newer) {
+        <p class="overtaken" id="why-overtaken">
+          Edition {{ newer.number }} was published since it was begun. Its author has to merge the two first.
+        </p>
+      }
       <button
         type="submit"
         class="sl-strong-button"
-        [disabled]="open() > 0 || sendingNote.busy()"
-        [attr.aria-describedby]="open() > 0 ? 'why-not' : null"
+        [disabled]="open() > 0 || edition().overtakenBy !== null || sendingNote.busy()"
+        [attr.aria-describedby]="open() > 0 ? 'why-not' : edition().overtakenBy ? 'why-overtaken' : null"
       >
         Publish
       </button>
@@ -52,6 +57,11 @@ export type Decision = { kind: 'published'; slug: string; number: number } | { k
       </sl-labelled>
       @if (sendingReason.problem(); as problem) {
         <sl-problem-note [problem]="problem" />
+      }
+      @if (edition().overtakenBy; as newer) {
+        <button type="button" class="sl-bare-button" (click)="askToMerge(newer.number)">
+          Put in: please merge it with edition {{ newer.number }}
+        </button>
       }
       <button type="submit" class="sl-plain-button" [disabled]="sendingReason.busy()">Give it back</button>
     </form>
@@ -72,6 +82,10 @@ export type Decision = { kind: 'published'; slug: string; number: number } | { k
     textarea {
       display: block;
       resize: vertical;
+    }
+    .overtaken {
+      margin: 0;
+      font-weight: 600;
     }
     .why {
       margin: 0;
@@ -103,6 +117,14 @@ export class DecisionPanel {
       () => this.desk.publish(this.edition().editionId, this.publishing.controls.note.value),
       (published) => this.decided.emit({ kind: 'published', ...published }),
     );
+  }
+
+  /** Writes the request below what stands there already. */
+  protected askToMerge(number: number): void {
+    const { reason } = this.returning.controls;
+    const request = `Edition ${number} was published since you began. Please open your draft, merge the two and hand it in again.`;
+    if (!reason.value.includes(request))
+      reason.setValue([reason.value, request].filter(Boolean).join('\n\n'));
   }
 
   protected giveBack(): void {

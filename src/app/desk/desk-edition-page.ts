@@ -23,6 +23,7 @@ import { EditionPage } from '../write-ups/edition-page/edition-page';
 import { CautionList } from './caution-list';
 import { DecisionPanel, type Decision } from './decision-panel';
 import { Desk } from './desk';
+import { EditionPlace } from './edition-place';
 import { HazardPanel } from './hazard-panel';
 
 /** One edition on the desk: what changed, how it will stand, the hazards it names, and the decision. */
@@ -34,6 +35,7 @@ import { HazardPanel } from './hazard-panel';
     DecisionPanel,
     Difference,
     EditionPage,
+    EditionPlace,
     HazardPanel,
     Icon,
     ProblemNote,

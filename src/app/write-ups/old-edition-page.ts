@@ -25,6 +25,8 @@ import { WriteUps } from './write-ups';
             [routerLink]="['/write-ups', page.slug, 'compare']"
             [queryParams]="{ from: page.edition.number, to: page.latestNumber }"
             >see what changed</a
+          >, or
+          <a [routerLink]="['/write-ups', page.slug, 'edit', page.edition.number]">propose to bring it back</a
           >.
         </p>
       }

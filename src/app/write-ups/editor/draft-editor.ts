@@ -34,6 +34,7 @@ import { ReadingsFields } from './readings-fields';
 import { SaveLine } from './save-line';
 import { SetAsideList } from './set-aside-list';
 import { showField } from './show-field';
+import { StandingCautions } from './standing-cautions';
 import { SymptomsFields } from './symptoms-fields';
 
 /** The form of one draft, in the order of the work. */
@@ -56,6 +57,7 @@ import { SymptomsFields } from './symptoms-fields';
     RouterLink,
     SaveLine,
     SetAsideList,
+    StandingCautions,
     SymptomsFields,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -21,6 +21,11 @@ export const routes: Routes = [
         loadComponent: () => import('./next-edition-page').then((m) => m.NextEditionPage),
       },
       {
+        path: 'write-ups/:slug/edit/:number',
+        title: 'Bring an edition back',
+        loadComponent: () => import('./next-edition-page').then((m) => m.NextEditionPage),
+      },
+      {
         path: 'drafts/:id',
         title: 'Write',
         canDeactivate: [savedBeforeLeaving],
@@ -35,6 +40,11 @@ export const routes: Routes = [
         path: 'my/write-ups',
         title: 'My write-ups',
         loadComponent: () => import('./my-write-ups-page').then((m) => m.MyWriteUpsPage),
+      },
+      {
+        path: 'my/proposed-editions/:id',
+        title: 'Proposed on your write-up',
+        loadComponent: () => import('./proposed-edition-page').then((m) => m.ProposedEditionPage),
       },
     ],
   },

@@ -9,11 +9,12 @@ import { toApiProblem } from '../../core/api-problem';
 import { Icon } from '../../ui/icon/icon';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
 import { Drafts } from './drafts';
+import { ProposedList } from './proposed-list';
 
 /** Everything the member has written, the last touched first. */
 @Component({
   selector: 'sl-my-write-ups-page',
-  imports: [DatePipe, Icon, ProblemNote, RouterLink],
+  imports: [DatePipe, Icon, ProblemNote, ProposedList, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './my-write-ups-page.html',
   styleUrl: './my-write-ups-page.scss',
