@@ -149,6 +149,7 @@ export function createApp(around: Surroundings): Composition {
     searchOutbox: search.outbox,
     audit,
     happenings,
+    watches: watches.service,
     claims,
     deskInbox,
   });
@@ -157,15 +158,19 @@ export function createApp(around: Surroundings): Composition {
     clock,
     measurements: measurements.service,
     writeUps: writeUps.service,
+    happenings,
     deskInbox,
   });
   const questions = createQuestions({
     knex,
     clock,
     hardware: hardware.service,
+    joints: joints.service,
+    photos: photos.service,
     writeUps: writeUps.service,
     renderText,
     limits,
+    happenings,
     deskInbox,
   });
   const takeDown = createTakeDownService({

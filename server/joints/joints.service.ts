@@ -14,6 +14,7 @@ import { FieldNotValid, NotFound } from '../http/problems.js';
 import type { KnownDimensions, MeasurementService } from '../measurements/measurements.js';
 import { groupBy } from '../rows.js';
 import type { DeskInbox } from '../moderation/desk-inbox.js';
+import type { Happenings } from '../watches/happenings.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { comparedPart } from './compared-part.js';
 import { chanceOf, verdictOfPair, type KnownFeature } from './fit-cell.js';
@@ -45,9 +46,10 @@ export function createJointService(around: {
   pairs: JointWriteUpStore;
   measurements: Pick<MeasurementService, 'knownOf'>;
   writeUps: Pick<WriteUpService, 'cautionsOfMany'>;
+  happenings: Happenings;
   deskInbox: DeskInbox;
 }) {
-  const { knex, clock, store, pairs, measurements, writeUps, deskInbox } = around;
+  const { knex, clock, store, pairs, measurements, writeUps, happenings, deskInbox } = around;
 
   async function withFeatures(rows: readonly JointRow[]): Promise<Joint[]> {
     const features = await store.features(rows.flatMap((row) => [row.featureA, row.featureB]));
@@ -121,6 +123,11 @@ export function createJointService(around: {
       return (await withFeatures(await store.all(partSlug))).map(refOf);
     },
 
+    /** Known joints whose two features both belong to the parts named. */
+    async between(partIds: readonly number[]): Promise<JointRef[]> {
+      return (await withFeatures(await store.between(partIds))).map(refOf);
+    },
+
     /** NotFound for a slug that no joint has. */
     async page(slug: string): Promise<JointPage> {
       const joint = await jointBySlug(slug);
@@ -166,6 +173,15 @@ export function createJointService(around: {
       await knex.transaction(async (trx) => {
         const id = await store.saveReport({ ...report, jointId: joint.id, accountId, at: clock() }, trx);
         const title = `Fit report on “${joint.name}”`;
+        await happenings.add(trx, {
+          kind: 'fit-reported',
+          key: `fit-reported:${id}`,
+          title: `${report.sat ? 'Fits' : 'Does not fit'}: ${a.label} with ${b.label} in “${joint.name}”`,
+          text: report.note,
+          path: `/joints/${joint.slug}`,
+          actorId: accountId,
+          about: { joints: [joint.id], revisions: [a.id, b.id] },
+        });
         await deskInbox.firstPost(trx, { kind: 'fit-report', id, accountId, title });
       });
       return cellOf(joint, a, b, await knowledgeOf([joint]));

@@ -1,6 +1,7 @@
 import type { Knex } from 'knex';
 import type { RouteBinding } from '../http/binding.js';
 import type { MeasurementService } from '../measurements/measurements.js';
+import type { Happenings } from '../watches/happenings.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import type { DeskInbox } from '../moderation/desk-inbox.js';
 import { createJointWriteUpStore } from './joint-write-ups.store.js';
@@ -14,6 +15,7 @@ export function createJoints(around: {
   clock: () => Date;
   measurements: MeasurementService;
   writeUps: WriteUpService;
+  happenings: Happenings;
   deskInbox: DeskInbox;
 }): {
   bindings: RouteBinding[];

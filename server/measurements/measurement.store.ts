@@ -147,6 +147,11 @@ export function createMeasurementStore(knex: Knex) {
       await trx('consensus').where(columnsOf(place)).delete();
     },
 
+    /** Joints that the feature is one side of. */
+    async jointsOf(featureId: number, trx: Knex): Promise<number[]> {
+      return trx('joints').where('feature_a', featureId).orWhere('feature_b', featureId).pluck('id');
+    },
+
     /** The features, held like one of them, in the order of their identities. */
     async holdFeatures(ids: readonly number[], trx: Knex): Promise<FeatureRow[]> {
       return features(trx).whereIn('f.id', ids).orderBy('f.id').forUpdate();

@@ -194,7 +194,11 @@ export function createMeasurementService(around: {
           title: `Reading: ${spec.label} of ${feature.name} on ${part.name}`,
           path: `/parts/${part.slug}`,
           actorId: accountId,
-          about: { parts: [feature.partId], revisions: [input.revisionId] },
+          about: {
+            parts: [feature.partId],
+            revisions: [input.revisionId],
+            joints: await store.jointsOf(feature.id, trx),
+          },
         });
         const title = `Reading: ${spec.label} of ${feature.name} on ${part.name}`;
         await deskInbox.firstPost(trx, { kind: 'reading', id, accountId, title });

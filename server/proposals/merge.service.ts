@@ -12,6 +12,15 @@ export interface IndexNotices {
   addAll(trx: Knex, writeUpIds: readonly number[]): Promise<void>;
 }
 
+/** What merges need of watches: to let them follow, in their transaction. */
+export interface FollowingWatches {
+  followMerge(
+    trx: Knex,
+    subject: 'part' | 'revision' | 'joint',
+    moves: ReadonlyMap<number, number>,
+  ): Promise<void>;
+}
+
 export type MergeService = ReturnType<typeof createMergeService>;
 
 const none: Moves = new Map();
@@ -33,8 +42,9 @@ export function createMergeService(around: {
   audit: AuditLog;
   measurements: MeasurementService;
   searchOutbox: IndexNotices;
+  watches: FollowingWatches;
 }) {
-  const { knex, audit, measurements, searchOutbox } = around;
+  const { knex, audit, measurements, searchOutbox, watches } = around;
 
   return {
     /** FieldNotValid for what is not there or does not go together. Returns the address of the part that stays. */
@@ -64,10 +74,13 @@ export function createMergeService(around: {
     await store.settleReports(trx, { joints, revisions: plan.revisions });
     await store.settleMarksOfEditions(trx, plan.revisions);
     await mergeRows(trx, 'joints', joints);
+    await watches.followMerge(trx, 'joint', joints);
     await mergeRows(trx, 'features', plan.features);
     await mergeRows(trx, 'revisions', plan.revisions);
+    await watches.followMerge(trx, 'revision', plan.revisions);
     for (const [from, into] of plan.parts) await movePart(trx, from, into);
     await mergeRows(trx, 'parts', plan.parts);
+    await watches.followMerge(trx, 'part', plan.parts);
     await store.renameInEditions(trx, plan);
     await measurements.remakeConsensus(plan.touchedFeatures, trx);
   }

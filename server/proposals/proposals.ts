@@ -6,7 +6,7 @@ import type { MeasurementService } from '../measurements/measurements.js';
 import type { DeskClaims } from '../moderation/claims.js';
 import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
-import { createMergeService, type IndexNotices } from './merge.service.js';
+import { createMergeService, type FollowingWatches, type IndexNotices } from './merge.service.js';
 import { createProposalStore } from './proposal.store.js';
 import { proposalBindings } from './proposals.routes.js';
 import { createProposalService, type ProposalMail } from './proposals.service.js';
@@ -23,6 +23,7 @@ export function createProposals(around: {
   searchOutbox: IndexNotices;
   audit: AuditLog;
   happenings: Happenings;
+  watches: FollowingWatches;
   claims: Pick<DeskClaims, 'demandFree'>;
   deskInbox: DeskInbox;
 }): { bindings: RouteBinding[] } {

@@ -65,7 +65,13 @@ function pagesOn(knex: Knex): Pages {
     happenings: createHappenings({ clock }),
   });
   const nobody = { cautionsOfMany: () => Promise.resolve([]) } as unknown as WriteUpService;
-  const joints = createJoints({ knex, clock, measurements: measurements.service, writeUps: nobody });
+  const joints = createJoints({
+    knex,
+    clock,
+    measurements: measurements.service,
+    writeUps: nobody,
+    happenings: createHappenings({ clock }),
+  });
   let turn = 0;
   const next = (): number => (turn = (turn % parts) + 1);
   return {
