@@ -8,7 +8,7 @@ import {
   signal,
 } from '@angular/core';
 import { ActivatedRoute, RouterLink } from '@angular/router';
-import { map } from 'rxjs';
+import { Subject, combineLatest, map, startWith } from 'rxjs';
 import type { PartPage as Part, PartSummary, RevisionPhoto } from '../../../shared/contract/hardware';
 import type { Problem } from '../../../shared/contract/problem';
 import { partKindWords } from '../../../shared/contract/vocabulary';
@@ -24,7 +24,10 @@ import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
 import { CanonicalPart } from './canonical-part';
 import { Hardware } from './hardware';
+import { AnnouncedTools } from '../makers/announced-tools';
+import { WantedReadings } from '../makers/wanted-readings';
 import { MeasurementSection } from './measurements/measurement-section';
+import { redrawnWhile } from './measurements/stay-while-loading';
 import { RevisionPhotoTools } from './revision-photos/revision-photo-tools';
 import { PhotoStrip } from '../ui/photo/photo-strip';
 import { RevisionTimeLine } from './revision-time-line';
@@ -33,6 +36,7 @@ import { RevisionTimeLine } from './revision-time-line';
 @Component({
   selector: 'sl-part-page',
   imports: [
+    AnnouncedTools,
     Icon,
     LoadStateView,
     MeasurementSection,
@@ -42,6 +46,7 @@ import { RevisionTimeLine } from './revision-time-line';
     PhotoStrip,
     RevisionTimeLine,
     RouterLink,
+    WantedReadings,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './part-page.html',
@@ -57,9 +62,16 @@ export class PartPage {
   protected readonly kinds = partKindWords;
   protected readonly now = new Date();
   protected readonly problem = signal<Problem | null>(null);
-  protected readonly loaded = loadEach(
-    inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
-    (slug) => this.hardware.part(slug),
+  /** Fetches the page anew. */
+  protected readonly again = new Subject<void>();
+  protected readonly loaded = redrawnWhile(
+    loadEach(
+      combineLatest([
+        inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
+        this.again.pipe(startWith(undefined)),
+      ]),
+      ([slug]) => this.hardware.part(slug),
+    ),
   );
   /** As loaded, with what a moderator has changed since. */
   protected readonly part = linkedSignal<Part | null>(() => {
@@ -68,6 +80,12 @@ export class PartPage {
   });
   /** Newest first: what is sold today is what most people hold in hand. */
   protected readonly newestFirst = computed(() => [...(this.part()?.revisions ?? [])].reverse());
+
+  /** Whoever might speak for the maker; the server knows who does. */
+  protected readonly maySpeak = computed(() => this.session.role() === 'maker' || this.session.isModerator());
+  protected readonly wantsReadings = computed(() =>
+    (this.part()?.revisions ?? []).some((revision) => revision.announcedAt !== null),
+  );
 
   constructor() {
     const canonical = inject(CanonicalPart);

@@ -7,6 +7,8 @@ export interface RevisionSpan {
   readonly length: number;
   /** Still sold at the end of the line. */
   readonly sold: boolean;
+  /** Announced: runs from the day it is meant to be sold, or from now where none is named. */
+  readonly announced: boolean;
 }
 
 export interface TimeLine {
@@ -18,6 +20,8 @@ export interface TimeLine {
 }
 
 const day = 24 * 60 * 60 * 1000;
+/** Shown of a revision that is only announced. */
+const announcedLength = 120 * day;
 const mostYears = 8;
 
 /**
@@ -25,19 +29,27 @@ const mostYears = 8;
  * next one's first day where that is known, else to the end. Cost: O(n²) over a part's few revisions.
  */
 export function timeLineOf(revisions: readonly Revision[], now: Date): TimeLine {
-  const dated = revisions.filter((revision) => revision.soldFrom !== null);
-  const undated = revisions.filter((revision) => revision.soldFrom === null);
+  const isDated = (revision: Revision): boolean => revision.soldFrom !== null || revision.announced === true;
+  const dated = revisions.filter(isDated);
+  const undated = revisions.filter((revision) => !isDated(revision));
+  const from = ({ soldFrom }: Revision): number => (soldFrom === null ? now.getTime() : instant(soldFrom));
   if (dated.length === 0) return { spans: [], years: [], undated };
-  const first = Math.min(...dated.map((revision) => instant(revision.soldFrom!)));
+  const first = Math.min(...dated.map(from));
   const last = Math.max(
     now.getTime(),
-    ...dated.map((revision) => instant(revision.soldTo ?? revision.soldFrom!) + day),
+    ...dated.map((revision) =>
+      revision.announced
+        ? from(revision) + announcedLength
+        : (revision.soldTo === null ? from(revision) : instant(revision.soldTo)) + day,
+    ),
   );
   const at = (time: number): number => ((time - first) / (last - first)) * 100;
   const spans = dated.map((revision): RevisionSpan => {
-    const start = at(instant(revision.soldFrom!));
-    const end = revision.soldTo === null ? 100 : at(instant(revision.soldTo));
-    return { revision, start, length: Math.max(end - start, 1), sold: revision.soldTo === null };
+    const start = at(from(revision));
+    const announced = revision.announced === true;
+    const sold = !announced && revision.soldTo === null;
+    const end = announced ? 100 : at(revision.soldTo === null ? now.getTime() : instant(revision.soldTo));
+    return { revision, start, length: Math.max(end - start, 1), sold, announced };
   });
   return {
     spans,

@@ -20,10 +20,15 @@ import { timeLineOf } from './revision-line';
             <span
               class="span"
               [class.sold]="span.sold"
+              [class.announced]="span.announced"
               [style.inset-inline-start.%]="span.start"
               [style.inline-size.%]="span.length"
             ></span>
-            <b [style.inset-inline-start.%]="span.start">{{ span.revision.label }}</b>
+            <b
+              [style.inset-inline-start.%]="span.announced ? null : span.start"
+              [style.inset-inline-end.%]="span.announced ? 0 : null"
+              >{{ span.revision.label }}{{ span.announced ? ', announced' : '' }}</b
+            >
           </div>
         }
       </div>
@@ -70,6 +75,10 @@ import { timeLineOf } from './revision-line';
       border: 1px solid var(--sl-ink);
       background: var(--sl-paper);
     }
+    .announced {
+      border-style: dashed;
+      border-inline-end: 0;
+    }
     .sold {
       background: var(--sl-accent);
       border-inline-end: 0;
@@ -83,9 +92,10 @@ export class RevisionTimeLine {
   protected readonly timeLine = computed(() => timeLineOf(this.revisions(), this.now()));
   protected readonly words = computed(() =>
     this.timeLine()
-      .spans.map(
-        ({ revision }) =>
-          `${revision.label}: from ${revision.soldFrom} ${revision.soldTo ? `until ${revision.soldTo}` : 'on'}`,
+      .spans.map(({ revision: { label, soldFrom, soldTo, announced } }) =>
+        announced
+          ? `${label}: announced${soldFrom ? `, from ${soldFrom} on` : ''}`
+          : `${label}: from ${soldFrom} ${soldTo ? `until ${soldTo}` : 'on'}`,
       )
       .join('; '),
   );

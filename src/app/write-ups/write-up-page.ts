@@ -1,13 +1,17 @@
 import { DOCUMENT } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, effect, inject, linkedSignal } from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, RouterLink } from '@angular/router';
-import { catchError, map, of, switchMap } from 'rxjs';
+import { Subject, catchError, combineLatest, map, of, startWith, switchMap } from 'rxjs';
+import { WithdrawalNotice } from '../../../shared/contract/withdrawal';
 import type { Trial } from '../../../shared/contract/write-ups';
 import { jointOfWriteUp } from '../../../shared/fit/joint-of-write-up';
 import { loadEach } from '../core/load';
 import { Session } from '../core/session';
 import { ShimloreTitles } from '../core/titles';
+import { redrawnWhile } from '../hardware/measurements/stay-while-loading';
 import { Joints } from '../joints/joints';
+import { MakerSide } from '../makers/maker-side';
 import { Icon } from '../ui/icon/icon';
 import { LoadStateView } from '../ui/load-state/load-state';
 import { EditionPage } from './edition-page/edition-page';
@@ -17,6 +21,7 @@ import { TitleBlock } from './title-block';
 import { TrialForm } from './trial-form';
 import { TrialList } from './trial-list';
 import { Verdict } from './verdict';
+import { WithdrawnNotice } from './withdrawn-notice';
 import { WriteUps } from './write-ups';
 
 /** A write-up: the verdict for the reader's bench first, then the edition, then what others found. */
@@ -27,11 +32,13 @@ import { WriteUps } from './write-ups';
     Icon,
     JointHead,
     LoadStateView,
+    MakerSide,
     RouterLink,
     TitleBlock,
     TrialForm,
     TrialList,
     Verdict,
+    WithdrawnNotice,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './write-up-page.html',
@@ -43,25 +50,42 @@ export class WriteUpPageView {
   private readonly window = inject(DOCUMENT).defaultView;
   protected readonly session = inject(Session);
 
+  private readonly route = inject(ActivatedRoute);
   private readonly joints = inject(Joints);
+  protected readonly slug = toSignal(this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')), {
+    initialValue: '',
+  });
+  /** Fetches the page anew. */
+  protected readonly again = new Subject<void>();
   /** The write-up with the known joint between its parts; a page is worth reading without one too. */
-  protected readonly loaded = loadEach(
-    inject(ActivatedRoute).paramMap.pipe(map((params) => params.get('slug') ?? '')),
-    (slug) =>
-      this.writeUps.read(slug).pipe(
-        switchMap((page) => {
-          const part = page.view.joints[0]?.a.part.slug;
-          if (part === undefined) return of({ ...page, joint: null });
-          return this.joints.list(part).pipe(
-            map(({ items }) => ({ ...page, joint: jointOfWriteUp(items, page.view) })),
-            catchError(() => of({ ...page, joint: null })),
-          );
-        }),
-      ),
+  protected readonly loaded = redrawnWhile(
+    loadEach(
+      combineLatest([
+        this.route.paramMap.pipe(map((params) => params.get('slug') ?? '')),
+        this.again.pipe(startWith(undefined)),
+      ]),
+      ([slug]) =>
+        this.writeUps.read(slug).pipe(
+          switchMap((page) => {
+            const part = page.view.joints[0]?.a.part.slug;
+            if (part === undefined) return of({ ...page, joint: null });
+            return this.joints.list(part).pipe(
+              map(({ items }) => ({ ...page, joint: jointOfWriteUp(items, page.view) })),
+              catchError(() => of({ ...page, joint: null })),
+            );
+          }),
+        ),
+    ),
   );
   protected readonly page = computed(() => {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
+  });
+  /** What stands here where the desk has withdrawn the write-up. */
+  protected readonly withdrawn = computed(() => {
+    const now = this.loaded();
+    if (now.state !== 'failed') return null;
+    return WithdrawalNotice.safeParse(now.problem.withdrawal).data ?? null;
   });
   protected readonly joint = computed(() => this.page()?.joint ?? null);
   protected readonly trials = linkedSignal<readonly Trial[]>(() => this.page()?.trials ?? []);
@@ -72,7 +96,9 @@ export class WriteUpPageView {
   constructor() {
     effect(() => {
       const now = this.loaded();
+      const withdrawn = this.withdrawn();
       if (now.state === 'failed') this.titles.failed(now.problem);
+      if (withdrawn) this.titles.describe({ title: `Withdrawn: ${withdrawn.title}`, kept: false });
       if (now.state === 'ready') {
         const path = `/write-ups/${now.value.slug}`;
         const { title, summary } = now.value.view;

@@ -1,4 +1,5 @@
 import type { Routes } from '@angular/router';
+import { mustSignIn } from '../core/guards';
 
 export const routes: Routes = [
   { path: '', pathMatch: 'full', redirectTo: '/search' },
@@ -11,6 +12,12 @@ export const routes: Routes = [
   {
     path: ':slug/editions/:number',
     loadComponent: () => import('./old-edition-page').then((m) => m.OldEditionPage),
+  },
+  {
+    path: ':slug/tell/:maker',
+    title: 'Tell the maker',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('../makers/tell-page').then((m) => m.TellPage),
   },
   {
     path: ':slug/compare',
