@@ -1,10 +1,15 @@
 import type { Knex } from 'knex';
 import type { Symptom } from '../../shared/contract/hardware.js';
-import type { AddReply, AskQuestion, QuestionReading, SettledBy } from '../../shared/contract/questions.js';
+import type {
+  AskQuestion,
+  ChangeQuestion,
+  QuestionReading,
+  SettledBy,
+} from '../../shared/contract/questions.js';
 import type { WorksheetRecord } from '../../shared/contract/worksheet.js';
-import type { Caller } from '../http/caller.js';
 import { fromJson } from '../rows.js';
-import { readableBy, takenDownColumns, type TakenDownRow } from '../taken-down.js';
+import { takenDownColumns, type TakenDownRow } from '../taken-down.js';
+import { searchedWords } from './searched-words.js';
 
 export interface QuestionRow extends TakenDownRow {
   readonly id: number;
@@ -17,16 +22,14 @@ export interface QuestionRow extends TakenDownRow {
   readonly settledBy: SettledBy | null;
 }
 
-export interface ReplyRow extends TakenDownRow {
-  readonly id: number;
+export interface QuestionBody {
   readonly text: string;
+  readonly readings: QuestionReading[];
   readonly worksheet: WorksheetRecord | null;
-  readonly accountId: number;
-  readonly displayName: string;
-  readonly createdAt: Date;
+  readonly changedAt: Date | null;
 }
 
-export interface NewQuestion extends Omit<AskQuestion, 'symptoms'> {
+export interface NewQuestion extends Omit<AskQuestion, 'symptoms' | 'photos'> {
   readonly slugBase: string;
   readonly symptomIds: readonly number[];
   readonly accountId: number;
@@ -40,6 +43,7 @@ export function createQuestionStore(knex: Knex) {
     async newest(wish: {
       before: number | undefined;
       partId: number | undefined;
+      words: string | undefined;
       open: boolean | undefined;
       rows: number;
     }): Promise<QuestionRow[]> {
@@ -50,6 +54,7 @@ export function createQuestionStore(knex: Knex) {
           'q.id',
           knex('question_parts').where('part_id', wish.partId).select('question_id'),
         );
+      if (wish.words !== undefined) withWords(query, wish.words);
       if (wish.open === true) void query.whereNull('q.settled_write_up_id');
       if (wish.open === false) void query.whereNotNull('q.settled_write_up_id');
       const rows: QuestionRecord[] = await query;
@@ -71,31 +76,22 @@ export function createQuestionStore(knex: Knex) {
         .select({ questionId: 'question_id', partId: 'part_id', revisionId: 'revision_id' });
     },
 
-    async bodyOf(
-      id: number,
-    ): Promise<{ text: string; readings: QuestionReading[]; worksheet: WorksheetRecord | null }> {
-      const row = await knex('questions').where({ id }).first('text', 'readings', 'worksheet');
+    async bodyOf(id: number, db: Knex): Promise<QuestionBody> {
+      const row = await db('questions').where({ id }).first('text', 'readings', 'worksheet', 'changed_at');
       return {
         text: row.text,
         readings: fromJson(row.readings),
         worksheet: row.worksheet === null ? null : fromJson(row.worksheet),
+        changedAt: row.changed_at,
       };
     },
 
-    async symptomsOf(questionId: number): Promise<Symptom[]> {
-      return knex('question_symptoms as l')
+    async symptomsOf(questionId: number, db: Knex): Promise<Symptom[]> {
+      return db('question_symptoms as l')
         .join('symptoms as s', 's.id', 'l.symptom_id')
         .where('l.question_id', questionId)
         .orderBy('s.position')
         .select('s.id', 's.slug', 's.label', { group: 's.group_name' });
-    },
-
-    /** Oldest first; what is taken down only for its writer and for moderators. */
-    async repliesOf(questionId: number, reader: Caller): Promise<ReplyRow[]> {
-      const query = replies(knex).where('r.question_id', questionId).orderBy('r.id');
-      readableBy(query, 'r', reader);
-      const rows: ReplyRow[] = await query;
-      return rows.map(toReply);
     },
 
     /** Stores the question under a slug that ends in its id and so is nobody else's. */
@@ -125,18 +121,24 @@ export function createQuestionStore(knex: Knex) {
       return { id: id!, slug };
     },
 
-    async addReply(
-      reply: AddReply & { questionId: number; accountId: number; createdAt: Date },
-      trx: Knex,
-    ): Promise<ReplyRow> {
-      const [id] = await trx('question_replies').insert({
-        question_id: reply.questionId,
-        text: reply.text,
-        worksheet: reply.worksheet && JSON.stringify(reply.worksheet),
-        account_id: reply.accountId,
-        created_at: reply.createdAt,
-      });
-      return toReply(await replies(trx).where('r.id', id).first());
+    /** What is left out stays. */
+    async change(id: number, change: ChangeQuestion, at: Date, db: Knex): Promise<void> {
+      const { title, text, readings } = change;
+      await db('questions')
+        .where({ id })
+        .update({
+          changed_at: at,
+          ...(title === undefined ? {} : { title }),
+          ...(text === undefined ? {} : { text }),
+          ...(readings === undefined ? {} : { readings: JSON.stringify(readings) }),
+        });
+    },
+
+    /** The questions of these identities that are on the pages, in the order of the identities. */
+    async byIds(ids: readonly number[]): Promise<QuestionRow[]> {
+      const rows: QuestionRecord[] = await questions(knex).whereIn('q.id', ids).whereNull('q.taken_down_at');
+      const byId = new Map(rows.map((row) => [row.id, toQuestion(row)]));
+      return ids.flatMap((id) => byId.get(id) ?? []);
     },
 
     async publishedWriteUpId(slug: string, trx: Knex): Promise<number | undefined> {
@@ -172,7 +174,7 @@ function questions(db: Knex): Knex.QueryBuilder {
   return db('questions as q')
     .join('accounts as a', 'a.id', 'q.account_id')
     .leftJoin('write_ups as w', 'w.id', 'q.settled_write_up_id')
-    .leftJoin('editions as e', 'e.id', 'w.published_edition_id')
+    .leftJoin('editions as e', 'e.id', db.raw('COALESCE(w.published_edition_id, w.withdrawn_edition_id)'))
     .select('q.id', 'q.slug', 'q.title', {
       accountId: 'a.id',
       displayName: 'a.display_name',
@@ -201,17 +203,9 @@ function toQuestion(record: QuestionRecord): QuestionRow {
   };
 }
 
-function replies(db: Knex): Knex.QueryBuilder {
-  return db('question_replies as r')
-    .join('accounts as a', 'a.id', 'r.account_id')
-    .select('r.id', 'r.text', 'r.worksheet', {
-      accountId: 'a.id',
-      displayName: 'a.display_name',
-      createdAt: 'r.created_at',
-      ...takenDownColumns('r'),
-    });
-}
-
-function toReply(row: ReplyRow): ReplyRow {
-  return { ...row, worksheet: row.worksheet === null ? null : fromJson(row.worksheet) };
+/** Every word stands in the title or the text, or begins a word there. */
+function withWords(query: Knex.QueryBuilder, typed: string): void {
+  const { indexed, others } = searchedWords(typed);
+  if (indexed !== '') void query.whereRaw('MATCH (q.title, q.text) AGAINST (? IN BOOLEAN MODE)', [indexed]);
+  for (const word of others) void query.whereRaw("INSTR(CONCAT(q.title, ' ', q.text), ?) > 0", [word]);
 }

@@ -1,28 +1,29 @@
 import type { Knex } from 'knex';
-import type { EditionContent } from '../../shared/contract/edition-content.js';
 import { Id } from '../../shared/contract/primitives.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
+import type { JointRef } from '../../shared/contract/joints.js';
 import type {
-  AddReply,
   AskQuestion,
+  ChangeQuestion,
   QuestionLine,
   QuestionPage,
-  Reply,
-  Settle,
 } from '../../shared/contract/questions.js';
-import type { RichText } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
-import { visitor, type Caller, type MemberCaller } from '../http/caller.js';
+import { type MemberCaller } from '../http/caller.js';
 import { readCursor, toPage } from '../http/pages.js';
-import { FieldNotValid, NotAllowed, NotFound, NotValid, TakenDownByDesk } from '../http/problems.js';
+import { NotAllowed, NotFound, NotValid } from '../http/problems.js';
 import type { DeskInbox } from '../moderation/desk-inbox.js';
-import { mayReadTakenDown, takenDownOf } from '../taken-down.js';
+import type { Happenings } from '../watches/happenings.js';
 import { slugFrom } from '../write-ups/slug.js';
-import type { QuestionRow, QuestionStore, ReplyRow } from './question.store.js';
+import { foreignPhotos } from './foreign-photos.js';
+import type { QuestionLinksStore } from './question-links.store.js';
+import type { QuestionPhotosStore } from './question-photos.store.js';
+import type { QuestionPhotos, QuestionViews } from './question-view.js';
+import type { QuestionStore } from './question.store.js';
 
-/** What questions need to know of write-ups: the text that is published now. */
-export interface PublishedFixes {
-  publishedContent(db: Knex, writeUpId: number): Promise<EditionContent | undefined>;
+/** What questions need of joints. */
+export interface JointsBetween {
+  between(partIds: readonly number[]): Promise<JointRef[]>;
 }
 
 export type QuestionService = ReturnType<typeof createQuestionService>;
@@ -31,84 +32,26 @@ export function createQuestionService(around: {
   knex: Knex;
   clock: () => Date;
   hardware: HardwareService;
-  writeUps: PublishedFixes;
-  renderText: (source: string) => RichText;
+  joints: JointsBetween;
+  photos: QuestionPhotos;
   store: QuestionStore;
+  attached: QuestionPhotosStore;
+  links: QuestionLinksStore;
+  views: QuestionViews;
   deskInbox: DeskInbox;
+  happenings: Happenings;
+  plainText: (markdown: string) => string;
 }) {
-  const { knex, clock, hardware, writeUps, renderText, store, deskInbox } = around;
-
-  async function linesOf(rows: readonly QuestionRow[]): Promise<QuestionLine[]> {
-    const links = await store.partsOf(rows.map((row) => row.id));
-    const [parts, revisions] = await Promise.all([
-      hardware.partsByIds(links.map((link) => link.partId)),
-      hardware.revisionsByIds(links.flatMap(({ revisionId }) => revisionId ?? [])),
-    ]);
-    return rows.map((row) => ({
-      slug: row.slug,
-      title: row.title,
-      parts: links
-        .filter((link) => link.questionId === row.id)
-        .map((link) => ({
-          part: parts.get(link.partId)!,
-          revision: link.revisionId === null ? null : (revisions.get(link.revisionId) ?? null),
-        })),
-      person: { id: row.accountId, displayName: row.displayName },
-      createdAt: row.createdAt.toISOString(),
-      replyCount: row.replyCount,
-      settledBy: row.settledBy,
-    }));
-  }
-
-  const toReply = ({ accountId, displayName, takenDownAt, takenDownReason, ...row }: ReplyRow): Reply => ({
-    ...row,
-    takenDown: takenDownOf({ takenDownAt, takenDownReason }),
-    text: renderText(row.text),
-    person: { id: accountId, displayName },
-    createdAt: row.createdAt.toISOString(),
-  });
-
-  /** The question as far as the reader may see it. NotFound, or TakenDownByDesk. */
-  async function existing(slug: string, db: Knex, reader: Caller): Promise<QuestionRow> {
-    const row = await store.bySlug(slug, db);
-    if (!row) throw new NotFound('There is no question at this address.');
-    if (row.takenDownAt && !mayReadTakenDown(row.accountId, reader))
-      throw new TakenDownByDesk('This question', row.takenDownReason);
-    return row;
-  }
-
-  async function read(slug: string, reader: Caller): Promise<QuestionPage> {
-    const row = await existing(slug, knex, reader);
-    const [[line], body, symptoms, replies] = await Promise.all([
-      linesOf([row]),
-      store.bodyOf(row.id),
-      store.symptomsOf(row.id),
-      store.repliesOf(row.id, reader),
-    ]);
-    return {
-      ...line!,
-      ...body,
-      text: renderText(body.text),
-      symptoms,
-      replies: replies.map(toReply),
-      takenDown: takenDownOf(row),
-    };
-  }
-
-  /** The question, if the account asked it. */
-  async function own(slug: string, caller: MemberCaller, db: Knex): Promise<QuestionRow> {
-    const row = await existing(slug, db, caller);
-    if (row.accountId !== caller.accountId)
-      throw new NotAllowed('Only who asked can say what settled a question.', 'Reply to it instead.');
-    return row;
-  }
+  const { knex, clock, hardware, joints, photos, store, attached, links, views, deskInbox, happenings } =
+    around;
 
   return {
-    read,
+    read: views.read,
 
     /** One page, the newest first. NotFound for a part that the catalogue does not have. */
     async list(query: {
       part?: string | undefined;
+      q?: string | undefined;
       open?: 'true' | 'false' | undefined;
       cursor?: string | undefined;
       limit: number;
@@ -118,14 +61,36 @@ export function createQuestionService(around: {
       const rows = await store.newest({
         before,
         partId: part?.id,
+        words: query.q,
         open: query.open === undefined ? undefined : query.open === 'true',
         rows: query.limit + 1,
       });
       const page = toPage(rows, query.limit, (row) => row.id);
-      return { items: await linesOf(page.items), next: page.next };
+      return { items: await views.linesOf(page.items), next: page.next };
+    },
+
+    /** What is like a question that is being written; see the store for the rule. */
+    async listAlike(wish: {
+      q: string;
+      part: readonly number[];
+    }): Promise<{ questions: QuestionLine[]; joints: JointRef[] }> {
+      const [ids, between] = await Promise.all([
+        links.alike(wish.part, wish.q),
+        wish.part.length < 2 ? [] : joints.between(wish.part),
+      ]);
+      return { questions: await views.linesOf(await store.byIds(ids)), joints: between };
+    },
+
+    /** Questions that a write-up settled or was made from. NotFound for one that is not published. */
+    async listCovered(slug: string): Promise<{ items: QuestionLine[] }> {
+      const writeUpId = await store.publishedWriteUpId(slug, knex);
+      if (writeUpId === undefined)
+        throw new NotFound('There is no published write-up of that name.', 'Search for the part.');
+      return { items: await views.linesOf(await store.byIds(await links.coveredBy(writeUpId))) };
     },
 
     async ask(caller: MemberCaller, question: AskQuestion): Promise<QuestionPage> {
+      const { accountId } = caller;
       const symptoms = await hardware.symptomsBySlugs(question.symptoms);
       const broken = [
         ...brokenParts(
@@ -138,10 +103,10 @@ export function createQuestionService(around: {
             ? []
             : [{ path: `symptoms.${index}`, message: 'is not a symptom of the list', remedy: chooseOne }],
         ),
+        ...foreignPhotos(question.photos, await photos.ownPhotoIds(accountId, question.photos)),
       ];
       if (broken.length > 0) throw new NotValid(broken);
       const slug = await knex.transaction(async (trx) => {
-        const { accountId } = caller;
         const added = await store.add(
           {
             ...question,
@@ -152,51 +117,36 @@ export function createQuestionService(around: {
           },
           trx,
         );
+        await attached.addToQuestion(added.id, question.photos, trx);
         const title = `Question “${question.title}”`;
         await deskInbox.firstPost(trx, { kind: 'question', id: added.id, accountId, title });
+        await happenings.add(trx, {
+          kind: 'question-asked',
+          key: `question-asked:${added.id}`,
+          title: `Question: ${question.title}`,
+          text: around.plainText(question.text),
+          path: `/questions/${added.slug}`,
+          actorId: accountId,
+          about: {
+            parts: question.parts.map(({ partId }) => partId),
+            revisions: question.parts.flatMap(({ revisionId }) => revisionId ?? []),
+            questions: [added.id],
+          },
+        });
         return added.slug;
       });
-      return read(slug, caller);
+      return views.read(slug, caller);
     },
 
-    async reply(slug: string, { accountId }: MemberCaller, reply: AddReply): Promise<Reply> {
-      return knex.transaction(async (trx) => {
-        const { id: questionId, title } = await existing(slug, trx, visitor);
-        const added = await store.addReply({ ...reply, questionId, accountId, createdAt: clock() }, trx);
-        const posted = { kind: 'reply', id: added.id, accountId, title: `Reply to “${title}”` } as const;
-        await deskInbox.firstPost(trx, posted);
-        return toReply(added);
-      });
-    },
-
-    /** Names the fix that helped. NotAllowed for others than the asker; FieldNotValid for a fix that is not published. */
-    async settle(slug: string, caller: MemberCaller, { writeUpSlug, fixKey }: Settle): Promise<QuestionPage> {
+    /** NotAllowed for others than the asker. */
+    async change(slug: string, caller: MemberCaller, change: ChangeQuestion): Promise<QuestionPage> {
       await knex.transaction(async (trx) => {
-        const question = await own(slug, caller, trx);
-        const writeUpId = await store.publishedWriteUpId(writeUpSlug, trx);
-        if (writeUpId === undefined)
-          throw new FieldNotValid(
-            'writeUpSlug',
-            'is not a published write-up',
-            'Search for it by its title.',
-          );
-        const content = await writeUps.publishedContent(trx, writeUpId);
-        const fix = content?.fixes.find(({ key }) => key === fixKey);
-        if (!fix)
-          throw new FieldNotValid(
-            'fixKey',
-            'is not a fix of its published edition',
-            'Choose one of its fixes.',
-          );
-        await store.settle(question.id, { writeUpId, fixKey, fixTitle: fix.title }, trx);
+        const question = await views.existing(slug, trx, caller);
+        if (question.accountId !== caller.accountId)
+          throw new NotAllowed('Only who asked can change a question.', 'Reply to it instead.');
+        await store.change(question.id, change, clock(), trx);
       });
-      return read(slug, caller);
-    },
-
-    async reopen(slug: string, caller: MemberCaller): Promise<QuestionPage> {
-      const question = await own(slug, caller, knex);
-      await store.settle(question.id, null, knex);
-      return read(slug, caller);
+      return views.read(slug, caller);
     },
   };
 }

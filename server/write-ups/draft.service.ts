@@ -1,7 +1,7 @@
 import type { Knex } from 'knex';
 import { z } from 'zod';
 import { missingFromContent } from '../../shared/contract/edition-completeness.js';
-import { emptyContent } from '../../shared/contract/edition-content.js';
+import { emptyContent, type EditionContent } from '../../shared/contract/edition-content.js';
 import type { FieldProblem } from '../../shared/contract/problem.js';
 import type { EditionState } from '../../shared/contract/vocabulary.js';
 import type { Draft, EditionView, MyWriteUp } from '../../shared/contract/write-ups.js';
@@ -52,21 +52,16 @@ export function createDraftService({
 }: DraftParts) {
   return {
     async startWriteUp(caller: MemberCaller, title: string): Promise<Draft> {
-      const at = clock();
-      const id = await knex.transaction(async (trx) => {
-        const writeUpId = await drafts.addWriteUp(trx, caller.accountId, at);
-        const content = { ...emptyContent, title };
-        const first = {
-          writeUpId,
-          number: 1,
-          authorId: caller.accountId,
-          baseEditionId: null,
-          changeNote: '',
-        };
-        return drafts.addDraft(trx, { ...first, content, at });
-      });
-      return reader.readOwn(caller, id);
+      const { draftId } = await knex.transaction((trx) =>
+        startDraftWithin(trx, caller.accountId, { ...emptyContent, title }),
+      );
+      return reader.readOwn(caller, draftId);
     },
+
+    startDraftWithin,
+
+    /** The account's edition of the write-up that is under way, if there is one. */
+    openDraftOf: drafts.openEditionOf,
 
     readDraft: reader.readOwn,
 
@@ -166,6 +161,17 @@ export function createDraftService({
       return toPage(items, query.limit, (row) => ({ at: row.updatedAt, id: row.editionId }));
     },
   };
+  /** A new write-up whose first draft has this text. */
+  async function startDraftWithin(
+    trx: Knex,
+    authorId: number,
+    content: EditionContent,
+  ): Promise<{ writeUpId: number; draftId: number }> {
+    const at = clock();
+    const writeUpId = await drafts.addWriteUp(trx, authorId, at);
+    const first = { writeUpId, number: 1, authorId, baseEditionId: null, changeNote: '' };
+    return { writeUpId, draftId: await drafts.addDraft(trx, { ...first, content, at }) };
+  }
 
   /** What an edition lacks before the desk can take it. */
   async function missingFrom(edition: EditionRow): Promise<FieldProblem[]> {
