@@ -7,8 +7,7 @@ import type { Happenings } from '../watches/happenings.js';
 import { partIdsOf } from '../write-ups/edition-links.js';
 import { NoSuchWriteUp, WrongState } from '../write-ups/edition-problems.js';
 import type { IndexNotice } from '../write-ups/trial.service.js';
-import { noticeOf } from '../write-ups/withdrawal.service.js';
-import type { DeskWriteUpRow } from '../write-ups/withdrawal.store.js';
+import { noticeOf, type DeskWriteUpRow } from '../write-ups/withdrawal.service.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { CautionMissing, openHazards } from './caution-missing.js';
 

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { baseOfNext } from './withdrawal.store.js';
 import type { EditionContent } from '../../shared/contract/edition-content.js';
 import type { EditionState } from '../../shared/contract/vocabulary.js';
 import type { MyWriteUp } from '../../shared/contract/write-ups.js';
@@ -46,7 +47,7 @@ export function createDraftStore(knex: Knex) {
         authorId: 'e.author_id',
         authorName: 'a.display_name',
         baseEditionId: 'e.base_edition_id',
-        publishedEditionId: 'w.published_edition_id',
+        publishedEditionId: baseOfNext(db, 'w'),
         changeNote: 'e.change_note',
         updatedAt: 'e.updated_at',
         submittedAt: 'e.submitted_at',

@@ -8,7 +8,8 @@ import type { DraftReader } from './draft-reader.js';
 import type { DraftStore } from './draft.store.js';
 import { NoSuchWriteUp, WrongState } from './edition-problems.js';
 import { publicationStore } from './publication.store.js';
-import type { PublishedStore, WriteUpRow } from './published.store.js';
+import type { PublishedStore } from './published.store.js';
+import type { WithdrawalService } from './withdrawal.service.js';
 
 export interface NextEditionParts {
   readonly knex: Knex;
@@ -16,16 +17,27 @@ export interface NextEditionParts {
   readonly drafts: DraftStore;
   readonly published: PublishedStore;
   readonly reader: DraftReader;
+  readonly withdrawals: WithdrawalService;
 }
 
 export type NextEditionService = ReturnType<typeof createNextEditionService>;
 
-/** How another edition of a published write-up begins: by its authors, or proposed by anybody who is signed in. */
-export function createNextEditionService({ knex, clock, drafts, published, reader }: NextEditionParts) {
+/**
+ * How another edition of a published write-up begins: by its authors, or proposed by anybody who is signed in. One that is
+ * withdrawn is mended by its authors and moderators.
+ */
+export function createNextEditionService({
+  knex,
+  clock,
+  drafts,
+  published,
+  reader,
+  withdrawals,
+}: NextEditionParts) {
   return {
     /** The caller's open edition of the write-up, or a new one with the published text and the same keys of its fixes. */
     async startEdition(caller: MemberCaller, slug: string): Promise<Draft> {
-      const writeUp = await find(slug);
+      const writeUp = await withdrawals.withHistory(caller, slug);
       const id = await knex.transaction(async (trx) => {
         const base = await lockPublished(trx, writeUp.id);
         const open = await drafts.openEditionOf(trx, writeUp.id, caller.accountId);
@@ -36,7 +48,7 @@ export function createNextEditionService({ knex, clock, drafts, published, reade
 
     /** A new edition with the text of an earlier one, on the base of what is published; WrongState where one is under way. */
     async bringEditionBack(caller: MemberCaller, slug: string, number: number): Promise<Draft> {
-      const writeUp = await find(slug);
+      const writeUp = await withdrawals.withHistory(caller, slug);
       const earlier = (await published.editionsOf(writeUp.id)).find((edition) => edition.number === number);
       const content = earlier && (await published.contents([earlier.id])).get(earlier.id);
       if (!content)
@@ -66,20 +78,15 @@ export function createNextEditionService({ knex, clock, drafts, published, reade
     },
   };
 
-  async function find(slug: string): Promise<WriteUpRow> {
-    const writeUp = await published.bySlug(slug);
-    if (!writeUp) throw new NoSuchWriteUp();
-    return writeUp;
-  }
-
-  /** Holds the write-up; gives the edition that is published while it is held. */
+  /** Holds the write-up; gives the edition that is published, or was before it was withdrawn. */
   async function lockPublished(
     trx: Knex,
     writeUpId: number,
   ): Promise<{ baseEditionId: number; content: EditionContent }> {
     const baseEditionId = (await publicationStore.lockWriteUp(trx, writeUpId))?.publishedEditionId ?? null;
-    const content = await published.publishedContent(trx, writeUpId);
-    if (baseEditionId === null || !content) throw new NoSuchWriteUp();
+    if (baseEditionId === null) throw new NoSuchWriteUp();
+    const content = (await published.contents([baseEditionId])).get(baseEditionId);
+    if (!content) throw new NoSuchWriteUp();
     return { baseEditionId, content };
   }
 

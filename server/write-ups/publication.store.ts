@@ -1,11 +1,12 @@
 import type { Knex } from 'knex';
 import { isDuplicate } from '../rows.js';
-import { notWithdrawn } from './withdrawal.store.js';
+import { baseOfNext, notWithdrawn } from './withdrawal.store.js';
 import type { EditionLinks } from './edition-links.js';
 
 export interface LockedWriteUp {
   readonly id: number;
   readonly slug: string | null;
+  /** The published edition; of a withdrawn write-up the one that was. */
   readonly publishedEditionId: number | null;
 }
 
@@ -16,7 +17,7 @@ export const publicationStore = {
     return trx('write_ups')
       .where('id', id)
       .forUpdate()
-      .first('id', 'slug', { publishedEditionId: 'published_edition_id' });
+      .first('id', 'slug', { publishedEditionId: baseOfNext(trx, 'write_ups') });
   },
 
   /** Slugs in use that begin like `base`. */

@@ -6,6 +6,8 @@ import { NoSuchWriteUp } from './edition-problems.js';
 import type { PublishedStore, WriteUpRow } from './published.store.js';
 import type { DeskWriteUpRow, WithdrawalStore } from './withdrawal.store.js';
 
+export type { DeskWriteUpRow } from './withdrawal.store.js';
+
 /** The desk has withdrawn it: carries what stands at the address instead. */
 export class WriteUpWithdrawn extends ProblemError {
   constructor(withdrawal: WithdrawalNotice) {

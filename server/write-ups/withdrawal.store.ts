@@ -31,7 +31,7 @@ export function createWithdrawalStore(knex: Knex) {
     /** `publishedEditionId` is the edition that is published, or that would be were it not withdrawn. */
     async deskWriteUp(slug: string, db: Knex = knex): Promise<DeskWriteUpRow | undefined> {
       const row: Row | undefined = await db('write_ups as w')
-        .join('editions as e', 'e.id', db.raw('COALESCE(w.published_edition_id, w.withdrawn_edition_id)'))
+        .join('editions as e', 'e.id', baseOfNext(db, 'w'))
         .leftJoin('write_ups as i', 'i.id', 'w.instead_id')
         .leftJoin('editions as ie', 'ie.id', 'i.published_edition_id')
         .where('w.slug', slug)
@@ -94,6 +94,11 @@ export function createWithdrawalStore(knex: Knex) {
       return trx('write_ups').where('withdrawn_limit_id', limitId).orderBy('id').pluck('slug');
     },
   };
+}
+
+/** The edition that the next one builds on: the published one, or the one that was when the write-up was withdrawn. */
+export function baseOfNext(db: Knex, table: string): Knex.Raw {
+  return db.raw('COALESCE(??, ??)', [`${table}.published_edition_id`, `${table}.withdrawn_edition_id`]);
 }
 
 /** Columns of a write-up that is not withdrawn. */

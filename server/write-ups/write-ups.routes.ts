@@ -42,6 +42,9 @@ export function writeUpBindings(writeUps: WriteUpService): RouteBinding[] {
     bind(routes.previewDraft, async ({ caller, params }) => ({
       view: await writeUps.previewDraft(memberOf(caller), params.id),
     })),
+    bind(routes.listDraftCautions, async ({ caller, params }) => ({
+      items: await writeUps.cautionsOnDraft(memberOf(caller), params.id),
+    })),
     bind(routes.submitDraft, async ({ caller, params, version, response }) =>
       tagged(response, await writeUps.submitDraft(memberOf(caller), params.id, version)),
     ),

@@ -2,6 +2,7 @@ import type { Knex } from 'knex';
 import type { RichText } from '../../shared/contract/write-ups.js';
 import type { HardwareService } from '../hardware/hardware.js';
 import type { RouteBinding } from '../http/binding.js';
+import type { MemberCaller } from '../http/caller.js';
 import type { DeskInbox } from '../moderation/desk-inbox.js';
 import type { Happenings } from '../watches/happenings.js';
 import { createCautionStore } from './caution.store.js';
@@ -70,7 +71,7 @@ function createWriteUpService(around: WriteUpSurroundings) {
   return {
     ...createPageService({ knex, published, drafts, trials, views, comparer, withdrawals }),
     ...createDraftService({ knex, clock, drafts, published, references, views, reader, happenings }),
-    ...createNextEditionService({ knex, clock, drafts, published, reader }),
+    ...createNextEditionService({ knex, clock, drafts, published, reader, withdrawals }),
     ...createProposedEditionService({ clock, drafts, reader, proposed, comparer }),
     reportTrial: trialService.reportTrial,
     reportTrialWithin: trialService.reportTrialWithin,
@@ -90,6 +91,9 @@ function createWriteUpService(around: WriteUpSurroundings) {
     authorIdsOf: published.authorIds,
     withdrawals,
     cautionsOf: cautions.cautionsOf,
+    /** Those that stand whatever the author writes; for the author of the draft only. */
+    cautionsOnDraft: async (caller: MemberCaller, id: number) =>
+      cautions.cautionsOf((await reader.readOwn(caller, id)).writeUpId),
     cautionsOfMany: cautions.cautionsOfMany,
     viewOf: views.viewOf,
     compare: comparer.compare,

@@ -358,6 +358,15 @@ export const writeUpRoutes = {
     params: idParams,
     response: z.object({ view: EditionView }),
   }),
+  listDraftCautions: route({
+    method: 'get',
+    path: '/api/drafts/:id/cautions',
+    tag,
+    access: signedIn,
+    summary: 'The cautions that stand on the write-up of a draft of mine; no edition drops them',
+    params: idParams,
+    response: z.object({ items: z.array(Caution) }),
+  }),
   submitDraft: route({
     method: 'post',
     path: '/api/drafts/:id/submit',

@@ -8,10 +8,11 @@ import { Session } from '../core/session';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
+import { LimitNote } from './limit-note';
 
 @Component({
   selector: 'sl-profile',
-  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [Field, Labelled, LimitNote, ProblemNote, ReactiveFormsModule, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: './account.scss',
   template: `
@@ -24,6 +25,7 @@ import { Accounts } from './accounts';
         <dd>{{ account.role }}</dd>
       </dl>
     }
+    <sl-limit-note />
     <form [formGroup]="form" novalidate (ngSubmit)="save()" (input)="saved.set(false)">
       <sl-labelled label="Name shown to others" [control]="form.controls.displayName">
         <input

@@ -2,6 +2,7 @@ import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { takeUntilDestroyed } from '@angular/core/rxjs-interop';
 import { FormControl, ReactiveFormsModule } from '@angular/forms';
+import { RouterLink } from '@angular/router';
 import {
   Subject,
   catchError,
@@ -22,6 +23,7 @@ import { Session } from '../core/session';
 import { Confirm } from '../ui/confirm/confirm';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
+import { AdminTabs } from './admin-tabs';
 import { People } from './people';
 
 /** What each role may do, for the question before it is given. */
@@ -35,7 +37,7 @@ const roleMeans: Record<AccountRole, string> = {
 /** Accounts, newest first; roles are changed here. */
 @Component({
   selector: 'sl-accounts-page',
-  imports: [DatePipe, ProblemNote, ReactiveFormsModule],
+  imports: [AdminTabs, DatePipe, ProblemNote, ReactiveFormsModule, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './accounts-page.html',
   styleUrl: './accounts-page.scss',

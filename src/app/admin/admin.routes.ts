@@ -7,4 +7,9 @@ export const routes: Routes = [
     title: 'Accounts',
     loadComponent: () => import('./accounts-page').then((m) => m.AccountsPage),
   },
+  {
+    path: 'audit',
+    title: 'Audit log',
+    loadComponent: () => import('./audit-page').then((m) => m.AuditPage),
+  },
 ];

@@ -10,6 +10,8 @@ export interface PageFacts {
   readonly description?: string;
   /** Canonical address, without the query. */
   readonly path?: string;
+  /** False: search engines are asked not to keep it. */
+  readonly kept?: false;
   /** JSON-LD. */
   readonly data?: object;
 }
@@ -33,6 +35,7 @@ export class ShimloreTitles extends TitleStrategy {
     const title = this.buildTitle(snapshot);
     this.title.setTitle(title ? `${title} · ${site}` : site);
     this.meta.removeTag('name="description"');
+    this.meta.removeTag('name="robots"');
     this.document.head
       .querySelectorAll('link[rel=canonical], script[data-page]')
       .forEach((element) => element.remove());
@@ -42,6 +45,7 @@ export class ShimloreTitles extends TitleStrategy {
   describe(page: PageFacts): void {
     this.title.setTitle(`${page.title} · ${site}`);
     if (page.description) this.meta.updateTag({ name: 'description', content: page.description });
+    if (page.kept === false) this.meta.updateTag({ name: 'robots', content: 'noindex' });
     if (page.path) this.link(page.path);
     if (page.data) this.data(page.data);
   }

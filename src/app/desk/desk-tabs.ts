@@ -1,7 +1,7 @@
 import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { RouterLink, RouterLinkActive } from '@angular/router';
 
-/** What lies on the desk: editions of write-ups, and the catalogue of hardware. */
+/** The rooms of the desk: the queue of all that waits, and the catalogue of hardware. */
 @Component({
   selector: 'sl-desk-tabs',
   imports: [RouterLink, RouterLinkActive],
@@ -13,15 +13,18 @@ import { RouterLink, RouterLinkActive } from '@angular/router';
         routerLinkActive="here"
         ariaCurrentWhenActive="page"
         [routerLinkActiveOptions]="{ exact: true }"
-        >Write-ups</a
+        >Queue</a
       >
       <a routerLink="/desk/hardware" routerLinkActive="here" ariaCurrentWhenActive="page">Hardware</a>
+      <a routerLink="/desk/cautions" routerLinkActive="here" ariaCurrentWhenActive="page">Cautions</a>
+      <a routerLink="/desk/members" routerLinkActive="here" ariaCurrentWhenActive="page">Members</a>
     </nav>
   `,
   styles: `
     nav {
       display: flex;
-      gap: 1.5rem;
+      flex-wrap: wrap;
+      gap: 0 1.5rem;
       margin-block-end: 1rem;
     }
     a {

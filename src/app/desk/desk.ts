@@ -5,7 +5,7 @@ import {
   deskRoutes,
   type DeskEdition,
   type LibraryCaution,
-  type PlaceCaution,
+  PlaceCaution,
 } from '../../../shared/contract/moderation';
 import {
   proposalRoutes,
@@ -23,10 +23,6 @@ export type CautionWords = z.input<typeof deskRoutes.changeCaution.body>;
 export class Desk {
   private readonly api = inject(Api);
 
-  queue(cursor?: string) {
-    return this.api.call(deskRoutes.readDesk, { query: { cursor } });
-  }
-
   edition(id: number): Observable<DeskEdition> {
     return this.api.call(deskRoutes.readDeskEdition, { params: { id } });
   }
@@ -35,12 +31,17 @@ export class Desk {
     return this.api.call(deskRoutes.listLibraryCautions).pipe(map((list) => list.items));
   }
 
-  place(body: PlaceCaution): Observable<Caution> {
+  place(body: z.input<typeof PlaceCaution>): Observable<Caution> {
     return this.api.call(deskRoutes.placeCaution, { body });
   }
 
   reword(id: number, body: CautionWords): Observable<Caution> {
     return this.api.call(deskRoutes.changeCaution, { params: { id }, body });
+  }
+
+  /** Puts a caution that stands at another place of an edition. */
+  move(id: number, body: z.input<typeof deskRoutes.moveCaution.body>): Observable<Caution> {
+    return this.api.call(deskRoutes.moveCaution, { params: { id }, body });
   }
 
   remove(id: number): Observable<unknown> {

@@ -1,14 +1,32 @@
 import { TestBed } from '@angular/core/testing';
 import { Subject } from 'rxjs';
-import type { DeskEdition, FoundHazard, LibraryCaution, PlaceCaution } from '../../../shared/contract/moderation';
+import type {
+  DeskEdition,
+  FoundHazard,
+  LibraryCaution,
+  PlaceCaution,
+} from '../../../shared/contract/moderation';
 import type { Caution } from '../../../shared/contract/write-ups';
 import { Desk } from './desk';
 import { HazardPanel } from './hazard-panel';
 
-const rotary: FoundHazard = { hazard: 'power-tool', fixKey: 'fix-key-1', fixTitle: 'Trim the lip', words: ['rotary tool'], answered: false };
+const rotary: FoundHazard = {
+  hazard: 'power-tool',
+  fixKey: 'fix-key-1',
+  fixTitle: 'Trim the lip',
+  stepKey: null,
+  step: null,
+  words: ['rotary tool'],
+  answered: false,
+};
 const goggles: LibraryCaution = {
-  id: 4, name: 'Eye protection', signalWord: 'warning', hazards: ['power-tool'], hazard: 'Flying chips',
-  consequence: 'can blind an eye.', avoidance: 'Wear goggles.',
+  id: 4,
+  name: 'Eye protection',
+  signalWord: 'warning',
+  hazards: ['power-tool'],
+  hazard: 'Flying chips',
+  consequence: 'can blind an eye.',
+  avoidance: 'Wear goggles.',
 };
 const mask: LibraryCaution = { ...goggles, id: 5, name: 'Dust mask', hazards: ['dust'] };
 
@@ -17,7 +35,9 @@ function panelWith(hazards: FoundHazard[]) {
   const answer = new Subject<Caution>();
   const told: Caution[] = [];
   TestBed.configureTestingModule({
-    providers: [{ provide: Desk, useValue: { place: (caution: PlaceCaution) => (placed.push(caution), answer) } }],
+    providers: [
+      { provide: Desk, useValue: { place: (caution: PlaceCaution) => (placed.push(caution), answer) } },
+    ],
   });
   const fixture = TestBed.createComponent(HazardPanel);
   fixture.componentRef.setInput('edition', { editionId: 9, hazards } as DeskEdition);
@@ -25,7 +45,8 @@ function panelWith(hazards: FoundHazard[]) {
   fixture.componentInstance.placed.subscribe((caution) => told.push(caution));
   fixture.detectChanges();
   const element = fixture.nativeElement as HTMLElement;
-  const button = (name: string) => [...element.querySelectorAll('button')].find((one) => one.textContent?.includes(name));
+  const button = (name: string) =>
+    [...element.querySelectorAll('button')].find((one) => one.textContent?.includes(name));
   return { fixture, element, button, placed, answer, told };
 }
 
@@ -54,8 +75,15 @@ describe('hazards on the desk', () => {
 
     expect(placed).toEqual([
       {
-        editionId: 9, fixKey: 'fix-key-1', libraryId: 4, signalWord: 'warning', hazards: ['power-tool'], hazard: 'Flying chips',
-        consequence: 'can blind an eye.', avoidance: 'Wear goggles that close at the sides.',
+        editionId: 9,
+        fixKey: 'fix-key-1',
+        stepKey: null,
+        libraryId: 4,
+        signalWord: 'warning',
+        hazards: ['power-tool'],
+        hazard: 'Flying chips',
+        consequence: 'can blind an eye.',
+        avoidance: 'Wear goggles that close at the sides.',
       },
     ]);
     const caution: Caution = { id: 1, ...placed[0]! };

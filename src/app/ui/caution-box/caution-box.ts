@@ -3,7 +3,10 @@ import { signalWordMeans } from '../../../../shared/contract/vocabulary';
 import type { Caution } from '../../../../shared/contract/write-ups';
 import { Icon } from '../icon/icon';
 
-/** A moderator's safety notice: signal word first, then hazard, consequence and how to avoid it. */
+/**
+ * A moderator's safety notice in the order of ANSI Z535.6: alert symbol and signal word, then the hazard, what it can do,
+ * and how to avoid it.
+ */
 @Component({
   selector: 'sl-caution-box',
   imports: [Icon],
@@ -29,6 +32,7 @@ import { Icon } from '../icon/icon';
       border: 2px solid var(--sl-caution-line);
       margin-block: 0.75rem;
       break-inside: avoid;
+      break-after: avoid;
       background: var(--sl-paper);
     }
     :host(.danger),
@@ -66,6 +70,18 @@ import { Icon } from '../icon/icon';
     }
     .avoid {
       margin-block-start: 0.25rem;
+    }
+    /* Paper may come without grounds; the signal word must not depend on one. */
+    @media print {
+      :host(.danger),
+      :host(.warning) {
+        border-width: 3px;
+      }
+      :host(.danger) .word {
+        background: none;
+        color: var(--sl-text);
+        border-block-end-width: 3px;
+      }
     }
   `,
 })
