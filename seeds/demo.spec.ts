@@ -117,7 +117,7 @@ describe('the demo', () => {
       const plan = planCautions(writeUp.cautions, editions);
       const standing = plan
         .flat()
-        .map(({ slug, fixKey }) => ({ fixKey, stepKey: null, hazards: [...libraryEntry(slug).hazards] }));
+        .map(({ slug, ...at }) => ({ ...at, hazards: [...libraryEntry(slug).hazards] }));
       expect(
         answerHazards(findHazards(editions.at(-1)!.content), standing).filter((hazard) => !hazard.answered),
       ).toEqual([]);

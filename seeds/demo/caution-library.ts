@@ -56,7 +56,7 @@ export const demoCautionLibrary: readonly DemoLibraryCaution[] = [
     ['power-tool', 'dust'],
     'Flying chips, bursting cutters and a tool that grabs.',
     'Could blind you or cut to the bone; fine dust harms the lungs.',
-    'Wear eye protection and a dust mask. Clamp the work, never hold it in the hand. No gloves, loose sleeves or hair near the spindle. Let the cutter run up to speed, take light passes, and unplug before changing it.',
+    'Wear eye protection and a dust mask. Clamp the work, never hold it in the hand. Keep to the maker’s instructions. No gloves, loose sleeves or hair near the spindle. Let the cutter run up to speed, take light passes, and unplug before changing it.',
   ),
   entry(
     'blade',
@@ -110,7 +110,7 @@ export const demoCautionLibrary: readonly DemoLibraryCaution[] = [
     ['solvent'],
     'Vapour that burns and liquid that strips coatings and plastics.',
     'Could catch fire and burn you; could harm lungs and eyes.',
-    'No flame, heat or spark near it, open a window, wear gloves and eye protection, use drops on a cloth, and let all of it dry before power goes on. Keep it off lenses, paint and printed parts.',
+    'No flame, heat or spark near it, open a window, wear gloves and eye protection, use drops on a cloth, and let all of it dry before power goes on. Keep it off lenses, paint and printed parts, and dispose of it by local rules.',
   ),
   entry(
     'heat',
@@ -128,7 +128,7 @@ export const demoCautionLibrary: readonly DemoLibraryCaution[] = [
     ['heat'],
     'A heater at full power that lies double or is covered.',
     'Could burn skin, melt its cover and mark the tube.',
-    'Never overlap the heated length, feel it after five minutes indoors, and use the supply and fuse that its maker names.',
+    'Never overlap the heated length, feel it after five minutes indoors, and use the supply and fuse that its maker names. Leave mains supplies to a licensed person.',
   ),
   entry(
     'pinch',

@@ -1,5 +1,6 @@
 import type { EditionContent } from '../../shared/contract/edition-content.js';
 import type { HazardKind } from '../../shared/contract/vocabulary.js';
+import type { FoundHazard } from '../../shared/contract/moderation.js';
 import { answerHazards, findHazards } from '../../shared/safety/hazards.js';
 import { demoCautionLibrary } from './caution-library.js';
 import type { DemoContent } from './write-up-shape.js';
@@ -8,6 +9,8 @@ export interface PlannedCaution {
   readonly slug: string;
   /** Null: on the whole write-up. */
   readonly fixKey: string | null;
+  /** Null: on all of the fix. */
+  readonly stepKey: string | null;
 }
 
 /** What a moderator takes from the library for a hazard that nothing answers yet. */
@@ -44,19 +47,27 @@ export function planCautions(
   const seen = new Set<string>();
   return editions.map(({ content, told }, index) => {
     const before = placed.length;
-    const place = (slug: string, fixKey: string | null): void => {
-      if (!placed.some((item) => item.slug === slug && item.fixKey === fixKey)) placed.push({ slug, fixKey });
+    const place = (slug: string, fixKey: string | null, stepKey: string | null = null): void => {
+      const same = (item: PlannedCaution): boolean =>
+        item.slug === slug && item.fixKey === fixKey && item.stepKey === stepKey;
+      if (!placed.some(same)) placed.push({ slug, fixKey, stepKey });
     };
+    const open = (): FoundHazard[] =>
+      answerHazards(
+        findHazards(content),
+        placed.map(({ slug, ...at }) => ({ ...at, hazards: [...libraryEntry(slug).hazards] })),
+      ).filter((item) => !item.answered);
     if (index === 0) forWriteUp.forEach((slug) => place(slug, null));
     for (const fix of told.fixes.filter((item) => !seen.has(item.key))) {
       seen.add(fix.key);
       fix.cautions.forEach((slug) => place(slug, fix.key));
     }
-    const found = answerHazards(
-      findHazards(content),
-      placed.map(({ slug, fixKey }) => ({ fixKey, stepKey: null, hazards: [...libraryEntry(slug).hazards] })),
-    );
-    for (const hazard of found.filter((item) => !item.answered)) place(usual[hazard.hazard], hazard.fixKey);
+    for (let left = open(); left.length > 0; left = open()) {
+      const [first] = left as [FoundHazard];
+      const alike = left.filter((item) => item.hazard === first.hazard && item.fixKey === first.fixKey);
+      // One step alone names it: above that step, else above all of the fix.
+      place(usual[first.hazard], first.fixKey, alike.length === 1 ? first.stepKey : null);
+    }
     return placed.slice(before);
   });
 }

@@ -76,6 +76,13 @@ export async function seedCatalogue(knex: Knex, partPhotos: ReadonlyMap<string, 
       position,
     })),
   );
+  // Its history begins with what is there.
+  await knex.raw(`
+    INSERT INTO caution_library_versions
+      (library_id, version, \`change\`, name, signal_word, hazards, hazard, consequence, avoidance, changed_at, why)
+    SELECT id, version, 'added', name, signal_word, hazards, hazard, consequence, avoidance, UTC_TIMESTAMP(3), ''
+    FROM caution_library
+  `);
   return { parts, revisions, features, symptoms, cautions };
 }
 

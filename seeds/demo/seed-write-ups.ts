@@ -170,13 +170,14 @@ export async function seedWriteUps(
     }
 
     function addCautions(planned: readonly PlannedCaution[], at: Date): void {
-      for (const { slug, fixKey } of planned) {
+      for (const { slug, fixKey, stepKey } of planned) {
         const entry = libraryEntry(slug);
         const caution_id = cautionId();
         rows.cautions.push({
           id: caution_id,
           write_up_id: id,
           fix_id: fixKey === null ? null : known(fixIds, fixKey),
+          step_key: stepKey,
           library_id: known(catalogue.cautions, slug),
           signal_word: entry.signalWord,
           hazards: JSON.stringify(entry.hazards),
@@ -194,7 +195,7 @@ export async function seedWriteUps(
           subject_id: caution_id,
           subject_name: entry.hazard,
           reason: '',
-          details: JSON.stringify({ writeUpId: id, fixKey }),
+          details: JSON.stringify({ writeUpId: id, fixKey, ...(stepKey === null ? {} : { stepKey }) }),
         });
       }
     }
