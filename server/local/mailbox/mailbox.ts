@@ -7,6 +7,8 @@ export interface Mail {
   readonly text: string;
   readonly html: string | null;
   readonly headers: Readonly<Record<string, string>>;
+  /** Files that came with it, as base64. */
+  readonly attachments?: readonly { name: string; mediaType: string; base64: string }[];
   readonly receivedAt: string;
   /** How often it came: mails of one Message-ID to the same people are one mail (RFC 5322, 3.6.4). */
   readonly copies: number;

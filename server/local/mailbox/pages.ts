@@ -27,8 +27,19 @@ export function mailPage(mail: Mail): string {
     `<p><a href="/">All mail</a></p>
      <dl><dt>From</dt><dd>${escapeHtml(mail.from)}</dd><dt>To</dt><dd>${escapeHtml(mail.to.join(', '))}</dd></dl>
      <h2>As text</h2><pre>${withLinks(escapeHtml(mail.text))}</pre>${html}
+     ${attachmentList(mail)}
      <details><summary>Headers</summary><pre>${escapeHtml(headers.join('\n'))}</pre></details>`,
   );
+}
+
+/** Links from which a file is saved; none is opened in the page, for what is in it comes from others. */
+function attachmentList({ attachments = [] }: Mail): string {
+  if (attachments.length === 0) return '';
+  const items = attachments.map(
+    ({ name, base64 }) =>
+      `<li><a download="${escapeHtml(name)}" href="data:application/octet-stream;base64,${base64}">${escapeHtml(name)}</a></li>`,
+  );
+  return `<h2>Attached</h2><ul>${items.join('')}</ul>`;
 }
 
 export function escapeHtml(text: string): string {

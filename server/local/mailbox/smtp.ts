@@ -19,6 +19,11 @@ export function createSmtpServer(mailbox: Mailbox, clock: () => Date): SMTPServe
           text: mail.text ?? '',
           html: mail.html === false ? null : (mail.html ?? null),
           headers: headersOf(mail),
+          attachments: mail.attachments.map(({ filename, contentType, content }) => ({
+            name: filename ?? 'file',
+            mediaType: contentType,
+            base64: content.toString('base64'),
+          })),
           receivedAt: clock().toISOString(),
         });
         done();
