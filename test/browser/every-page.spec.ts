@@ -42,6 +42,13 @@ const pages: [path: string, role: string | null][] = [
   ['/write-ups/new', 'author'],
   ['/desk', 'moderator'],
   ['/admin/accounts', 'administrator'],
+  ['/admin/audit', 'administrator'],
+  ['/desk/cautions', 'moderator'],
+  ['/desk/cautions/1', 'moderator'],
+  ['/desk/cautions/1/history', 'moderator'],
+  ['/desk/members', 'moderator'],
+  ['/desk/members/1', 'administrator'],
+  ['/desk/write-ups/belt-bracket-lip-does-not-enter-the-m1-recess', 'moderator'],
 ];
 
 describe.each(Object.keys(viewports) as (keyof typeof viewports)[])('on a %s', (viewport) => {
