@@ -17,7 +17,12 @@ async function field() {
     input.dispatchEvent(new Event('change'));
     await fixture.whenStable();
   };
-  return { control, page, type };
+  const click = async (words: string): Promise<void> => {
+    await fixture.whenStable();
+    [...page.querySelectorAll('button')].find((button) => button.textContent.includes(words))!.click();
+    await fixture.whenStable();
+  };
+  return { control, page, type, click };
 }
 
 describe('a worksheet attached by its link', () => {
@@ -37,5 +42,27 @@ describe('a worksheet attached by its link', () => {
     expect(control.invalid).toBe(true);
     await type('');
     expect(control.valid).toBe(true);
+  });
+
+  it('when it comes out otherwise by now, then it is run again when asked, and the new result can be taken', async () => {
+    const { control, page, type, click } = await field();
+    await type('/worksheets/shim?v=1&gap=1.5');
+    const fresh = control.value!;
+    await click('Run it again');
+    expect(page.textContent).toContain('It comes out the same.');
+    const figures = fresh.result.figures.map((figure) => ({ ...figure, value: figure.value + 1 }));
+    const old = { ...fresh, result: { ...fresh.result, sentence: 'As it was.', figures } } as WorksheetRecord;
+    control.setValue(old);
+    await click('Run it again');
+    expect(page.textContent).toContain('It comes out otherwise by now');
+    await click('Take the new result');
+    expect(control.value).toEqual(fresh);
+  });
+
+  it('takes another link in the place of the worksheet it has', async () => {
+    const { control, type } = await field();
+    await type('/worksheets/shim?v=1&gap=1.5');
+    await type('/worksheets/shim?v=1&gap=2');
+    expect(control.value).toMatchObject({ kind: 'shim', inputs: { gap: 2 } });
   });
 });

@@ -6,6 +6,7 @@ import { worksheetOfLink } from '../../../../shared/fit/worksheet-link';
 import { redrawWith } from '../../core/redraw-with';
 import { wrongWith } from '../../core/told-fields';
 import { Undo } from '../undo/undo';
+import { WorksheetAgain } from './worksheet-again';
 
 /**
  * A worksheet attached by its link, which is run at once; what it comes to is shown before it is saved. A text that is no
@@ -13,7 +14,7 @@ import { Undo } from '../undo/undo';
  */
 @Component({
   selector: 'sl-worksheet-field',
-  imports: [ReactiveFormsModule],
+  imports: [ReactiveFormsModule, WorksheetAgain],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     <fieldset tabindex="-1" [id]="fieldId()">
@@ -21,30 +22,36 @@ import { Undo } from '../undo/undo';
       @if (control().value; as record) {
         <p>
           {{ record.result.sentence }}
-          <a [href]="addressOf(record)" target="_blank" rel="noopener">Open it</a>
+          <a [href]="addressOf(record)" target="_blank" rel="noopener">Open it with its figures</a>
         </p>
+        <sl-worksheet-again [record]="record" (taken)="take($event, record)" />
         <button type="button" class="sl-bare-button" (click)="remove(record)">Take the worksheet off</button>
+        <p class="sl-quiet">
+          For other figures open it, change them, copy its link and paste it here in its place.
+        </p>
       } @else {
         <p class="sl-quiet">
           {{ why() }} <a href="/worksheets" target="_blank" rel="noopener">To the worksheets</a>
         </p>
-        <div class="row">
-          <input
-            class="sl-field"
-            type="text"
-            inputmode="url"
-            maxlength="4000"
-            [attr.aria-label]="'Link of a worksheet'"
-            [attr.aria-describedby]="refusal() ? fieldId() + '-refusal' : null"
-            [formControl]="link"
-            (change)="attach()"
-            (keydown.enter)="$event.preventDefault(); attach()"
-          />
-          <button type="button" class="sl-plain-button" (click)="attach()">Attach</button>
-        </div>
-        @if (refusal(); as refusal) {
-          <p class="refusal" role="alert" [id]="fieldId() + '-refusal'">{{ refusal }}</p>
-        }
+      }
+      <div class="row">
+        <input
+          class="sl-field"
+          type="text"
+          inputmode="url"
+          maxlength="4000"
+          [attr.aria-label]="'Link of a worksheet'"
+          [attr.aria-describedby]="refusal() ? fieldId() + '-refusal' : null"
+          [formControl]="link"
+          (change)="attach()"
+          (keydown.enter)="$event.preventDefault(); attach()"
+        />
+        <button type="button" class="sl-plain-button" (click)="attach()">
+          {{ control().value ? 'Attach in its place' : 'Attach' }}
+        </button>
+      </div>
+      @if (refusal(); as refusal) {
+        <p class="refusal" role="alert" [id]="fieldId() + '-refusal'">{{ refusal }}</p>
       }
     </fieldset>
   `,
@@ -109,11 +116,19 @@ export class WorksheetField {
     this.link.markAsTouched();
     const read = this.link.value.trim() === '' ? null : worksheetOfLink(this.link.value.trim());
     if (read && 'record' in read) {
+      const before = this.control().value;
       this.link.reset();
-      this.control().setValue(read.record);
+      if (before) this.take(read.record, before);
+      else this.control().setValue(read.record);
     } else {
       this.control().updateValueAndValidity();
     }
+  }
+
+  /** Puts a worksheet in the place of the one before, with a way back. */
+  protected take(record: WorksheetRecord, before: WorksheetRecord): void {
+    this.control().setValue(record);
+    this.undo.offer('Another worksheet is attached', () => this.control().setValue(before));
   }
 
   protected remove(record: WorksheetRecord): void {
