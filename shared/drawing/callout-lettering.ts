@@ -6,6 +6,8 @@ export interface Lettering {
   readonly lines: readonly string[];
   readonly at: Place;
   readonly turn: number;
+  /** Width and height of the lines together, before the turn. */
+  readonly size: ShownSize;
   readonly taken: Taken;
 }
 
@@ -34,7 +36,7 @@ export function letteringOf(
   const wide = Math.max(...lines.map((one) => one.length)) * letter.width;
   const high = lines.length * letter.line;
   const wanted = placesFor(callout, size, wide, high).map(({ at, turn }): Lettering => {
-    return { lines, at, turn, taken: boxAround(at, wide, high, turn) };
+    return { lines, at, turn, size: { width: wide, height: high }, taken: boxAround(at, wide, high, turn) };
   });
   const fits = wanted.find(
     (one) => isInside(one.taken, size) && taken.every((other) => !overlap(one.taken, other)),
@@ -66,19 +68,23 @@ function around([x, y]: Place, room: number, wide: number, high: number): Spot[]
   ].map(([left, top]) => ({ at: [left!, top!], turn: 0 }));
 }
 
-/** At the tail of an arrow: behind it in its own direction, then round the tail. */
+/** At the tail of an arrow: behind it in its own direction, then on the side of the tail that is farthest from its way. */
 function behind(from: Place, to: Place, wide: number, high: number): Spot[] {
   const [ux, uy] = direction(from, to);
   const reach = Math.min(
     ux === 0 ? Infinity : (wide / 2 + clear) / Math.abs(ux),
     uy === 0 ? Infinity : (high / 2 + clear) / Math.abs(uy),
   );
-  return [{ at: [from[0] - ux * reach, from[1] - uy * reach], turn: 0 }, ...around(from, clear, wide, high)];
+  const ahead = ({ at }: Spot): number => (at[0] - from[0]) * ux + (at[1] - from[1]) * uy;
+  return [
+    { at: [from[0] - ux * reach, from[1] - uy * reach], turn: 0 },
+    ...around(from, clear, wide, high).sort((one, other) => ahead(one) - ahead(other)),
+  ];
 }
 
 /**
  * By ISO 129-1 a figure stands parallel to its dimension line, in the middle and just above it, to be read from below or
- * from the right. Where that does not fit: below the line, then level beside it and at its ends.
+ * from the right. One that is longer than its line stands level beside it instead.
  */
 function along(from: Place, to: Place, wide: number, high: number): Spot[] {
   const [ux, uy, length] = direction(from, to);
@@ -86,18 +92,15 @@ function along(from: Place, to: Place, wide: number, high: number): Spot[] {
   const turn = readable((Math.atan2(uy, ux) * 180) / Math.PI);
   const radians = (turn * Math.PI) / 180;
   const up: Place = [Math.sin(radians), -Math.cos(radians)];
-  // Text longer than its line would run through the extension lines that stand across it.
-  const off = (wide > length - 8 ? clear + 4 : 3) + high / 2;
-  const beside = ([1, -1] as const).map((side): Spot => ({
+  const off = 3 + high / 2;
+  const parallel = ([1, -1] as const).map((side): Spot => ({
     at: [middle[0] + side * up[0] * off, middle[1] + side * up[1] * off],
     turn,
   }));
-  return [
-    ...beside,
-    ...around(middle, clear + 4, wide, high),
-    ...around(to, clear + 4, wide, high),
-    ...around(from, clear + 4, wide, high),
-  ];
+  const [right, left, above, below] = around(middle, clear + 4, wide, high) as [Spot, Spot, Spot, Spot];
+  const level = Math.abs(uy) > Math.abs(ux) ? [right, left] : [above, below];
+  const elsewhere = [...around(to, clear + 14, wide, high), ...around(from, clear + 14, wide, high)];
+  return wide > length - 8 ? [...level, ...elsewhere] : [...parallel, ...level, ...elsewhere];
 }
 
 /** The same slope from −90° up to but without 90°, so that text on it is never upside down. Degrees. */

@@ -55,9 +55,9 @@ export const beltBracketWriteUps: readonly DemoWriteUp[] = [
       trimLip,
     ],
     drawings: [
-      drawing(seatSection({ ...lip, title: 'BELT BRACKET REV B ON M1 REV C' }), 'Section: the bracket’s lip of 22.5 mm stands on the rim of the motor’s recess of 19.5 mm; the overlap is marked in red.', 'As delivered: the lip stands on the rim.', [ring('carries-on-the-rim', 'carries here', [544, 318], 38), dimension('gap-under-the-plate', 'gap', [236, 281], [236, 318], 1.7)]),
-      drawing(seatSection({ ...lip, title: 'WITH COINS UNDER THE PLATE', shim: { thickness: 1.7, name: 'COINS' } }), 'Section: coins of 1.70 mm fill the gap between plate and motor outside the lip.', 'Coins carry the plate.', [arrow('clear-of-the-lip', 'clear of the lip', [700, 226], [561, 294]), ring('coin-one-of-three', 'one of three', [611, 299], 60)]),
-      drawing(tiltSection({ title: 'SCREWS PULLED DOWN ON ONE SIDE', gap: 1.7, span: 31, upper: 'BELT BRACKET', lower: 'MOTOR M1' }), 'Side view: the plate pivots on the rim, a gap of 1.70 mm over 31 mm makes 3.14 degrees.', 'What uneven screws do.'),
+      drawing(seatSection({ ...lip, title: 'BELT BRACKET REV B ON M1 REV C' }), 'Section: the bracket’s lip of 22.5 mm stands on the rim of the motor’s recess of 19.5 mm; the overlap is marked in red.', 'As delivered: the lip stands on the rim.', [ring('carries-on-the-rim', 'carries here', [544, 318], 38), dimension('across-the-lip', 'lip', [307, 300], [553, 300], 22.5)]),
+      drawing(seatSection({ ...lip, title: 'WITH COINS UNDER THE PLATE', shim: { thickness: 1.7, name: 'COINS' } }), 'Section: coins of 1.70 mm fill the gap between plate and motor outside the lip.', 'Coins carry the plate.', [ring('coin-one-of-three', 'one of three', [611, 299], 60)]),
+      drawing(tiltSection({ title: 'SCREWS PULLED DOWN ON ONE SIDE', gap: 1.7, span: 31, upper: 'BELT BRACKET', lower: 'MOTOR M1' }), 'Side view: the plate pivots on the rim, a gap of 1.70 mm over 31 mm makes 3.14 degrees.', 'What uneven screws do.', [arrow('opens-here', 'opens here', [560, 190], [652, 322])]),
     ],
     later: [
       edition('author', 520, 'Rev C of the bracket and Rev D of the motor measured; spread of the coins told.', (earlier) => ({

@@ -34,11 +34,20 @@ const widthBefore = 358;
       }
       @for (one of drawn(); track one.key) {
         @if (one.lettering; as lettering) {
-          <text [attr.class]="one.kind" [attr.transform]="standing(lettering)">
-            @for (line of lettering.lines; track $index) {
-              <tspan x="0" [attr.y]="baseline($index, lettering.lines.length)">{{ line }}</tspan>
-            }
-          </text>
+          <g [attr.transform]="standing(lettering)">
+            <rect
+              class="tag"
+              [attr.x]="-lettering.size.width / 2 - 3"
+              [attr.y]="-lettering.size.height / 2"
+              [attr.width]="lettering.size.width + 6"
+              [attr.height]="lettering.size.height"
+            />
+            <text [attr.class]="one.kind">
+              @for (line of lettering.lines; track $index) {
+                <tspan x="0" [attr.y]="baseline($index, lettering.lines.length)">{{ line }}</tspan>
+              }
+            </text>
+          </g>
         }
       }
     </svg>
@@ -94,10 +103,11 @@ const widthBefore = 358;
       font-variant-numeric: tabular-nums;
       text-anchor: middle;
       fill: var(--sl-accent);
-      stroke: var(--sl-paper);
-      stroke-width: 4;
-      stroke-linejoin: round;
-      paint-order: stroke;
+    }
+    /* Paper behind a figure, so that what is on the photo does not run through it. */
+    .tag {
+      fill: var(--sl-paper);
+      fill-opacity: 0.9;
     }
     text.dimension {
       fill: var(--sl-brass);

@@ -144,7 +144,7 @@ describe('drawing on a photo with finger, pen or mouse', () => {
 
   it('moves an end by a tap on it and a tap where it goes', async () => {
     await open([ring]);
-    await point(stage(), 'pointerdown', 400, 200);
+    await point(stage(), 'pointerdown', 480, 200);
     const centre = buttonNamed('Centre of ring “lip”');
     await point(centre, 'pointerdown', 400, 200);
     await point(centre, 'pointerup', 400, 200);

@@ -159,7 +159,9 @@ export class CalloutStage {
     // The photo below has keys of its own; only what closes and leaves goes on from here.
     if (event.key !== 'Escape' && event.key !== 'Tab') event.stopPropagation();
     if (key === null) return;
-    if (step) board.moveEnd({ key, end: end.name }, { x: end.at.x + step[0], y: end.at.y + step[1] });
+    // Keys can come faster than the page is drawn: what counts is where the end is now.
+    const at = this.ends().find(({ name }) => name === end.name)?.at;
+    if (step && at) board.moveEnd({ key, end: end.name }, { x: at.x + step[0], y: at.y + step[1] });
     else if (event.key === 'Delete') this.undo.offer('Taken off the photo', board.remove(key));
     else if (event.key !== 'Escape' || !board.giveUp()) return;
     event.preventDefault();
