@@ -16,7 +16,7 @@ export const watchStore = {
     const row = { account_id: watch.accountId, subject: watch.subject, subject_id: watch.id };
     const others: { count: number } | undefined = await trx('watches')
       .where({ account_id: watch.accountId })
-      .whereNot(row)
+      .whereNot((same) => same.where(row))
       .first(trx.raw('COUNT(*) AS count'));
     if (Number(others?.count ?? 0) >= mostWatches) return 'too-many';
     await trx('watches')

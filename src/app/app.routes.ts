@@ -15,6 +15,18 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./library/search-page').then((m) => m.SearchPage),
   },
   {
+    path: 'notices',
+    title: 'Notices',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./watches/notices-page').then((m) => m.NoticesPage),
+  },
+  {
+    path: 'my/watches',
+    title: 'What you watch',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./watches/my-watches-page').then((m) => m.MyWatchesPage),
+  },
+  {
     path: 'my/proposals',
     title: 'What you proposed',
     canActivate: [mustSignIn],

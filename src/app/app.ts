@@ -15,10 +15,11 @@ import { BenchStore } from './bench/bench-store';
 import { Session } from './core/session';
 import { Theme } from './core/theme';
 import { Icon } from './ui/icon/icon';
+import { UnreadNotices } from './watches/unread-notices';
 
 @Component({
   selector: 'sl-root',
-  imports: [RouterOutlet, RouterLink, RouterLinkActive, Icon],
+  imports: [RouterOutlet, RouterLink, RouterLinkActive, Icon, UnreadNotices],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './app.html',
   styleUrl: './app.scss',

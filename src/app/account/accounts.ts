@@ -49,8 +49,9 @@ export class Accounts {
     return this.api.call(accountRoutes.changeProfile, { body }).pipe(this.takeIn());
   }
 
-  unsubscribe(token: string): Observable<unknown> {
-    return this.api.call(accountRoutes.unsubscribe, { query: { token } });
+  /** Mails a link by which an address that mail came back from takes mail again. */
+  confirmAddressAgain(): Observable<unknown> {
+    return this.api.call(accountRoutes.confirmAddressAgain);
   }
 
   private takeIn() {

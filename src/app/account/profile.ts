@@ -9,10 +9,11 @@ import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
 import { LimitNote } from './limit-note';
+import { MailChoices } from './mail-choices';
 
 @Component({
   selector: 'sl-profile',
-  imports: [Field, Labelled, LimitNote, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [Field, Labelled, LimitNote, MailChoices, ProblemNote, ReactiveFormsModule, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: './account.scss',
   template: `
@@ -41,10 +42,6 @@ import { LimitNote } from './limit-note';
         <label><input type="radio" value="mm" formControlName="units" /> millimetres</label>
         <label><input type="radio" value="in" formControlName="units" /> inches</label>
       </fieldset>
-      <label class="check">
-        <input type="checkbox" formControlName="noticeMail" />
-        <span>Mail me when my editions are published or come back from the desk</span>
-      </label>
       @if (sending.problem(); as problem) {
         <sl-problem-note [problem]="problem" />
       }
@@ -53,6 +50,7 @@ import { LimitNote } from './limit-note';
         <span role="status">{{ saved() ? 'Saved.' : '' }}</span>
       </div>
     </form>
+    <sl-mail-choices />
     <p class="links">
       <a routerLink="/my/write-ups">My write-ups</a>
       <a routerLink="/account/forgotten">Change the password</a>
@@ -77,7 +75,6 @@ export class Profile {
       validators: [Validators.required, Validators.minLength(2)],
     }),
     units: new FormControl<'mm' | 'in'>(this.account?.units ?? 'mm', { nonNullable: true }),
-    noticeMail: new FormControl(this.account?.noticeMail ?? true, { nonNullable: true }),
   });
 
   protected save(): void {

@@ -21,6 +21,7 @@ import { Hardware } from '../hardware/hardware';
 import { Icon } from '../ui/icon/icon';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
+import { BenchWatchChoice } from '../watches/bench-watch-choice';
 import { BenchFitCheck } from './bench-fit-check';
 import { BenchStore } from './bench-store';
 import type { BenchEntry } from './browser-bench';
@@ -30,7 +31,7 @@ const pauseInTyping = 150;
 /** The parts one has, each with the revision once that is known. Works without an account. */
 @Component({
   selector: 'sl-bench-page',
-  imports: [BenchFitCheck, Icon, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [BenchFitCheck, BenchWatchChoice, Icon, ProblemNote, ReactiveFormsModule, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './bench-page.html',
   styleUrl: './bench-page.scss',

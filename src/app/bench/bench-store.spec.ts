@@ -26,6 +26,10 @@ const member: Account = {
   displayName: 'Odile',
   role: 'member',
   noticeMail: true,
+  mailRhythm: 'at-once',
+  safetyMail: true,
+  benchWatch: false,
+  mailRefusedAt: null,
   units: 'mm',
   createdAt: '2026-01-01T00:00:00Z',
 };

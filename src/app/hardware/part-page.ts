@@ -22,6 +22,7 @@ import { LoadStateView } from '../ui/load-state/load-state';
 import { PhotoView } from '../ui/photo/photo';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
+import { WatchButton } from '../watches/watch-button';
 import { CanonicalPart } from './canonical-part';
 import { Hardware } from './hardware';
 import { AnnouncedTools } from '../makers/announced-tools';
@@ -47,6 +48,7 @@ import { RevisionTimeLine } from './revision-time-line';
     RevisionTimeLine,
     RouterLink,
     WantedReadings,
+    WatchButton,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './part-page.html',

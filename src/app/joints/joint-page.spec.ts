@@ -98,6 +98,10 @@ describe('the page of a joint', () => {
       displayName: 'Mo',
       role: 'moderator',
       noticeMail: true,
+      mailRhythm: 'at-once',
+      safetyMail: true,
+      benchWatch: false,
+      mailRefusedAt: null,
       units: 'mm',
       createdAt: '2026-01-01T00:00:00Z',
     });

@@ -20,6 +20,7 @@ import { ShimloreTitles } from '../core/titles';
 import { Icon } from '../ui/icon/icon';
 import { JointDrawing } from '../ui/joint-drawing/joint-drawing';
 import { LoadStateView } from '../ui/load-state/load-state';
+import { WatchButton } from '../watches/watch-button';
 import { choosePair } from './choose-pair';
 import { drawingSource } from './drawing-source';
 import { FitTable } from './fit-table';
@@ -47,6 +48,7 @@ const pauseInTyping = 250;
     PairSheet,
     ReportForm,
     RouterLink,
+    WatchButton,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './joint-page.html',

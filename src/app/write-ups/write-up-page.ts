@@ -12,13 +12,16 @@ import { ShimloreTitles } from '../core/titles';
 import { redrawnWhile } from '../hardware/measurements/stay-while-loading';
 import { Joints } from '../joints/joints';
 import { MakerSide } from '../makers/maker-side';
+import { CoveredQuestions } from '../questions/covered-questions';
 import { Icon } from '../ui/icon/icon';
 import { LoadStateView } from '../ui/load-state/load-state';
+import { WatchButton } from '../watches/watch-button';
 import { EditionPage } from './edition-page/edition-page';
 import { JointHead } from './joint-head';
 import { writeUpData } from './structured-data';
 import { TitleBlock } from './title-block';
 import { TrialForm } from './trial-form';
+import { TellTheDesk } from '../ui/tell-the-desk/tell-the-desk';
 import { TrialList } from './trial-list';
 import { Verdict } from './verdict';
 import { WithdrawnNotice } from './withdrawn-notice';
@@ -28,6 +31,7 @@ import { WriteUps } from './write-ups';
 @Component({
   selector: 'sl-write-up-page',
   imports: [
+    CoveredQuestions,
     EditionPage,
     Icon,
     JointHead,
@@ -36,8 +40,10 @@ import { WriteUps } from './write-ups';
     RouterLink,
     TitleBlock,
     TrialForm,
+    TellTheDesk,
     TrialList,
     Verdict,
+    WatchButton,
     WithdrawnNotice,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,

@@ -25,6 +25,8 @@ const outlines = {
   up: 'M12 20V5M6 11l6-6 6 6',
   photo: 'M4 6h4l1.5-2h5L16 6h4v13H4zM12 9a3.5 3.5 0 1 0 0 7 3.5 3.5 0 0 0 0-7z',
   joint: 'M2 12h5v8h10v-8h5M9 3h6v13H9z',
+  watch: 'M4 11V4h7l9 9-7 7zM8 8h.01',
+  watching: 'M4 11V4h7l9 9-7 7zM8 8h.01M9.5 13l2 2 3.5-3.5',
   measure: 'M3 8h18v8H3zM7 8v4M11 8v3M15 8v4M19 8v3',
 } as const;
 
