@@ -25,7 +25,14 @@ export async function seedCatalogue(knex: Knex, partPhotos: ReadonlyMap<string, 
   await insertRows(
     knex,
     'makers',
-    demoMakers.map(({ slug, name, about }) => ({ id: makers.get(slug), slug, name, about })),
+    demoMakers.map(({ slug, name, about }) => ({
+      id: makers.get(slug),
+      slug,
+      name,
+      about,
+      mail_domain: `${slug}.example`,
+      contact_address: `workshop@${slug}.example`,
+    })),
   );
 
   const parts = await identified(knex, 'parts', demoParts);
