@@ -37,6 +37,8 @@ const pages: [path: string, role: string | null][] = [
   ['/joints/bracket-lip-in-m1-recess', null],
   ['/joints/ring-gear-past-the-focuser-clamp-screw', null],
   ['/compare', null],
+  ['/questions', null],
+  ['/questions/ask', 'owner'],
   ['/account/forgotten', null],
   ['/my/write-ups', 'author'],
   ['/write-ups/new', 'author'],

@@ -37,7 +37,7 @@ const sheet = worksheetAddress('seat', {
 describe('a member whose parts do not fit', () => {
   it('asks from the bench with a worksheet, is answered, and says which fix settled it', async () => {
     const asker = await openAs('owner');
-    await asker.visit('/questions/new');
+    await asker.visit('/questions/ask');
     await expectAccessible(asker.page);
     await asker.page.getByLabel('Title').fill('The belt bracket rocks on its lip');
     await asker.page.getByLabel('What happens').fill('It rocks about the lip, whatever I tighten.');

@@ -10,7 +10,7 @@ import {
   viewChild,
 } from '@angular/core';
 import { takeUntilDestroyed, toObservable, toSignal } from '@angular/core/rxjs-interop';
-import { ActivatedRoute, Router } from '@angular/router';
+import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import {
   Subject,
   combineLatest,
@@ -46,7 +46,7 @@ const pauseInTyping = 150;
 /** Results as one types. The address holds all that is asked; the bench decides what comes first. */
 @Component({
   selector: 'sl-search-page',
-  imports: [FilterPanel, Icon, ProblemNote, ResultLine, SymptomField],
+  imports: [FilterPanel, Icon, ProblemNote, ResultLine, RouterLink, SymptomField],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './search-page.html',
   styleUrl: './search-page.scss',

@@ -1,57 +1,63 @@
 import { ChangeDetectionStrategy, Component, computed, effect, inject, signal } from '@angular/core';
-import { takeUntilDestroyed, toSignal } from '@angular/core/rxjs-interop';
+import { takeUntilDestroyed, toObservable, toSignal } from '@angular/core/rxjs-interop';
 import { ReactiveFormsModule } from '@angular/forms';
-import { Router, RouterLink } from '@angular/router';
-import { catchError, debounceTime, map, of, switchMap } from 'rxjs';
+import { ActivatedRoute, Router, RouterLink } from '@angular/router';
+import { catchError, combineLatest, debounceTime, map, of, startWith, switchMap } from 'rxjs';
 import type { Symptom } from '../../../shared/contract/hardware';
-import {
-  Instrument,
-  ReadingUnit,
-  instrumentWords,
-  readingUnitSymbols,
-} from '../../../shared/contract/vocabulary';
+import { mostQuestionPhotos } from '../../../shared/contract/questions';
 import { BenchStore } from '../bench/bench-store';
 import { formSending } from '../core/form-sending';
 import { ShimloreTitles } from '../core/titles';
 import { Hardware } from '../hardware/hardware';
 import { Field, Labelled } from '../ui/labelled/labelled';
+import { PhotosField } from '../ui/new-photo/photos-field';
+import { photoIdsIn } from '../ui/new-photo/photos-form';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { WorksheetField } from '../ui/worksheet/worksheet-field';
-import { forgetTyped, keepTyped, questionForm, readingForm, restoreTyped } from './question-form';
+import { AlikePanel } from './alike-panel';
+import { AlikeSearch, nothingAlike, type Alike } from './alike-search';
+import { forgetTyped, keepTyped, questionForm, readingsIn, restoreTyped } from './question-form';
 import { Questions } from './questions';
+import { ReadingsFields } from './readings-fields';
 
-const mostReadings = 20;
 /** As long as a pause in typing. */
-const pause = 300;
+const pause = 400;
 const fewestLetters = 4;
 
-/** A new question; it starts from the parts and revisions on the bench, all ticked. */
+/**
+ * A new question; it starts from the parts and revisions on the bench, all ticked. While it is written, what may answer
+ * it already stands beside it; nothing of that has to come before it can be sent.
+ */
 @Component({
   selector: 'sl-ask-page',
-  imports: [Field, Labelled, ProblemNote, ReactiveFormsModule, RouterLink, WorksheetField],
+  imports: [
+    AlikePanel,
+    Field,
+    Labelled,
+    PhotosField,
+    ProblemNote,
+    ReactiveFormsModule,
+    ReadingsFields,
+    RouterLink,
+    WorksheetField,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './ask-page.html',
   styleUrl: './ask-page.scss',
 })
 export class AskPage {
   private readonly questions = inject(Questions);
+  private readonly search = inject(AlikeSearch);
   private readonly router = inject(Router);
   private readonly bench = inject(BenchStore);
   private readonly unticked = signal<ReadonlySet<number>>(new Set());
   protected readonly form = questionForm();
   protected readonly sending = formSending();
-  protected readonly mostReadings = mostReadings;
-  protected readonly units = ReadingUnit.options.map((value) => ({
-    value,
-    words: readingUnitSymbols[value],
-  }));
-  protected readonly instruments = Instrument.options.map((value) => ({
-    value,
-    words: instrumentWords[value],
-  }));
+  protected readonly mostPhotos = mostQuestionPhotos;
   protected readonly parts = computed(() =>
     this.bench.items().map((entry) => ({ ...entry, ticked: !this.unticked().has(entry.id) })),
   );
+  private readonly ticked = computed(() => this.parts().filter((entry) => entry.ticked));
   protected readonly symptoms = toSignal(
     inject(Hardware)
       .symptoms()
@@ -61,21 +67,36 @@ export class AskPage {
       ),
     { initialValue: [] },
   );
-  /** Published write-ups that may answer it already. */
   protected readonly alike = toSignal(
-    this.form.controls.title.valueChanges.pipe(
+    combineLatest([
+      this.form.valueChanges.pipe(
+        startWith(null),
+        map(() => this.written()),
+      ),
+      toObservable(this.ticked),
+    ]).pipe(
       debounceTime(pause),
-      switchMap((title) =>
-        title.trim().length < fewestLetters
-          ? of([])
-          : this.questions.writeUpsLike(title).pipe(catchError(() => of([]))),
+      switchMap(([words, parts]) =>
+        this.search.find({ words, parts }).pipe(catchError(() => of<Alike>(nothingAlike))),
       ),
     ),
-    { initialValue: [] },
+    { initialValue: nothingAlike },
   );
+  /** How much was found, for a screen on which it does not stand beside the form. */
+  protected readonly told = computed(() => {
+    const { places, writeUps, questions } = this.alike();
+    const counted = [
+      counting(places.length, 'joint'),
+      counting(writeUps.length, 'write-up'),
+      counting(questions.length, 'question'),
+    ].filter((words) => words !== '');
+    return counted.length === 0 ? '' : `Like it: ${counted.join(', ')}`;
+  });
 
   constructor() {
     restoreTyped(this.form);
+    const asked = inject(ActivatedRoute).snapshot.queryParamMap.get('title');
+    if (asked) this.form.controls.title.setValue(asked.slice(0, 140));
     this.form.valueChanges.pipe(takeUntilDestroyed()).subscribe(() => keepTyped(this.form));
     const titles = inject(ShimloreTitles);
     effect(() => titles.describe({ title: 'Ask' }));
@@ -95,15 +116,12 @@ export class AskPage {
     field.setValue(before.includes(slug) ? before.filter((other) => other !== slug) : [...before, slug]);
   }
 
-  protected addReading(): void {
-    this.form.controls.readings.push(readingForm());
-  }
-
   protected send(): void {
-    const { title, text, worksheet, readings, symptoms } = this.form.getRawValue();
-    const parts = this.parts()
-      .filter((entry) => entry.ticked)
-      .map((entry) => ({ partId: entry.part.id, revisionId: entry.revision?.id ?? null }));
+    const { title, text, worksheet, symptoms } = this.form.getRawValue();
+    const parts = this.ticked().map((entry) => ({
+      partId: entry.part.id,
+      revisionId: entry.revision?.id ?? null,
+    }));
     this.sending.send(
       this.form,
       () =>
@@ -112,8 +130,9 @@ export class AskPage {
           text,
           parts,
           symptoms: [...symptoms],
-          readings: readings.map((reading) => ({ ...reading, value: reading.value! })),
+          readings: readingsIn(this.form.controls.readings),
           worksheet,
+          photos: photoIdsIn(this.form.controls.photos),
         }),
       (question) => {
         forgetTyped();
@@ -121,4 +140,16 @@ export class AskPage {
       },
     );
   }
+
+  /** The words so far; none while there are too few to go by. */
+  private written(): string {
+    const { title, text } = this.form.getRawValue();
+    const words = `${title} ${text}`.trim();
+    return words.length < fewestLetters ? '' : words;
+  }
+}
+
+function counting(count: number, what: string): string {
+  if (count === 0) return '';
+  return count === 1 ? `one ${what}` : `${count} ${what}s`;
 }

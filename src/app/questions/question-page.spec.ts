@@ -29,6 +29,9 @@ const rocking: QuestionPage = {
   symptoms: [],
   readings: [{ dimension: 'lip diameter', value: 32.1, unit: 'mm', instrument: 'caliper' }],
   worksheet: null,
+  photos: [],
+  changedAt: null,
+  writeUps: [],
   replies: [],
   takenDown: null,
 };

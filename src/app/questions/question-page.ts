@@ -18,28 +18,38 @@ import { loadEach } from '../core/load';
 import { Session } from '../core/session';
 import { ShimloreTitles } from '../core/titles';
 import { LoadStateView } from '../ui/load-state/load-state';
+import { PhotoStrip } from '../ui/photo/photo-strip';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { RichTextView } from '../ui/rich-text/rich-text';
+import { TellTheDesk } from '../ui/tell-the-desk/tell-the-desk';
 import { TakenDownNote } from '../ui/taken-down-note/taken-down-note';
+import { WorksheetNote } from '../ui/worksheet/worksheet-note';
+import { WatchButton } from '../watches/watch-button';
+import { ChangeQuestion } from './change-question';
 import { QuestionParts } from './question-parts';
 import { Questions } from './questions';
 import { ReplyForm } from './reply-form';
+import { ReplyItem } from './reply-item';
 import { SettleForm } from './settle-form';
-import { WorksheetNote } from '../ui/worksheet/worksheet-note';
 
 /** One question: its parts and readings first, then the words, then what others say. */
 @Component({
   selector: 'sl-question-page',
   imports: [
+    ChangeQuestion,
     DatePipe,
     LoadStateView,
+    PhotoStrip,
     ProblemNote,
     QuestionParts,
     ReplyForm,
+    ReplyItem,
     RichTextView,
     RouterLink,
     SettleForm,
     TakenDownNote,
+    WatchButton,
+    TellTheDesk,
     WorksheetNote,
   ],
   changeDetection: ChangeDetectionStrategy.OnPush,
@@ -61,6 +71,12 @@ export class QuestionPageView {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
   });
+  protected readonly changing = signal(false);
+  protected readonly photos = computed(() =>
+    (this.question()?.photos ?? []).map((photo) => ({ photo, caption: '' })),
+  );
+  /** The address of a question ends in its identity. */
+  protected readonly idIn = (slug: string): number => Number(slug.slice(slug.lastIndexOf('-') + 1));
   protected readonly isAsker = computed(
     () => this.question()?.person.id === this.session.account()?.id && this.session.account() !== null,
   );
@@ -77,6 +93,21 @@ export class QuestionPageView {
 
   protected replied(reply: Reply): void {
     this.question.update((before) => before && { ...before, replies: [...before.replies, reply] });
+  }
+
+  protected replyChanged(reply: Reply): void {
+    this.question.update(
+      (before) =>
+        before && {
+          ...before,
+          replies: before.replies.map((other) => (other.id === reply.id ? reply : other)),
+        },
+    );
+  }
+
+  protected changed(question: QuestionPage): void {
+    this.changing.set(false);
+    this.question.set(question);
   }
 
   protected settled(question: QuestionPage): void {

@@ -2,10 +2,12 @@ import { DatePipe } from '@angular/common';
 import { ChangeDetectionStrategy, Component, computed, effect, inject } from '@angular/core';
 import { toSignal } from '@angular/core/rxjs-interop';
 import { ActivatedRoute, Router, RouterLink } from '@angular/router';
-import { map } from 'rxjs';
+import { catchError, map, of } from 'rxjs';
+import type { PartSummary } from '../../../shared/contract/hardware';
 import type { QuestionLine } from '../../../shared/contract/questions';
 import { loadEach } from '../core/load';
 import { ShimloreTitles } from '../core/titles';
+import { Hardware } from '../hardware/hardware';
 import { LoadStateView } from '../ui/load-state/load-state';
 import { Questions } from './questions';
 
@@ -24,11 +26,13 @@ export class QuestionsPage {
   private readonly query = toSignal(this.route.queryParamMap, { requireSync: true });
 
   protected readonly part = computed(() => this.query().get('part'));
+  protected readonly words = computed(() => this.query().get('q') ?? '');
   protected readonly open = computed(() => openIn(this.query().get('open')));
   protected readonly loaded = loadEach(
     this.route.queryParamMap.pipe(
       map((params) => ({
         part: params.get('part') ?? undefined,
+        q: params.get('q')?.trim().slice(0, 200) || undefined,
         open: openIn(params.get('open')),
         cursor: params.get('cursor') ?? undefined,
       })),
@@ -39,17 +43,21 @@ export class QuestionsPage {
     const now = this.loaded();
     return now.state === 'ready' ? now.value : null;
   });
-  /** Name of the part that the list is narrowed to. */
-  protected readonly partName = computed(() => {
-    const parts = (this.page()?.items ?? []).flatMap((item) => item.parts);
-    return parts.find((item) => item.part.slug === this.part())?.part.name ?? this.part();
-  });
-  /** Parts of the questions shown, to narrow the list to. */
+  /** Every part of the catalogue that the list can be narrowed to; while they are not known, the one of the address. */
+  private readonly parts = toSignal(
+    inject(Hardware)
+      .parts({ limit: 100 })
+      .pipe(
+        map(({ items }) => items),
+        catchError(() => of<PartSummary[]>([])),
+      ),
+    { initialValue: [] },
+  );
   protected readonly choices = computed(() => {
-    const parts = (this.page()?.items ?? []).flatMap((item) => item.parts.map(({ part }) => part));
-    return [...new Map(parts.map((part) => [part.slug, part])).values()].sort((one, other) =>
-      one.name.localeCompare(other.name, 'en'),
-    );
+    const parts = this.parts().map(({ slug, name, maker }) => ({ slug, name: `${name}, ${maker.name}` }));
+    const asked = this.part();
+    if (asked === null || parts.some(({ slug }) => slug === asked)) return parts;
+    return [{ slug: asked, name: asked }, ...parts];
   });
 
   constructor() {
@@ -63,7 +71,7 @@ export class QuestionsPage {
     );
   }
 
-  protected ask(change: { part?: string; open?: string }): void {
+  protected ask(change: { q?: string; part?: string; open?: string }): void {
     const queryParams = Object.fromEntries(
       Object.entries({ ...change, cursor: '' }).map(([name, value]) => [name, value || null]),
     );

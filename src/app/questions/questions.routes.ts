@@ -9,7 +9,7 @@ export const routes: Routes = [
     loadComponent: () => import('./questions-page').then((m) => m.QuestionsPage),
   },
   {
-    path: 'new',
+    path: 'ask',
     title: 'Ask',
     canActivate: [mustSignIn],
     loadComponent: () => import('./ask-page').then((m) => m.AskPage),

@@ -1,104 +1,56 @@
-import { ChangeDetectionStrategy, Component, inject, input, output, signal } from '@angular/core';
-import { finalize } from 'rxjs';
+import {
+  ChangeDetectionStrategy,
+  Component,
+  computed,
+  inject,
+  input,
+  output,
+  signal,
+  viewChild,
+} from '@angular/core';
+import { toSignal } from '@angular/core/rxjs-interop';
+import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import type { Problem } from '../../../shared/contract/problem';
-import type { QuestionPage } from '../../../shared/contract/questions';
+import type { QuestionPage, WriteUpRef } from '../../../shared/contract/questions';
+import type { EditionView } from '../../../shared/contract/write-ups';
 import { toApiProblem } from '../core/api-problem';
+import { formSending } from '../core/form-sending';
 import { ProblemNote } from '../ui/problem-note/problem-note';
+import { TrialFields, trialFieldsForm } from '../write-ups/trial-fields';
 import { WriteUps } from '../write-ups/write-ups';
 import { Questions } from './questions';
 
-interface Found {
-  readonly slug: string;
-  readonly title: string;
-}
-
-/** The asker names the fix that helped: a write-up is searched for, then one of its fixes is chosen. */
+/**
+ * The asker names the fix that helped and, if they wish, tells of their trial of it in the same step: a write-up is chosen
+ * among those on the parts or searched for, then one of its fixes.
+ */
 @Component({
   selector: 'sl-settle-form',
-  imports: [ProblemNote],
+  imports: [ProblemNote, ReactiveFormsModule, TrialFields],
   changeDetection: ChangeDetectionStrategy.OnPush,
-  template: `
-    <section class="sl-section">
-      <h2>This settled it</h2>
-      <form
-        role="search"
-        aria-label="Find the write-up"
-        (submit)="$event.preventDefault(); find(words.value)"
-      >
-        <label for="settle-words">Which write-up helped?</label>
-        <input #words id="settle-words" class="sl-field" type="search" maxlength="200" />
-        <button type="submit" class="sl-plain-button">Find</button>
-      </form>
-      <div role="status">
-        @if (found(); as found) {
-          @if (!found.length) {
-            <p>No write-up is like that. Try other words.</p>
-          }
-        }
-      </div>
-      <ul class="sl-plain-list">
-        @for (writeUp of found(); track writeUp.slug) {
-          <li>
-            <button type="button" class="sl-bare-button" (click)="choose(writeUp)">
-              {{ writeUp.title }}
-            </button>
-          </li>
-        }
-      </ul>
-      @if (chosen(); as chosen) {
-        <fieldset>
-          <legend>Which fix of “{{ chosen.title }}” settled it?</legend>
-          @for (fix of chosen.fixes; track fix.key) {
-            <button
-              type="button"
-              class="sl-plain-button"
-              [disabled]="busy()"
-              (click)="settle(chosen.slug, fix.key)"
-            >
-              {{ fix.title }}
-            </button>
-          }
-        </fieldset>
-      }
-      <sl-problem-note [problem]="problem()" />
-    </section>
-  `,
-  styles: `
-    form {
-      display: grid;
-      gap: 0.5rem;
-      justify-items: start;
-      max-inline-size: var(--sl-measure);
-    }
-    label,
-    legend {
-      font-weight: 600;
-    }
-    fieldset {
-      display: flex;
-      flex-wrap: wrap;
-      gap: 0.75rem;
-      border: 0;
-      padding: 0;
-      margin: 0.75rem 0 0;
-      min-inline-size: 0;
-    }
-    li button {
-      text-align: start;
-    }
-  `,
+  templateUrl: './settle-form.html',
+  styleUrl: './settle-form.scss',
 })
 export class SettleForm {
   readonly slug = input.required<string>();
+  /** Write-ups that are offered before anything is searched for. */
+  readonly near = input<readonly WriteUpRef[]>([]);
   readonly settled = output<QuestionPage>();
   private readonly questions = inject(Questions);
   private readonly writeUps = inject(WriteUps);
-  protected readonly found = signal<readonly Found[] | null>(null);
-  protected readonly chosen = signal<
-    (Found & { readonly fixes: readonly { key: string; title: string }[] }) | null
-  >(null);
-  protected readonly busy = signal(false);
+  private readonly trialFields = viewChild(TrialFields);
+  protected readonly found = signal<readonly WriteUpRef[] | null>(null);
+  protected readonly offers = computed(() => this.found() ?? this.near());
+  protected readonly chosen = signal<(WriteUpRef & { readonly view: EditionView }) | null>(null);
   protected readonly problem = signal<Problem | null>(null);
+  protected readonly sending = formSending();
+  protected readonly form = new FormGroup({
+    fixKey: new FormControl('', { nonNullable: true, validators: [Validators.required] }),
+    withTrial: new FormControl(false, { nonNullable: true }),
+    trial: trialFieldsForm(),
+  });
+  protected readonly fixKey = toSignal(this.form.controls.fixKey.valueChanges, { initialValue: '' });
+  protected readonly withTrial = toSignal(this.form.controls.withTrial.valueChanges, { initialValue: false });
 
   protected find(words: string): void {
     this.chosen.set(null);
@@ -109,23 +61,30 @@ export class SettleForm {
     });
   }
 
-  protected choose(writeUp: Found): void {
+  protected choose(writeUp: WriteUpRef): void {
     this.problem.set(null);
     this.writeUps.read(writeUp.slug).subscribe({
-      next: ({ view }) => this.chosen.set({ ...writeUp, fixes: view.fixes }),
+      next: ({ view }) => {
+        this.form.controls.fixKey.setValue(view.fixes[0]?.key ?? '');
+        this.chosen.set({ ...writeUp, view });
+      },
       error: (error: unknown) => this.problem.set(toApiProblem(error).problem),
     });
   }
 
-  protected settle(writeUpSlug: string, fixKey: string): void {
-    this.busy.set(true);
-    this.problem.set(null);
-    this.questions
-      .settle(this.slug(), { writeUpSlug, fixKey })
-      .pipe(finalize(() => this.busy.set(false)))
-      .subscribe({
-        next: (question) => this.settled.emit(question),
-        error: (error: unknown) => this.problem.set(toApiProblem(error).problem),
-      });
+  protected settle(writeUpSlug: string): void {
+    const { fixKey } = this.form.getRawValue();
+    this.sending.send(
+      this.form,
+      () => this.questions.settle(this.slug(), { writeUpSlug, fixKey, trial: this.trial() }),
+      (question) => this.settled.emit(question),
+    );
+  }
+
+  private trial(): Omit<ReturnType<TrialFields['report']>, 'fixKey'> | null {
+    const report = this.withTrial() ? this.trialFields()?.report() : undefined;
+    if (!report) return null;
+    const { fixKey: _, ...trial } = report;
+    return trial;
   }
 }

@@ -24,7 +24,7 @@ import type { WithdrawalNotice } from '../../../shared/contract/withdrawal';
     } @else {
       <p>
         <a routerLink="/search">Search for the symptom</a> or
-        <a routerLink="/questions/new">ask about your parts</a>.
+        <a routerLink="/questions/ask">ask about your parts</a>.
       </p>
     }
     @if (notice().mayReadHistory) {
