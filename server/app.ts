@@ -10,6 +10,7 @@ import { createAuditReader } from './audit/audit-reader.js';
 import { createBench } from './bench/bench.js';
 import { createCautionLibrary } from './caution-library/caution-library.js';
 import type { Settings } from './config.js';
+import { createDeletion } from './deletion/deletion.js';
 import { createExport } from './export/export.js';
 import { createHardware } from './hardware/hardware.js';
 import { createCsrf } from './http/csrf.js';
@@ -226,6 +227,16 @@ export function createApp(around: Surroundings): Composition {
     writeUps: writeUps.service,
   });
   const auditReader = createAuditReader({ knex, clock });
+  const deletion = createDeletion({
+    knex,
+    clock,
+    logger,
+    leaving: accounts.leaving,
+    mail: mail.queue,
+    limits,
+    audit,
+    photos: photos.service,
+  });
   const ownData = createExport({ knex, clock, limits, photos: photos.service });
   const system = createSystem({
     knex,
@@ -258,6 +269,7 @@ export function createApp(around: Surroundings): Composition {
     ...worksheets.bindings,
     ...questions.bindings,
     ...ownData.bindings,
+    ...deletion.bindings,
   ];
 
   const app = express();
@@ -278,7 +290,13 @@ export function createApp(around: Surroundings): Composition {
   app.use(nothingHere, problemHandler);
   return {
     app,
-    workers: [mail.worker, ...watches.workers, search.worker, sessionSweeper({ knex, clock, logger })],
+    workers: [
+      mail.worker,
+      ...watches.workers,
+      search.worker,
+      deletion.worker,
+      sessionSweeper({ knex, clock, logger }),
+    ],
   };
 }
 

@@ -15,6 +15,7 @@ export function accountView(account: StoredAccount): Account {
     mailRefusedAt: account.mailRefusedAt?.toISOString() ?? null,
     units: account.units,
     createdAt: account.createdAt.toISOString(),
+    deletionAt: account.deletionAt?.toISOString() ?? null,
   };
 }
 

@@ -17,6 +17,8 @@ export interface StoredAccount {
   readonly mailRefusedAt: Date | null;
   readonly units: Account['units'];
   readonly createdAt: Date;
+  /** When it goes, as its owner asked; null: it stays. */
+  readonly deletionAt: Date | null;
 }
 
 interface AccountRecord {
@@ -33,6 +35,7 @@ interface AccountRecord {
   mail_refused_at: Date | null;
   units: Account['units'];
   created_at: Date;
+  deletion_at: Date | null;
 }
 
 const columns = [
@@ -49,6 +52,7 @@ const columns = [
   'mail_refused_at',
   'units',
   'created_at',
+  'deletion_at',
 ];
 
 /**
@@ -160,6 +164,7 @@ function toStored(record: AccountRecord | undefined): StoredAccount | undefined 
       mailRefusedAt: record.mail_refused_at,
       units: record.units,
       createdAt: record.created_at,
+      deletionAt: record.deletion_at,
     }
   );
 }

@@ -4,6 +4,7 @@ import type { Csrf } from '../http/csrf.js';
 import { createAuthenticator, type Authenticator } from '../http/session.js';
 import { bindAccountRoutes } from './accounts.routes.js';
 import { createEntryService, type EntryDependencies } from './entry.service.js';
+import { createLeaving, type Leaving } from './leaving.js';
 import { createLocalStrategy } from './local-strategy.js';
 import { createMakerRole, type MakerRole } from './maker-role.js';
 import { createPeopleService } from './people.service.js';
@@ -13,6 +14,7 @@ export interface Accounts {
   /** Knows who a request comes from; sessions are built on it. */
   readonly authenticator: Authenticator;
   readonly makerRole: MakerRole;
+  readonly leaving: Leaving;
 }
 
 export function createAccounts(needs: EntryDependencies & { csrf: Csrf; audit: AuditLog }): Accounts {
@@ -26,5 +28,6 @@ export function createAccounts(needs: EntryDependencies & { csrf: Csrf; audit: A
     bindings: bindAccountRoutes({ entry, people, authenticator, csrf: needs.csrf }),
     authenticator,
     makerRole: createMakerRole(needs),
+    leaving: createLeaving(),
   };
 }

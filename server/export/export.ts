@@ -19,6 +19,7 @@ export function createExport(needs: {
       bind(exportRoutes.exportOwnData, async ({ caller, request, response }) => {
         const { archive, createdAt } = await service.openArchive(memberOf(caller).accountId);
         response
+          .set('Cache-Control', 'private, no-store')
           .type('application/zip')
           .attachment(`shimlore-own-data-${createdAt.toISOString().slice(0, 10)}.zip`);
         try {

@@ -3,6 +3,7 @@ import { createDeskMail, type DeskWords } from './desk-mail.js';
 import { htmlOf, subjectOf, textOf, type Letter } from './letter.js';
 import type { Letters } from './letters.js';
 import { addMail, countMails } from './mail-outbox.store.js';
+import { createLeavingMail, type LeavingMail } from './leaving-mail.js';
 import { createLimitMail, type LimitMail } from './limit-mail.js';
 import { createMakerMail, type MakerMail } from './maker-mail.js';
 import { noticeRecipient, type Recipient } from './recipients.store.js';
@@ -20,7 +21,7 @@ interface AccountLetter {
  * Puts mails into the outbox, within the transaction whose outcome they tell of: they are sent when it is committed
  * and never when it is not.
  */
-export interface MailQueue extends MakerMail, DeskWords, LimitMail {
+export interface MailQueue extends MakerMail, DeskWords, LimitMail, LeavingMail {
   queueEditionPublished(
     trx: Knex,
     edition: { authorId: number; editionId: number; number: number; title: string; slug: string },
@@ -103,6 +104,7 @@ export function createMailQueue(needs: { letters: Letters; secret: string; clock
 
   return {
     ...createDeskMail({ page: letters.page, queueNotice }),
+    ...createLeavingMail({ page: letters.page, queueAccountMail }),
     ...createLimitMail({ page: letters.page, queueAccountMail }),
     ...createMakerMail({ clock, page: letters.page, queueAccountMail, queueNotice }),
 

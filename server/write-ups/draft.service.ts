@@ -203,10 +203,10 @@ export function createDraftService({
     return new EditionOvertaken(await reader.mergeGround(await reader.ownEdition(caller, id)));
   }
 
-  /** Tells the authors of a published write-up, and nobody else, that somebody proposes an edition of it. */
+  /** Tells those to whom a published write-up belongs, and nobody else, that somebody proposes an edition of it. */
   async function tellOwners(trx: Knex, edition: EditionRow): Promise<void> {
-    const authors = await published.authorIds(trx, edition.writeUpId);
-    const owners = authors.filter((accountId) => accountId !== edition.authorId);
+    const keepers = await published.keeperIds(trx, edition.writeUpId);
+    const owners = keepers.filter((accountId) => accountId !== edition.authorId);
     if (owners.length === 0) return;
     await happenings.add(trx, {
       kind: 'edition-proposed',

@@ -43,8 +43,9 @@ export function createPageService({
     async readWriteUp(caller: Caller, slug: string): Promise<WriteUpPage> {
       const writeUp = await published.withContent(slug);
       if (!writeUp) throw await withdrawals.missing(caller, slug);
-      const [editions, view, reported, myDraftId] = await Promise.all([
+      const [editions, keepers, view, reported, myDraftId] = await Promise.all([
         published.editionsOf(writeUp.id),
+        published.keeperIds(knex, writeUp.id),
         views.viewOf(writeUp.content, writeUp.id),
         trials.trialsOf(writeUp.id, caller),
         caller.accountId === null ? undefined : drafts.openEditionOf(knex, writeUp.id, caller.accountId),
@@ -59,7 +60,7 @@ export function createPageService({
         authors,
         view,
         trials: reported,
-        mayEdit: isModerator(caller) || authors.some((author) => author.id === caller.accountId),
+        mayEdit: isModerator(caller) || keepers.some((id) => id === caller.accountId),
         myDraftId: myDraftId ?? null,
       };
     },

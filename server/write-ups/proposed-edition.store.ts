@@ -27,7 +27,7 @@ export type ProposedEditionStore = ReturnType<typeof createProposedEditionStore>
 
 /** Editions on the desk as the authors of their write-ups see them, and what those tell the desk. */
 export function createProposedEditionStore(knex: Knex) {
-  /** Editions that wait on the desk, by others, on write-ups of which the reader wrote a published edition. */
+  /** Editions that wait on the desk, by others, on write-ups of which the reader wrote a published edition or looks after. */
   const proposedTo = (readerId: number) =>
     knex('editions as e')
       .join('write_ups as w', 'w.id', 'e.write_up_id')
@@ -39,11 +39,13 @@ export function createProposedEditionStore(knex: Knex) {
       .where('e.state', 'submitted')
       .whereNotNull('w.published_edition_id')
       .whereNot('e.author_id', readerId)
-      .whereExists(
-        knex('editions as own')
-          .where('own.write_up_id', knex.ref('e.write_up_id'))
-          .where({ 'own.author_id': readerId, 'own.state': 'published' })
-          .select(knex.raw('1')),
+      .where((belongs) =>
+        belongs.where('w.created_by', readerId).orWhereExists(
+          knex('editions as own')
+            .where('own.write_up_id', knex.ref('e.write_up_id'))
+            .where({ 'own.author_id': readerId, 'own.state': 'published' })
+            .select(knex.raw('1')),
+        ),
       )
       .select('w.slug', 'e.title', 'o.agrees', 'o.line', 'o.at', {
         editionId: 'e.id',

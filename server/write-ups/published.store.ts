@@ -88,5 +88,14 @@ export function createPublishedStore(knex: Knex) {
         .distinct()
         .pluck('author_id');
     },
+
+    /** Those it belongs to: the authors, and whoever looks after it since its author has left. */
+    async keeperIds(db: Knex, writeUpId: number): Promise<number[]> {
+      const [authors, keepers] = await Promise.all([
+        this.authorIds(db, writeUpId),
+        db('write_ups').where('id', writeUpId).pluck('created_by'),
+      ]);
+      return [...new Set([...authors, ...keepers])];
+    },
   };
 }

@@ -33,6 +33,8 @@ export const Account = z.object({
   mailRefusedAt: Instant.nullable(),
   units: z.enum(['mm', 'in']),
   createdAt: Instant,
+  /** When it is deleted, as its owner asked; null: it stays. */
+  deletionAt: Instant.nullable(),
 });
 export type Account = z.infer<typeof Account>;
 

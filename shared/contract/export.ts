@@ -185,6 +185,14 @@ export const OwnData = z.strictObject({
   opinions: rows({ edition: z.string(), agrees: z.boolean(), line: z.string(), at: Instant }),
   watches: rows({ kind: z.string(), name: z.string().nullable(), since: Instant }),
   notices: rows({ title: z.string(), path: z.string(), because: z.string(), at: Instant, readAt: When }),
+  /** What they told the desk of, and what came of it. */
+  flags: rows({
+    about: z.string(),
+    ground: z.string(),
+    line: z.string(),
+    outcome: z.string(),
+    createdAt: Instant,
+  }),
   handOversOffered: rows({
     to: z.string(),
     state: z.string(),

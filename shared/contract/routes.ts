@@ -1,6 +1,7 @@
 import { accountRoutes } from './accounts.js';
 import { auditRoutes } from './audit.js';
 import { cautionLibraryRoutes } from './caution-library.js';
+import { deletionRoutes } from './deletion.js';
 import { exportRoutes } from './export.js';
 import { benchRoutes, hardwareRoutes } from './hardware.js';
 import { jointRoutes } from './joints.js';
@@ -53,5 +54,6 @@ export const routes = {
   ...noticeRoutes,
   ...mailRoutes,
   ...exportRoutes,
+  ...deletionRoutes,
 };
 export type RouteName = keyof typeof routes;

@@ -4,6 +4,7 @@ import { leftOut, sections } from '../../server/export/sections.js';
 import { OwnData, type SectionName } from '../../shared/contract/export.js';
 import { jpegFromTelephone } from '../fixtures/photos.js';
 import { startTestApp, type MemberAgent, type TestApp } from './support/app.js';
+import { accountColumns } from './support/account-columns.js';
 import { takeAway } from './support/archive.js';
 import { insertFeature, insertJointOf, reading } from './support/features.js';
 import {
@@ -102,7 +103,7 @@ describe('what a member takes away', () => {
     expect(answer.headers['content-disposition']).toMatch(
       /^attachment; filename=shimlore-own-data-[\d-]+\.zip$/,
     );
-    expect(answer.headers['cache-control']).toBe('no-store');
+    expect(answer.headers['cache-control']).toBe('private, no-store');
     expect(data.account).toMatchObject([{ email: member.account.email, displayName: 'Ada Lathe' }]);
     expect(data.bench).toMatchObject([{ part: 'Motor M', revision: 'Rev A' }]);
     expect(data.readings).toMatchObject([
@@ -187,13 +188,7 @@ describe('the list of what an export holds', () => {
   });
 
   it('names every column of the database that names an account, or says why it is left out', async () => {
-    const [rows] = (await app.knex.raw(`
-      SELECT CONCAT(table_name, '.', column_name) AS name FROM information_schema.key_column_usage
-        WHERE table_schema = DATABASE() AND referenced_table_name = 'accounts'
-      UNION SELECT CONCAT(table_name, '.', column_name) FROM information_schema.columns
-        WHERE table_schema = DATABASE() AND column_name REGEXP '^(account|author|owner|member|person|user)_id$|^(created|placed|changed|written)_by$'
-    `)) as [{ name: string }[]];
-    const columns = rows.map(({ name }) => name);
+    const columns = await accountColumns(app.knex);
     const told = sections.map(({ table, owner }) => `${table}.${owner}`);
 
     expect(columns.length).toBeGreaterThan(20);
