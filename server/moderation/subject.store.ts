@@ -3,16 +3,9 @@ import type { EditionContent } from '../../shared/contract/edition-content.js';
 import type { DeskSubject, DeskSubjectKind } from '../../shared/contract/desk-subjects.js';
 import { trialOutcomeWords, type TrialOutcome } from '../../shared/contract/vocabulary.js';
 import { fromJson } from '../rows.js';
-import { takenDownColumns, takenDownOf, type TakenDownRow } from '../taken-down.js';
-
-interface Writer {
-  id: number;
-  personId: number;
-  displayName: string;
-}
-type Written = Writer & TakenDownRow;
-
-const person = { personId: 'a.id', displayName: 'a.display_name' };
+import { takenDownColumns } from '../taken-down.js';
+import { readPhoto } from './photo-subject.store.js';
+import { person, writtenBy, type Writer, type Written } from './written-by.js';
 
 /** Reads the thing of one kind and identity; undefined where there is none. */
 type Reader = (db: Knex, id: number) => Promise<DeskSubject | undefined>;
@@ -144,42 +137,7 @@ const readers: Record<DeskSubjectKind, Reader> = {
     );
   },
 
-  async photo(db, id) {
-    const row:
-      | (Written & {
-          hash: string;
-          width: number;
-          height: number;
-          widths: unknown;
-          placeholder: string;
-          alt: string;
-          partSlug: string | null;
-          writeUpSlug: string | null;
-        })
-      | undefined = await db('photos as f')
-      .join('accounts as a', 'a.id', 'f.owner_id')
-      .where('f.id', id)
-      .first('f.id', 'f.hash', 'f.width', 'f.height', 'f.widths', 'f.placeholder', 'f.alt', {
-        ...person,
-        ...takenDownColumns('f'),
-        partSlug: partThatShows(db),
-        writeUpSlug: writeUpThatShows(db),
-      });
-    if (!row) return undefined;
-    const { hash, width, height, placeholder, alt } = row;
-    return {
-      ...writtenBy('photo', row),
-      title: `Photo: ${alt}`,
-      text: alt,
-      path:
-        row.partSlug !== null
-          ? `/parts/${row.partSlug}`
-          : row.writeUpSlug !== null
-            ? `/write-ups/${row.writeUpSlug}`
-            : '/my/write-ups',
-      photo: { id, hash, width, height, widths: fromJson<number[]>(row.widths), placeholder, alt },
-    };
-  },
+  photo: readPhoto,
 
   async 'write-up'(db, id) {
     const row: (Writer & { slug: string; title: string; content: unknown }) | undefined = await publishedOf(
@@ -231,52 +189,9 @@ export async function fixIdOf(db: Knex, writeUpId: number, fixKey: string): Prom
   return row?.id;
 }
 
-function writtenBy(
-  kind: DeskSubjectKind,
-  row: Written,
-): Pick<DeskSubject, 'kind' | 'id' | 'person' | 'photo' | 'takenDown'> {
-  return {
-    kind,
-    id: row.id,
-    person: { id: row.personId, displayName: row.displayName },
-    photo: null,
-    takenDown: takenDownOf(row),
-  };
-}
-
 function publishedOf(db: Knex): Knex.QueryBuilder {
   return db('write_ups as w')
     .join('editions as e', 'e.id', 'w.published_edition_id')
     .join('accounts as a', 'a.id', 'e.author_id')
     .select('w.id', 'w.slug', 'e.title', 'e.content', person);
-}
-
-/** A part on whose page the photo stands, with one of its revisions or readings. */
-function partThatShows(db: Knex): Knex.QueryBuilder {
-  return db('parts as p')
-    .whereIn(
-      'p.id',
-      db('revision_photos as rp')
-        .join('revisions as v', 'v.id', 'rp.revision_id')
-        .where('rp.photo_id', db.ref('f.id'))
-        .select('v.part_id')
-        .unionAll(
-          db('measurements as m')
-            .join('revisions as v', 'v.id', 'm.revision_id')
-            .where('m.photo_id', db.ref('f.id'))
-            .select('v.part_id'),
-        ),
-    )
-    .orderBy('p.id')
-    .limit(1)
-    .select('p.slug');
-}
-
-function writeUpThatShows(db: Knex): Knex.QueryBuilder {
-  return db('edition_photos as ep')
-    .join('write_ups as w', 'w.published_edition_id', 'ep.edition_id')
-    .where('ep.photo_id', db.ref('f.id'))
-    .orderBy('w.id')
-    .limit(1)
-    .select('w.slug');
 }

@@ -102,6 +102,7 @@ export function createQuestionViews(around: {
       const found = await photos.photosByIds(shown);
       return {
         ...line!,
+        id: row.id,
         text: renderText(body.text),
         symptoms,
         readings: body.readings,

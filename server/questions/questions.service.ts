@@ -118,6 +118,7 @@ export function createQuestionService(around: {
           trx,
         );
         await attached.addToQuestion(added.id, question.photos, trx);
+        await deskInbox.photosUsed(trx, question.photos);
         const title = `Question “${question.title}”`;
         await deskInbox.firstPost(trx, { kind: 'question', id: added.id, accountId, title });
         await happenings.add(trx, {

@@ -60,6 +60,7 @@ export function createReplyService(around: {
           trx,
         );
         await attached.addToReply(added.id, reply.photos, trx);
+        await deskInbox.photosUsed(trx, reply.photos);
         const title = `Reply to “${question.title}”`;
         await deskInbox.firstPost(trx, { kind: 'reply', id: added.id, accountId, title });
         await happenings.add(trx, {

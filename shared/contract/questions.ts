@@ -62,6 +62,7 @@ export const Reply = z.object({
 export type Reply = z.infer<typeof Reply>;
 
 export const QuestionPage = QuestionLine.extend({
+  id: Id,
   text: RichText,
   symptoms: z.array(Symptom),
   readings: z.array(QuestionReading),

@@ -3,15 +3,18 @@ import { ChangeDetectionStrategy, Component, computed, input } from '@angular/co
 import type { Acceptance } from '../../../shared/contract/edition-content';
 import { trialOutcomeWords } from '../../../shared/contract/vocabulary';
 import type { Trial } from '../../../shared/contract/write-ups';
+import { TakenDownNote } from '../ui/taken-down-note/taken-down-note';
+import { TellTheDesk } from '../ui/tell-the-desk/tell-the-desk';
 import { WorksheetNote } from '../ui/worksheet/worksheet-note';
 import { withUnit } from './figures';
 
 /** One person's trial: what it did, the figure reached, on which revisions, and their word. */
 @Component({
   selector: 'sl-trial-line',
-  imports: [DatePipe, WorksheetNote],
+  imports: [DatePipe, TakenDownNote, TellTheDesk, WorksheetNote],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
+    <sl-taken-down-note [of]="trial().takenDown" />
     <p class="top">
       <strong>{{ outcomes[trial().outcome] }}</strong>
       @if (figure(); as figure) {
@@ -32,7 +35,13 @@ import { withUnit } from './figures';
       <sl-worksheet-note [record]="record" />
     }
     <p class="who sl-quiet">
-      {{ trial().person.displayName }}, {{ trial().createdAt | date: 'd MMM y' : 'UTC' }}
+      <span>{{ trial().person.displayName }}, {{ trial().createdAt | date: 'd MMM y' : 'UTC' }}</span>
+      @if (!trial().takenDown) {
+        <sl-tell-the-desk
+          [thing]="{ kind: 'trial', id: trial().id, fixKey: null }"
+          [name]="'the trial by ' + trial().person.displayName"
+        />
+      }
     </p>
   `,
   styles: `
@@ -57,6 +66,10 @@ import { withUnit } from './figures';
       white-space: pre-line;
     }
     .who {
+      display: flex;
+      flex-wrap: wrap;
+      align-items: baseline;
+      gap: 0 1rem;
       margin: 0;
       font-size: var(--sl-small);
     }

@@ -10,13 +10,14 @@ import { Session } from '../../core/session';
 import { Field, Labelled } from '../../ui/labelled/labelled';
 import { PhotoView } from '../../ui/photo/photo';
 import { ProblemNote } from '../../ui/problem-note/problem-note';
+import { TellTheDesk } from '../../ui/tell-the-desk/tell-the-desk';
 import { Measurements } from './measurements';
 import { enteredText, sayText, withInterval, type ShownUnit } from './reading-text';
 
 /** Each reading in words: figure, instrument, who and when, and what say it has. Moderators set one aside or take it back. */
 @Component({
   selector: 'sl-reading-table',
-  imports: [DatePipe, Field, Labelled, PhotoView, ProblemNote, ReactiveFormsModule],
+  imports: [DatePipe, Field, Labelled, PhotoView, ProblemNote, ReactiveFormsModule, TellTheDesk],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './reading-table.html',
   styleUrl: './reading-table.scss',

@@ -5,6 +5,7 @@ import { CautionBox } from '../../ui/caution-box/caution-box';
 import { PermanenceLabel } from '../../ui/permanence-label/permanence-label';
 import { PhotoCallouts } from '../../ui/photo-callouts/photo-callouts';
 import { RichTextView } from '../../ui/rich-text/rich-text';
+import { TellTheDesk } from '../../ui/tell-the-desk/tell-the-desk';
 import { StandingLabel } from '../../ui/standing-label/standing-label';
 import { AttachedWorksheet } from './attached-worksheet';
 import { acceptanceParts } from '../figures';
@@ -12,7 +13,15 @@ import { acceptanceParts } from '../figures';
 /** One remedy: its facts, its cautions, then why, what is needed, the steps, and how to know that it worked. */
 @Component({
   selector: 'sl-fix-sheet',
-  imports: [AttachedWorksheet, CautionBox, PermanenceLabel, PhotoCallouts, RichTextView, StandingLabel],
+  imports: [
+    AttachedWorksheet,
+    CautionBox,
+    PermanenceLabel,
+    PhotoCallouts,
+    RichTextView,
+    StandingLabel,
+    TellTheDesk,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   templateUrl: './fix-sheet.html',
   styleUrl: './fix-sheet.scss',
@@ -20,6 +29,8 @@ import { acceptanceParts } from '../figures';
 export class FixSheet {
   readonly fix = input.required<FixView>();
   readonly position = input.required<number>();
+  /** The write-up it is published in; null in drafts and at the desk, where nobody is told of it. */
+  readonly writeUpId = input<number | null>(null);
 
   protected readonly kind = computed(() => {
     const { kind } = this.fix();
