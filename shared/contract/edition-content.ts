@@ -4,8 +4,6 @@ import { Id, ItemKey, Slug, line, passage } from './primitives.js';
 import { WorksheetRecord } from './worksheet.js';
 import { Afterwards, FixKind, Instrument, Permanence, ReadingUnit } from './vocabulary.js';
 
-export { ItemKey };
-
 /** Whether the write-up holds for a revision, as its author found it. A revision that is not listed is not known. */
 export const RevisionMark = z.strictObject({ revisionId: Id, holds: z.boolean() });
 export type RevisionMark = z.infer<typeof RevisionMark>;

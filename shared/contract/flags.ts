@@ -1,7 +1,6 @@
 import { z } from 'zod';
 import { DeskSubject, DeskSubjectKind } from './desk-subjects.js';
-import { ItemKey } from './edition-content.js';
-import { Id, IdText, Instant, line } from './primitives.js';
+import { Id, IdText, Instant, ItemKey, line } from './primitives.js';
 import { moderators, route, signedIn } from './route.js';
 import { DeskReason } from './taken-down.js';
 import { PersonRef } from './write-ups.js';
