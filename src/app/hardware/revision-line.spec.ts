@@ -32,6 +32,25 @@ describe('time line of revisions', () => {
     expect(line.spans).toHaveLength(1);
   });
 
+  it('goes on beyond now for a revision that is announced, and what is sold ends today', () => {
+    const { spans } = timeLineOf(
+      [revision(1, '2024-01-01', null), { ...revision(2, '2026-05-01', null), announced: true }],
+      now,
+    );
+    expect(spans[0]!.start + spans[0]!.length).toBeLessThan(spans[1]!.start);
+    expect(spans[1]).toMatchObject({ announced: true, sold: false });
+    expect(spans[1]!.start + spans[1]!.length).toBeCloseTo(100, 6);
+  });
+
+  it('starts an announced revision without a day now', () => {
+    const { spans, undated } = timeLineOf(
+      [revision(1, '2024-01-01', null), { ...revision(2, null, null), announced: true }],
+      now,
+    );
+    expect(undated).toEqual([]);
+    expect(spans[1]!.start).toBeCloseTo(spans[0]!.start + spans[0]!.length, 6);
+  });
+
   it('has no line where no day is known', () => {
     expect(timeLineOf([revision(1, null, null)], now)).toMatchObject({ spans: [], years: [] });
   });

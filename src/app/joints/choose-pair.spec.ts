@@ -24,6 +24,18 @@ describe('the pair shown', () => {
   it('passes over revisions of other parts', () => {
     expect(pairOf({ a: 22, b: 11 })).toEqual([11, 22]);
   });
+  it('is none of an announced revision while others tell as little', () => {
+    const joint = lipJoint();
+    const newest = joint.sideB.revisions.at(-1)!;
+    const silent = {
+      ...joint,
+      cells: joint.cells.map((cell) => ({ ...cell, verdict: 'not-known' as const })),
+    };
+    const wishes = { a: null, b: null, bench: [] };
+    expect(choosePair(silent, wishes)?.revisionB).toBe(newest.revision.id);
+    newest.revision = { ...newest.revision, announced: true };
+    expect(choosePair(silent, wishes)?.revisionB).not.toBe(newest.revision.id);
+  });
   it('is none where a part has no revisions', () => {
     expect(choosePair({ ...lipJoint(), cells: [] }, { a: null, b: null, bench: [] })).toBeNull();
   });
