@@ -13,7 +13,7 @@ import type { Observable } from 'rxjs';
 import type { Caution } from '../../../shared/contract/write-ups';
 import { formSending } from '../core/form-sending';
 import { ProblemNote } from '../ui/problem-note/problem-note';
-import { CautionWordsFields, cautionWordsControls, type CautionWordsForm } from './caution-words-fields';
+import { CautionWordsFields, cautionWordsControls } from './caution-words-fields';
 import type { CautionWords } from './desk';
 
 /** Words of a caution, to be made fit for this very fix before it is placed. */
@@ -35,7 +35,7 @@ export class CautionForm implements OnInit {
   readonly cancelled = output();
   private readonly host = inject<ElementRef<HTMLElement>>(ElementRef);
   protected readonly sending = formSending();
-  protected readonly form: CautionWordsForm = new FormGroup(cautionWordsControls());
+  protected readonly form = new FormGroup(cautionWordsControls());
 
   constructor() {
     afterNextRender(() => this.host.nativeElement.querySelector<HTMLElement>('textarea')?.focus());

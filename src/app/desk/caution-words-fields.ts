@@ -20,7 +20,8 @@ export function cautionWordsControls() {
     avoidance: text(),
   };
 }
-export type CautionWordsForm = FormGroup<ReturnType<typeof cautionWordsControls>>;
+/** A form that has these fields, whatever else it has. */
+export type CautionWordsForm = FormGroup & { readonly controls: ReturnType<typeof cautionWordsControls> };
 
 /** What a caution says, in the order in which it is read, then its signal word and what it answers. */
 @Component({
