@@ -4,9 +4,11 @@ import { seedMeasured } from './demo/measured/seed-measured.js';
 import { seedAccounts } from './demo/seed-accounts.js';
 import { seedBenches } from './demo/seed-benches.js';
 import { seedCatalogue } from './demo/seed-catalogue.js';
+import { seedDesk } from './demo/seed-desk.js';
 import { storePartDrawings, storeRevisionDrawings, storeWriteUpDrawings } from './demo/seed-drawings.js';
 import { seedMakerWords } from './demo/seed-maker-words.js';
 import { seedMarks } from './demo/seed-marks.js';
+import { seedQuestions } from './demo/seed-questions.js';
 import { seedRevisionPhotos } from './demo/seed-revision-photos.js';
 import { seedWriteUps } from './demo/seed-write-ups.js';
 
@@ -35,8 +37,10 @@ export async function seedDemo({ knex, storePhoto, now, hashPassword }: DemoSurr
     await seedRevisionPhotos(trx, { catalogue, photos: revisionPhotos });
     await seedMarks(trx, catalogue);
     await seedWriteUps(trx, { accounts, catalogue, photos, now });
+    await seedQuestions(trx, { accounts, catalogue, now });
     await seedMakerWords(trx, { accounts, catalogue, now });
     await seedBenches(trx, { accounts, catalogue, now });
     await seedMeasured(trx, { accounts, catalogue, now });
+    await seedDesk(trx, { accounts, now });
   });
 }
