@@ -73,6 +73,24 @@ describe('edition page', () => {
     expect(before(box, page.querySelector('.steps')!)).toBe(true);
   });
 
+  it('puts a caution on a step above that step and above no other', () => {
+    const step = (key: string, text: string, cautions: Caution[]) => ({
+      key,
+      text: rich(text),
+      photo: null,
+      cautions,
+    });
+    const steps = [
+      step('step-one', '<p>Mark the lip.</p>', []),
+      step('step-two', '<p>Cut the lip.</p>', [{ ...caution, stepKey: 'step-two' }]),
+    ];
+    const page = drawn({ fixes: [{ ...fix, steps, cautions: [] }] });
+    const [first, second] = page.querySelectorAll('.steps > li');
+    expect(first!.querySelector('sl-caution-box')).toBeNull();
+    const box = second!.querySelector('sl-caution-box')!;
+    expect(before(box, second!.querySelector(':scope > sl-rich-text')!)).toBe(true);
+  });
+
   it('puts a caution on the whole write-up above everything that it may warn of', () => {
     const page = drawn({ cautions: [{ ...caution, fixKey: null }] });
     expect(before(page.querySelector('sl-caution-box')!, page.querySelector('sl-fix-sheet')!)).toBe(true);
