@@ -205,6 +205,7 @@ export function createApp(around: Surroundings): Composition {
     audit,
     happenings,
     publicAddress: settings.PUBLIC_ADDRESS,
+    claims,
   });
   const worksheets = createWorksheets({ knex });
   const cautionLibrary = createCautionLibrary({ knex, clock, audit, cautions: moderation.cautions });

@@ -8,6 +8,7 @@ import type { RouteBinding } from '../http/binding.js';
 import type { RateLimits } from '../http/rate-limits.js';
 import type { JointService } from '../joints/joints.service.js';
 import type { MakerMail } from '../mail/maker-mail.js';
+import type { DeskClaims } from '../moderation/claims.js';
 import type { Happenings } from '../watches/happenings.js';
 import type { WriteUpService } from '../write-ups/write-ups.js';
 import { createAnswerService } from './answers.service.js';
@@ -32,6 +33,7 @@ export function createMakers(around: {
   makerRole: MakerRole;
   audit: AuditLog;
   happenings: Happenings;
+  claims: DeskClaims;
   publicAddress: string;
 }): { bindings: RouteBinding[] } {
   const concerned = createConcerned(around);

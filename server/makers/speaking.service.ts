@@ -5,6 +5,7 @@ import type { MakerRole } from '../accounts/maker-role.js';
 import type { AuditLog } from '../audit/audit.js';
 import { AlreadyThere, FieldNotValid, NotAllowed, NotFound, ProblemError } from '../http/problems.js';
 import type { MakerMail } from '../mail/maker-mail.js';
+import type { DeskClaims } from '../moderation/claims.js';
 import { isOpen, makerRequestStore as requests, type MakerRequestRow } from './maker-request.store.js';
 import { makerStore as makers, type MakerRow } from './maker.store.js';
 import { domainOf, isPublicMailDomain } from './public-mail-domains.js';
@@ -17,12 +18,13 @@ export interface SpeakingParts {
   readonly mail: MakerMail;
   readonly audit: AuditLog;
   readonly makerRole: MakerRole;
+  readonly claims: Pick<DeskClaims, 'demandFree'>;
 }
 
 export type SpeakingService = ReturnType<typeof createSpeakingService>;
 
 /** Who speaks for a maker: asking, proving by mail, deciding, ending. */
-export function createSpeakingService({ knex, clock, mail, audit, makerRole }: SpeakingParts) {
+export function createSpeakingService({ knex, clock, mail, audit, makerRole, claims }: SpeakingParts) {
   return {
     /** Mails the link or lays the request on the desk; one that waits for mail gives way to the new one. */
     async ask(accountId: number, slug: string, wish: AskToSpeak): Promise<MakerRequest> {
@@ -112,6 +114,7 @@ export function createSpeakingService({ knex, clock, mail, audit, makerRole }: S
       };
     },
 
+    /** ClaimedByAnother while another moderator has it in hand. */
     async decide(
       id: number,
       moderatorId: number,
@@ -121,6 +124,7 @@ export function createSpeakingService({ knex, clock, mail, audit, makerRole }: S
       if (!found) throw noSuchRequest();
       if (found.accountId === moderatorId)
         throw new NotAllowed('Nobody decides their own request.', 'Ask another moderator.');
+      await claims.demandFree({ kind: 'maker-request', id }, moderatorId);
       await knex.transaction(async (trx) => {
         const maker = (await makers.hold(trx, found.makerId))!;
         const request = (await requests.byId(trx, id))!;

@@ -224,7 +224,7 @@ export const makerRoutes = {
     summary: 'Grant or decline a request with a reason that goes to the asker',
     params: byId,
     body: z.strictObject({ granted: z.boolean(), reason }),
-    problems: ['already-there'],
+    problems: ['already-there', 'claimed-by-another'],
   }),
   endSpeaking: route({
     method: 'post',

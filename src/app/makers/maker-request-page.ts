@@ -1,5 +1,5 @@
 import { DatePipe } from '@angular/common';
-import { ChangeDetectionStrategy, Component, computed, inject } from '@angular/core';
+import { ChangeDetectionStrategy, Component, computed, inject, signal } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { ActivatedRoute, Router, RouterLink } from '@angular/router';
 import { map } from 'rxjs';
@@ -7,6 +7,7 @@ import type { DeskMakerRequest, MakerRequestState } from '../../../shared/contra
 import { formSending } from '../core/form-sending';
 import { loadEach } from '../core/load';
 import { LoadStateView } from '../ui/load-state/load-state';
+import { ClaimBar } from '../desk/claim-bar';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Undo } from '../ui/undo/undo';
@@ -23,7 +24,7 @@ const stateWords: Record<MakerRequestState, string> = {
 /** At the desk: somebody asks to speak for a maker. */
 @Component({
   selector: 'sl-maker-request-page',
-  imports: [DatePipe, Field, Labelled, LoadStateView, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [ClaimBar, DatePipe, Field, Labelled, LoadStateView, ProblemNote, ReactiveFormsModule, RouterLink],
   changeDetection: ChangeDetectionStrategy.OnPush,
   template: `
     @if (request(); as request) {
@@ -52,6 +53,9 @@ const stateWords: Record<MakerRequestState, string> = {
         <p class="note">{{ request.note }}</p>
       }
       @if (isOpen()) {
+        <sl-claim-bar [item]="{ kind: 'maker-request', id: request.id }" (inHand)="mine.set($event)" />
+      }
+      @if (isOpen() && mine()) {
         <form [formGroup]="form" novalidate aria-label="Decide" (ngSubmit)="decide(request, true)">
           <sl-labelled label="Reason" hint="The asker reads it, by mail too" [control]="form.controls.reason">
             <textarea slField rows="4" maxlength="1000" formControlName="reason"></textarea>
@@ -103,6 +107,8 @@ const stateWords: Record<MakerRequestState, string> = {
   `,
 })
 export class MakerRequestPage {
+  /** False while another moderator has it in hand. */
+  protected readonly mine = signal(true);
   private readonly makers = inject(Makers);
   private readonly router = inject(Router);
   private readonly undo = inject(Undo);
