@@ -61,6 +61,25 @@ describe('the seeded demo', () => {
     ).toEqual([]);
   });
 
+  it('asks 150 questions, some six in ten settled by a fix that stands, and answers most', async () => {
+    const [{ all }] = (await app.knex('questions').count({ all: '*' })) as [{ all: number }];
+    expect(Number(all)).toBe(150);
+    const settled = await app
+      .knex('questions as q')
+      .join('fixes as f', (on) =>
+        on.on('f.write_up_id', 'q.settled_write_up_id').andOn('f.fix_key', 'q.settled_fix_key'),
+      );
+    expect(settled.length / 150).toBeCloseTo(0.6, 1);
+    const [{ replied }] = (await app.knex('question_replies').countDistinct({ replied: 'question_id' })) as [
+      { replied: number },
+    ];
+    expect(Number(replied)).toBeGreaterThan(110);
+  });
+
+  it('has trials that carry a worksheet', async () => {
+    expect((await app.knex('trials').whereNotNull('worksheet')).length).toBeGreaterThan(3);
+  });
+
   it('shows at every revision of the M1 and of the belt bracket what tells it apart', async () => {
     for (const slug of ['tarn-m1', 'stonebridge-belt-bracket']) {
       const { body } = await app.visitor().get(`/api/parts/${slug}`).expect(200);
