@@ -1,3 +1,10 @@
+/** A file that goes with a mail. */
+export interface Attachment {
+  readonly fileName: string;
+  readonly mediaType: string;
+  readonly content: Buffer;
+}
+
 /** Figures beside words; in text its columns are lined up. */
 export interface LetterTable {
   readonly caption: string;

@@ -1,12 +1,6 @@
 import type { Knex } from 'knex';
 import { groupBy } from '../rows.js';
-
-/** A file that goes with a mail. */
-export interface Attachment {
-  readonly fileName: string;
-  readonly mediaType: string;
-  readonly content: Buffer;
-}
+import type { Attachment } from './letter.js';
 
 /**
  * What a mail is about, which decides what stops it: nothing stops mail of the account itself; `notice` (the desk on

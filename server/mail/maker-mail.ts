@@ -1,6 +1,6 @@
 import type { Knex } from 'knex';
-import { htmlOf, subjectOf, textOf, type Letter } from './letter.js';
-import { addMail, type Attachment } from './mail-outbox.store.js';
+import { htmlOf, subjectOf, textOf, type Attachment, type Letter } from './letter.js';
+import { addMail } from './mail-outbox.store.js';
 import type { Recipient } from './recipients.store.js';
 
 /** Mails between those who speak for makers, the desk, and the makers. */

@@ -5,7 +5,7 @@ import { drawingSvg } from '../../shared/drawing/drawing-svg.js';
 import { drawJoint } from '../../shared/drawing/joint-drawing.js';
 import type { FeatureOnHand } from '../../shared/fit/joint-verdict.js';
 import { onHand } from '../joints/fit-cell.js';
-import type { Attachment } from '../mail/mail-outbox.store.js';
+import type { Attachment } from '../mail/letter.js';
 
 const dotsPerInch = 144;
 
