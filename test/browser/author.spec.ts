@@ -47,10 +47,9 @@ describe('an author', () => {
     await writeWriteUp(author, title, 'Put the coin on the face and screw the plate down.');
     await page.getByLabel('Choose photos').setInputFiles(await platePhoto());
     await page
-      .getByRole('group', { name: 'New photo plate.jpg' })
+      .getByRole('group', { name: 'Photo 1' })
       .getByLabel(/What it shows/)
       .fill('The plate with a gap at its left edge');
-    await page.getByRole('button', { name: 'Store the photo' }).click();
     await page.getByRole('group', { name: 'Photo 1' }).getByLabel('Caption').fill('Gap of 1.2 mm');
     await untilSaved(page);
     await expectAccessible(page);
