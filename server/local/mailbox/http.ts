@@ -1,6 +1,7 @@
 import { createServer, type IncomingMessage, type Server, type ServerResponse } from 'node:http';
 import type { Mailbox } from './mailbox.js';
 import { listPage, mailPage } from './pages.js';
+import { returnedMessage } from './returned.js';
 
 const headers = {
   // A mail's HTML is shown as it came: nothing in it may load or run.
@@ -11,7 +12,9 @@ const headers = {
 };
 
 /**
- * Pages to read the mail by, and for tests `GET /messages.json?to=<address>` (newest first) and `DELETE /messages`.
+ * Pages to read the mail by, and for tests `GET /messages.json?to=<address>` (newest first), `DELETE /messages`,
+ * `PUT` and `DELETE /refused/<address>` (whether mail to it is refused) and `GET /messages/<id>/returned?status=5.1.1`
+ * (the report with which a mail is given back).
  */
 export function createMailboxServer(mailbox: Mailbox): Server {
   return createServer((request, response) => answer(mailbox, request, response));
@@ -24,8 +27,14 @@ function answer(mailbox: Mailbox, request: IncomingMessage, response: ServerResp
     response.writeHead(204, headers).end();
     return;
   }
+  const refused = /^\/refused\/([^/]{1,300})$/.exec(address.pathname)?.[1];
+  if (refused !== undefined && (request.method === 'PUT' || request.method === 'DELETE')) {
+    mailbox.setRefused(decodeURIComponent(refused), request.method === 'PUT');
+    response.writeHead(204, headers).end();
+    return;
+  }
   if (request.method !== 'GET') {
-    send(response, 405, 'text/plain', 'Only GET, and DELETE /messages.');
+    send(response, 405, 'text/plain', 'Only GET, DELETE /messages, and PUT or DELETE /refused/<address>.');
     return;
   }
   if (address.pathname === '/messages.json') {
@@ -41,8 +50,16 @@ function answer(mailbox: Mailbox, request: IncomingMessage, response: ServerResp
     send(response, 200, 'text/html', listPage(mailbox.list()));
     return;
   }
-  const mail = mailbox.find(Number(/^\/messages\/(\d{1,9})$/.exec(address.pathname)?.[1]));
-  if (mail) send(response, 200, 'text/html', mailPage(mail));
+  const [, id, returned] = /^\/messages\/(\d{1,9})(\/returned)?$/.exec(address.pathname) ?? [];
+  const mail = mailbox.find(Number(id));
+  if (mail && returned)
+    send(
+      response,
+      200,
+      'message/rfc822',
+      returnedMessage(mail, address.searchParams.get('status') ?? '5.1.1'),
+    );
+  else if (mail) send(response, 200, 'text/html', mailPage(mail));
   else send(response, 404, 'text/plain', 'There is no such mail.');
 }
 

@@ -8,6 +8,7 @@ import { createSmtpServer } from './smtp.js';
 
 const mail = (to: string, subject = 'Hello', headers: Mail['headers'] = {}): Omit<Mail, 'id' | 'copies'> => ({
   from: 'desk@shimlore.example',
+  envelopeFrom: 'desk@shimlore.example',
   to: [to],
   subject,
   text: 'Text',
@@ -113,6 +114,25 @@ describe('the running mailbox', () => {
     const page = await (await fetch(`${address}/messages/1`)).text();
 
     expect(page).toContain('href="http://localhost:4310/account/confirm?token=a&amp;b=c"');
+  });
+
+  it('refuses mail to an address it was told to refuse, until it is told otherwise', async () => {
+    await fetch(`${address}/refused/ada@x.example`, { method: 'PUT' });
+    await expect(deliver('Ada@x.example', { text: 'Plain' })).rejects.toThrow('550 5.1.1');
+
+    await fetch(`${address}/refused/ada@x.example`, { method: 'DELETE' });
+    await deliver('ada@x.example', { text: 'Plain' });
+
+    expect(mailbox.list('ada@x.example')).toHaveLength(1);
+  });
+
+  it('gives a mail back with the report of a mail server', async () => {
+    await deliver('ada@x.example', { text: 'Plain' });
+
+    const report = await (await fetch(`${address}/messages/1/returned?status=5.2.1`)).text();
+
+    expect(report).toContain('To: <desk@shimlore.example>');
+    expect(report).toContain('Final-Recipient: rfc822; ada@x.example\r\nAction: failed\r\nStatus: 5.2.1');
   });
 
   it('is empty after DELETE /messages', async () => {

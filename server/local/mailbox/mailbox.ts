@@ -2,6 +2,8 @@
 export interface Mail {
   readonly id: number;
   readonly from: string;
+  /** Where it is given back to when it cannot be delivered. */
+  readonly envelopeFrom: string;
   readonly to: readonly string[];
   readonly subject: string;
   readonly text: string;
@@ -20,12 +22,16 @@ export interface Mailbox {
   list(address?: string): Mail[];
   find(id: number): Mail | undefined;
   empty(): void;
+  /** From now on (or no longer) mail to this address is refused for good, as a server does that does not know it. */
+  setRefused(address: string, refused: boolean): void;
+  refuses(address: string): boolean;
 }
 
 /** Keeps the last `capacity` mails in memory. */
 export function createMailbox(capacity = 500): Mailbox {
   let mails: Mail[] = [];
   let lastId = 0;
+  const refused = new Set<string>();
   return {
     add(mail) {
       const known = mails.find((kept) => isSame(kept, mail));
@@ -44,6 +50,11 @@ export function createMailbox(capacity = 500): Mailbox {
     empty() {
       mails = [];
     },
+    setRefused(address, is) {
+      if (is) refused.add(address.trim().toLowerCase());
+      else refused.delete(address.trim().toLowerCase());
+    },
+    refuses: (address) => refused.has(address.trim().toLowerCase()),
   };
 }
 

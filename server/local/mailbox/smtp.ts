@@ -9,11 +9,16 @@ export function createSmtpServer(mailbox: Mailbox, clock: () => Date): SMTPServe
     disabledCommands: ['STARTTLS'],
     disableReverseLookup: true,
     onAuth: (_credentials, _session, done) => done(null, { user: 'anybody' }),
+    onRcptTo(address, _session, done) {
+      if (!mailbox.refuses(address.address)) return done();
+      done(Object.assign(new Error('5.1.1 There is nobody of that name here'), { responseCode: 550 }));
+    },
     onData(stream, session, done) {
       const recipients = session.envelope.rcptTo.map((recipient) => recipient.address.toLowerCase());
       simpleParser(stream).then((mail) => {
         mailbox.add({
           from: mail.from?.text ?? '',
+          envelopeFrom: session.envelope.mailFrom === false ? '' : session.envelope.mailFrom.address,
           to: recipients,
           subject: mail.subject ?? '',
           text: mail.text ?? '',

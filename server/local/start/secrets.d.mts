@@ -1,3 +1,3 @@
 export function readSecrets(
   dataDir: string,
-): Record<'database' | 'databaseRoot' | 'search' | 'session', string>;
+): Record<'database' | 'databaseRoot' | 'search' | 'bounce' | 'session', string>;

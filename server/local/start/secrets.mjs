@@ -14,6 +14,7 @@ export function readSecrets(dataDir) {
     database: kept.database ?? randomBytes(24).toString('hex'),
     databaseRoot: kept.databaseRoot ?? randomBytes(24).toString('hex'),
     search: kept.search ?? randomBytes(24).toString('hex'),
+    bounce: kept.bounce ?? randomBytes(48).toString('hex'),
     session: kept.session ?? randomBytes(48).toString('hex'),
   };
   if (Object.entries(secrets).some(([name, value]) => kept[name] !== value)) {

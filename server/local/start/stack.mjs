@@ -79,6 +79,7 @@ function appEnvironment(settings, secrets) {
     PUBLIC_ADDRESS: settings.publicAddress,
     PHOTO_DIR: given.PHOTO_DIR || join(settings.dataDir, 'photos'),
     SESSION_SECRET: given.SESSION_SECRET || secrets.session,
+    BOUNCE_SECRET: given.BOUNCE_SECRET || secrets.bounce,
   };
 }
 
