@@ -101,7 +101,7 @@ import { PhotoQueue, type ComingPhoto } from './photo-queue';
     }
     @media (min-width: 48rem) {
       :host {
-        grid-template-columns: 14rem minmax(0, 1fr);
+        grid-template-columns: 18rem minmax(0, 1fr);
       }
     }
   `,
