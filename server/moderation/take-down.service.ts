@@ -98,8 +98,10 @@ export function createTakeDownService(parts: TakeDownParts) {
     }
     const row = await store.hold(trx, kind, id);
     if (!row) throw new NotFound(`There is no such ${kind}.`, 'Read the desk again.');
-    if (way === 'take-down' && row.takenDownAt) throw new AlreadyThere('It is taken down already.', 'Read it again.');
-    if (way === 'put-back' && !row.takenDownAt) throw new AlreadyThere('It stands on the pages.', 'Read it again.');
+    if (way === 'take-down' && row.takenDownAt)
+      throw new AlreadyThere('It is taken down already.', 'Read it again.');
+    if (way === 'put-back' && !row.takenDownAt)
+      throw new AlreadyThere('It stands on the pages.', 'Read it again.');
     await store.mark(trx, kind, id, way === 'take-down' ? { at: clock(), moderatorId, reason } : null);
     if (kind === 'trial') await follow(trx, await store.writeUpsOfTrials(trx, { id }));
     if (kind === 'photo') await reindex(trx, await store.writeUpsOfPhotos(trx, { id }));
