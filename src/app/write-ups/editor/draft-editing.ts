@@ -1,5 +1,5 @@
 import { Injectable, computed, inject, signal, type OnDestroy } from '@angular/core';
-import { Subscription, catchError, map, throwError, type Observable } from 'rxjs';
+import { Subscription, type Observable } from 'rxjs';
 import { emptyContent } from '../../../../shared/contract/edition-content';
 import { missingFromContent } from '../../../../shared/contract/edition-completeness';
 import type { Photo } from '../../../../shared/contract/photos';
@@ -7,8 +7,6 @@ import type { FieldProblem, Problem } from '../../../../shared/contract/problem'
 import type { MergeGround } from '../../../../shared/contract/proposed-editions';
 import type { Draft } from '../../../../shared/contract/write-ups';
 import type { EditionText } from '../../../../shared/editions/edition-text';
-import { holdBack } from '../../../../shared/editions/hold-back';
-import { mergeEditions } from '../../../../shared/editions/merge-editions';
 import { same } from '../../../../shared/editions/same';
 import { toApiProblem } from '../../core/api-problem';
 import { tellFields } from '../../core/told-fields';
@@ -16,12 +14,12 @@ import { Autosave, type SaveState, type Saved } from './autosave';
 import { DraftBackup } from './draft-backup';
 import { Drafts } from './drafts';
 import { editionForm, textOf, type EditionForm } from './edition-form';
-import { contentFields, limitsBroken, limitsProblem } from './edition-limits';
+import { contentFields } from './edition-limits';
 import type { MergeResult } from './merge-panel';
-import { nameOfPiece, wordsOfPiece } from './merge-words';
-import type { Merging } from './merging';
+import { mergingWithDraft, mergingWithEdition, textOfDraft, type Merging } from './merging';
+import { saveWhatCan } from './partial-save';
 import { PartDirectory } from './part-directory';
-import type { SetAside } from './set-aside';
+import { typedBeyond, type SetAside } from './set-aside';
 
 /** One draft while it is being written: its form, its way to the server, and what to do when somebody else saved it. */
 @Injectable()
@@ -65,21 +63,10 @@ export class DraftEditing implements OnDestroy {
     const mine = this.text();
     const photos = this.photos();
     if (state.kind === 'moved-on') {
-      const { theirs } = state;
       const base = this.ownMerge()?.base ?? this.base;
-      const other = { kind: 'draft', by: theirs.author.displayName, at: theirs.updatedAt } as const;
-      return { id: `draft ${theirs.version}`, base, mine, theirs: textOfDraft(theirs), with: other, photos };
+      return mergingWithDraft(state.theirs, { base, mine, photos });
     }
-    if (ground === null) return null;
-    const { changeNote } = mine;
-    return {
-      id: `edition ${ground.current.edition.id}`,
-      base: { content: ground.base?.content ?? emptyContent, changeNote },
-      mine,
-      theirs: { content: ground.current.content, changeNote },
-      with: { kind: 'edition', edition: ground.current.edition },
-      photos,
-    };
+    return ground && mergingWithEdition(ground, { mine, photos });
   });
   /** Fields that could not be saved as they are; they are kept in this browser. */
   readonly heldBack = computed<readonly FieldProblem[]>(() => {
@@ -146,7 +133,10 @@ export class DraftEditing implements OnDestroy {
     const restored = this.restored();
     if (restored === null) return;
     this.restored.set(null);
-    this.keepAside([...this.setAside(), ...this.typedBeyond(restored.serversText)]);
+    this.keepAside([
+      ...this.setAside(),
+      ...typedBeyond(restored.serversText, this.text(), this.directory.namesWith(this.photos())),
+    ]);
     this.useForm(editionForm(restored.serversText));
     this.changed();
   }
@@ -228,18 +218,6 @@ export class DraftEditing implements OnDestroy {
     this.changes = form.valueChanges.subscribe(() => this.changed());
   }
 
-  /** What the form says otherwise than another text, in words. */
-  private typedBeyond(text: EditionText): SetAside[] {
-    const names = this.directory.namesWith(this.photos());
-    const texts = [this.text(), text];
-    return mergeEditions(text, this.text(), text).rows.flatMap((row) => {
-      const words = wordsOfPiece(row.path, row.mine, texts, names);
-      return words
-        ? [{ name: nameOfPiece(row.path, texts, names), whose: 'What you typed here', words }]
-        : [];
-    });
-  }
-
   private changed(): void {
     const text = textOf(this.form());
     this.text.set(text);
@@ -257,35 +235,12 @@ export class DraftEditing implements OnDestroy {
   }
 
   private send(text: EditionText, version: number): Observable<Saved> {
-    return this.sendWithout(limitsBroken(text), text, version);
-  }
-
-  /** Sends all but what cannot be saved; where the server refuses more, all but that too. */
-  private sendWithout(
-    heldBack: readonly FieldProblem[],
-    text: EditionText,
-    version: number,
-  ): Observable<Saved> {
-    const rest = holdBack(
-      text,
-      this.base,
-      heldBack.map((field) => field.path),
-    );
-    if (heldBack.length > 0) {
-      tellFields(this.form(), heldBack);
-      if (same(rest, this.base) && this.mergedWith === undefined)
-        return throwError(() => limitsProblem([...heldBack]));
-    }
-    return this.drafts.save(this.draft().id, rest, version, this.mergedWith).pipe(
-      map((draft) => ({ draft, heldBack })),
-      catchError((error: unknown) => {
-        const { problem } = toApiProblem(error);
-        const known = heldBack.map((field) => field.path);
-        const refused = contentFields(problem.fields ?? []).filter((field) => !known.includes(field.path));
-        if (problem.status !== 422 || refused.length === 0) return throwError(() => error);
-        return this.sendWithout([...heldBack, ...refused], text, version);
-      }),
-    );
+    return saveWhatCan(text, {
+      saved: this.base,
+      always: this.mergedWith !== undefined,
+      told: (heldBack) => tellFields(this.form(), heldBack),
+      send: (rest) => this.drafts.save(this.draft().id, rest, version, this.mergedWith),
+    });
   }
 
   private problemOf(error: unknown): Problem {
@@ -318,7 +273,3 @@ const changeNoteMissing: FieldProblem = {
   message: 'is empty',
   remedy: 'Say in one line what is different from the edition that is published.',
 };
-
-function textOfDraft(draft: Draft): EditionText {
-  return { content: draft.content, changeNote: draft.changeNote };
-}
