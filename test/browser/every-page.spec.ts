@@ -48,6 +48,11 @@ const pages: [path: string, role: string | null][] = [
   ['/questions', null],
   ['/questions/ask', 'owner'],
   ['/account/forgotten', null],
+  ['/notices', 'owner'],
+  ['/notices', 'maker'],
+  ['/my/watches', 'owner'],
+  ['/account/profile', 'owner'],
+  ['/mail/unsubscribe?token=no-such-token-at-all-here', null],
   ['/my/write-ups', 'author'],
   ['/write-ups/new', 'author'],
   ['/desk', 'moderator'],
@@ -64,21 +69,31 @@ const pages: [path: string, role: string | null][] = [
 describe.each(Object.keys(viewports) as (keyof typeof viewports)[])('on a %s', (viewport) => {
   it.each(pages)(
     '%s (as %s) causes no error, breaks no rule of WCAG 2.2 AA and is not wider than the screen',
-    async (path, role) => {
-      const page = await open(viewport);
-      if (role) await page.signInAs(role);
-
-      await page.visit(path);
-
-      await expectAccessible(page.page);
-      const overhang = await page.page.evaluate(
-        () => document.documentElement.scrollWidth - window.innerWidth,
-      );
-      expect(overhang).toBeLessThanOrEqual(0);
-      expect(page.errors()).toEqual([]);
-    },
+    (path, role) => expectSound(viewport, path, role),
   );
+
+  it('so does a question that is settled', async () => {
+    const answer = await fetch(`${browser.address}/api/questions?open=false&limit=1`);
+    const { items } = (await answer.json()) as { items: { slug: string }[] };
+    await expectSound(viewport, `/questions/${items[0]!.slug}`, 'owner');
+  });
 });
+
+async function expectSound(
+  viewport: keyof typeof viewports,
+  path: string,
+  role: string | null,
+): Promise<void> {
+  const page = await open(viewport);
+  if (role) await page.signInAs(role);
+
+  await page.visit(path);
+
+  await expectAccessible(page.page);
+  const overhang = await page.page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
+  expect(overhang).toBeLessThanOrEqual(0);
+  expect(page.errors()).toEqual([]);
+}
 
 describe('without scripts', () => {
   it('a search arrives with its results in it', async () => {

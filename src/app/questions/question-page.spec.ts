@@ -7,6 +7,7 @@ import type { QuestionPage } from '../../../shared/contract/questions';
 import { QuestionPageView } from './question-page';
 
 const rocking: QuestionPage = {
+  id: 1,
   slug: 'why-does-it-rock-1',
   title: 'Why does it rock?',
   parts: [
