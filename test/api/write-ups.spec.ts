@@ -9,6 +9,7 @@ import {
   knifeFix,
   plainFix,
   publishNew,
+  submitDraft,
   submitNext,
   type TestJoint,
 } from './support/write-ups.js';
@@ -245,6 +246,13 @@ describe('the history', () => {
     const publish = (id: number) =>
       moderator.post(`/api/desk/editions/${id}/publish`).send({ note: '' }).expect(200);
     expect((await publish(quicker.id)).body.number).toBe(2);
+    const recalled = await author.post(`/api/drafts/${overtaken.id}/recall`).expect(200);
+    const merged = await author
+      .put(`/api/drafts/${overtaken.id}`)
+      .set('If-Match', `"${recalled.body.version}"`)
+      .send({ content: overtaken.content, changeNote: 'Mine.', baseEditionId: quicker.id })
+      .expect(200);
+    await submitDraft(author, merged.body);
     expect((await publish(overtaken.id)).body.number).toBe(3);
     expect((await page(slug)).body.view.sources.source).toBe('The author’s.');
   });
