@@ -30,7 +30,7 @@ function drawn(joint: JointPage, cell: FitCell): string | null {
   const b = side(joint.sideB, cell.revisionB);
   if (!a || !b) return null;
   const drawing = drawJoint({ kind: joint.kind, a: a.known, b: b.known, nameA: a.name, nameB: b.name });
-  return drawing && drawingSvg(drawing, `${a.name} and ${b.name}, from the consensus of owners' readings`);
+  return drawing && drawingSvg(drawing, "From the consensus of owners' readings");
 }
 
 function side(page: JointSidePage, revisionId: number): { known: FeatureOnHand; name: string } | undefined {

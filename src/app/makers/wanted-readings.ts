@@ -29,11 +29,7 @@ import { Makers } from './makers';
               <a [routerLink]="[]" [fragment]="'feature-' + entry.feature.slug">{{ entry.feature.name }}</a>
               <span class="dimensions">
                 @for (dimension of entry.dimensions; track dimension.name; let last = $last) {
-                  <span
-                    ><b [title]="dimension.howTo">{{ dimension.label }}</b>
-                    {{ dimension.readings ? '(' + dimension.readings + ' so far)' : ''
-                    }}{{ last ? '' : ', ' }}</span
-                  >
+                  <b [title]="dimension.howTo">{{ dimension.label }}</b>{{ after(dimension.readings, last) }}
                 }
               </span>
               <span class="sl-quiet joints"
@@ -86,4 +82,9 @@ export class WantedReadings {
     const now = this.loaded();
     return now.state === 'ready' ? now.value.items : [];
   });
+
+  /** How often it was read so far, and what parts it from the next. */
+  protected after(readings: number, last: boolean): string {
+    return `${readings > 0 ? ` (${readings} so far)` : ''}${last ? '' : ', '}`;
+  }
 }
