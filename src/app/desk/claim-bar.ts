@@ -81,7 +81,6 @@ type Hand =
       justify-content: space-between;
       gap: 0 1rem;
       margin-block: 0.5rem 1rem;
-      padding-inline: 0.75rem;
       min-block-size: 2.75rem;
       border-block: 1px solid var(--sl-rule);
     }
@@ -91,6 +90,9 @@ type Hand =
     p {
       margin: 0;
       padding-block: 0.35rem;
+    }
+    .sl-bare-button {
+      margin-inline: -0.35rem;
     }
     .time {
       font-family: var(--sl-mono);
