@@ -10,6 +10,7 @@ import { seedMakerWords } from './demo/seed-maker-words.js';
 import { seedMarks } from './demo/seed-marks.js';
 import { seedQuestions } from './demo/seed-questions.js';
 import { seedRevisionPhotos } from './demo/seed-revision-photos.js';
+import { seedWatches } from './demo/seed-watches.js';
 import { seedWriteUps } from './demo/seed-write-ups.js';
 
 /** What the seeder is handed; nothing in it is made here. */
@@ -40,6 +41,7 @@ export async function seedDemo({ knex, storePhoto, now, hashPassword }: DemoSurr
     await seedQuestions(trx, { accounts, catalogue, now });
     await seedMakerWords(trx, { accounts, catalogue, now });
     await seedBenches(trx, { accounts, catalogue, now });
+    await seedWatches(trx, { accounts, catalogue, now });
     await seedMeasured(trx, { accounts, catalogue, now });
     await seedDesk(trx, { accounts, now });
   });

@@ -41,7 +41,7 @@ export function bindBounceIntake(parts: {
 
 function demandSecret(secret: string | undefined): RequestHandler {
   return (request, _response, next) => {
-    const given = /^Bearer (\S+)$/.exec(request.get('authorization') ?? '')?.[1];
+    const given = /^Bearer (.+)$/.exec(request.get('authorization') ?? '')?.[1];
     if (secret === undefined || given === undefined || !timingSafeEqual(hashOf(given), hashOf(secret)))
       throw new ProblemError(
         'token-not-valid',
