@@ -11,7 +11,9 @@ import { createBench } from './bench/bench.js';
 import { createCautionLibrary } from './caution-library/caution-library.js';
 import type { Settings } from './config.js';
 import { createDeletion } from './deletion/deletion.js';
+import { createDump } from './dump/dump.js';
 import { createExport } from './export/export.js';
+import { createFeeds } from './feeds/feeds.js';
 import { createHardware } from './hardware/hardware.js';
 import { createCsrf } from './http/csrf.js';
 import { mountRoutes } from './http/mount.js';
@@ -39,7 +41,7 @@ import { createProposals } from './proposals/proposals.js';
 import { createQuestions } from './questions/questions.js';
 import { createSearch } from './search/search.js';
 import { createSystem } from './system/system.js';
-import { renderText } from './text/render-text.js';
+import { renderText, toPlainText } from './text/render-text.js';
 import { createHappenings } from './watches/happenings.js';
 import { createWatches } from './watches/watches.js';
 import { createWhichOne } from './which-one/which-one.js';
@@ -238,6 +240,9 @@ export function createApp(around: Surroundings): Composition {
     audit,
     photos: photos.service,
   });
+  const { PUBLIC_ADDRESS: publicAddress, DUMP_DIR: folder } = settings;
+  const dump = createDump({ knex, clock, logger, folder, publicAddress });
+  const feeds = createFeeds({ knex, publicAddress, renderText, toPlainText });
   const ownData = createExport({ knex, clock, limits, photos: photos.service });
   const system = createSystem({
     knex,
@@ -270,6 +275,8 @@ export function createApp(around: Surroundings): Composition {
     ...worksheets.bindings,
     ...questions.bindings,
     ...ownData.bindings,
+    ...dump.bindings,
+    ...feeds.bindings,
     ...deletion.bindings,
   ];
 
@@ -279,14 +286,14 @@ export function createApp(around: Surroundings): Composition {
   app.set('trust proxy', settings.TRUST_PROXY ? 1 : false);
   app.use(requestLog(logger), ...securityHeaders({ secure }));
   if (around.pages) app.use(around.pages.files);
-  // Photo files are kept by shared caches, so no session cookie may go with them.
-  app.use([...sessions.handlers, ...csrf.issue].map(unlessPhotoFile));
+  // Photos, feeds and the dump are kept by shared caches, so no session cookie may go with them.
+  app.use([...sessions.handlers, ...csrf.issue].map(unlessForEverybody));
   app.use('/api', notStored);
   mountRoutes(app, routes, bindings, {
     callerOf: sessions.callerOf,
     csrf: csrf.demand,
   });
-  app.use(['/api', '/photos'], nothingHere, problemHandler);
+  app.use(['/api', '/photos', '/feeds', /^\/dump\/./], nothingHere, problemHandler);
   if (around.pages) app.use(around.pages.rendered, nothingHere, pageProblemHandler);
   app.use(nothingHere, problemHandler);
   return {
@@ -296,14 +303,18 @@ export function createApp(around: Surroundings): Composition {
       ...watches.workers,
       search.worker,
       deletion.worker,
+      dump.worker,
       sessionSweeper({ knex, clock, logger }),
     ],
   };
 }
 
-function unlessPhotoFile(handler: RequestHandler): RequestHandler {
+/** What is the same for everybody, whoever asks. */
+const forEverybody = /^\/(?:photos|feeds|dump)\/./;
+
+function unlessForEverybody(handler: RequestHandler): RequestHandler {
   return (request, response, next) => {
-    if (request.path.startsWith('/photos/')) next();
+    if (forEverybody.test(request.path)) next();
     else void handler(request, response, next);
   };
 }

@@ -22,6 +22,8 @@ const Settings = z
     /** Signs the addresses mail comes back to, and opens the hook at which the mail server hands it in. */
     BOUNCE_SECRET: z.string().min(32, 'needs at least 32 characters').optional(),
     PHOTO_DIR: z.string().default('data/photos'),
+    /** Folder of the dump of published knowledge. */
+    DUMP_DIR: z.string().default('data/dump'),
     /** Folder of the built client; where it is not built, only the API is served. */
     WEB_DIR: z.string().default('dist/web'),
     SESSION_SECRET: z.string().min(32, 'needs at least 32 characters'),

@@ -27,3 +27,8 @@ export function databaseUrl(environment: Record<string, string | undefined>): st
 export function photoDirectory(environment: Record<string, string | undefined>): string {
   return environment['PHOTO_DIR'] || join(environment['SHIMLORE_DATA'] || 'data', 'photos');
 }
+
+/** DUMP_DIR, or the folder that `npm start` uses. */
+export function dumpDirectory(environment: Record<string, string | undefined>): string {
+  return environment['DUMP_DIR'] || join(environment['SHIMLORE_DATA'] || 'data', 'dump');
+}

@@ -1,6 +1,8 @@
 import { accountRoutes } from './accounts.js';
 import { auditRoutes } from './audit.js';
 import { cautionLibraryRoutes } from './caution-library.js';
+import { dumpRoutes } from './dump.js';
+import { feedRoutes } from './feeds.js';
 import { deletionRoutes } from './deletion.js';
 import { exportRoutes } from './export.js';
 import { benchRoutes, hardwareRoutes } from './hardware.js';
@@ -54,6 +56,8 @@ export const routes = {
   ...noticeRoutes,
   ...mailRoutes,
   ...exportRoutes,
+  ...dumpRoutes,
+  ...feedRoutes,
   ...deletionRoutes,
 };
 export type RouteName = keyof typeof routes;

@@ -33,6 +33,17 @@ export const appRoutes: Routes = [
     loadComponent: () => import('./hardware/propose/my-proposals-page').then((m) => m.MyProposalsPage),
   },
   {
+    path: 'my/hand-overs',
+    title: 'Write-ups to look after',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./account/hand-overs-page').then((m) => m.HandOversPage),
+  },
+  {
+    path: 'dump',
+    title: 'Open data',
+    loadComponent: () => import('./open-data/open-data-page').then((m) => m.OpenDataPage),
+  },
+  {
     path: '',
     canMatch: [isEditorAddress],
     loadChildren: () => import('./write-ups/editor/editor.routes').then((m) => m.routes),

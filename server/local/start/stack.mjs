@@ -78,6 +78,7 @@ function appEnvironment(settings, secrets) {
     PORT: String(settings.ports.app),
     PUBLIC_ADDRESS: settings.publicAddress,
     PHOTO_DIR: given.PHOTO_DIR || join(settings.dataDir, 'photos'),
+    DUMP_DIR: given.DUMP_DIR || join(settings.dataDir, 'dump'),
     SESSION_SECRET: given.SESSION_SECRET || secrets.session,
     BOUNCE_SECRET: given.BOUNCE_SECRET || secrets.bounce,
   };

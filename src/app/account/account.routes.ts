@@ -30,4 +30,10 @@ export const routes: Routes = [
     canActivate: [mustSignIn],
     loadComponent: () => import('./profile').then((m) => m.Profile),
   },
+  {
+    path: 'deletion',
+    title: 'Delete your account',
+    canActivate: [mustSignIn],
+    loadComponent: () => import('./deletion-page').then((m) => m.DeletionPage),
+  },
 ];

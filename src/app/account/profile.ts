@@ -8,12 +8,22 @@ import { Session } from '../core/session';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
 import { Accounts } from './accounts';
+import { ExportPanel } from './export-panel';
 import { LimitNote } from './limit-note';
 import { MailChoices } from './mail-choices';
 
 @Component({
   selector: 'sl-profile',
-  imports: [Field, Labelled, LimitNote, MailChoices, ProblemNote, ReactiveFormsModule, RouterLink],
+  imports: [
+    ExportPanel,
+    Field,
+    Labelled,
+    LimitNote,
+    MailChoices,
+    ProblemNote,
+    ReactiveFormsModule,
+    RouterLink,
+  ],
   changeDetection: ChangeDetectionStrategy.OnPush,
   styleUrl: './account.scss',
   template: `
@@ -54,7 +64,11 @@ import { MailChoices } from './mail-choices';
     <p class="links">
       <a routerLink="/my/write-ups">My write-ups</a>
       <a routerLink="/account/forgotten">Change the password</a>
+      <a routerLink="/my/hand-overs">Write-ups to look after</a>
     </p>
+    <h2>Your data</h2>
+    <sl-export-panel />
+    <p><a class="danger" routerLink="/account/deletion">Delete your account</a></p>
     @if (signOutProblem(); as problem) {
       <sl-problem-note [problem]="problem" />
     }

@@ -59,7 +59,9 @@ export class SignIn {
     this.sending.send(
       this.form,
       () => this.accounts.signIn(this.form.getRawValue()),
-      () => void this.router.navigateByUrl(wayBack(this.back())),
+      // Whoever is about to leave is asked first whether that still holds.
+      ({ account }) =>
+        void this.router.navigateByUrl(account?.deletionAt ? '/account/deletion' : wayBack(this.back())),
     );
   }
 }

@@ -1,6 +1,7 @@
 import { ChangeDetectionStrategy, Component, inject, signal } from '@angular/core';
 import { FormControl, FormGroup, ReactiveFormsModule, Validators } from '@angular/forms';
 import { RouterLink } from '@angular/router';
+import { licence } from '../../../shared/contract/licence';
 import { formSending } from '../core/form-sending';
 import { Field, Labelled } from '../ui/labelled/labelled';
 import { ProblemNote } from '../ui/problem-note/problem-note';
@@ -53,6 +54,12 @@ import { PasswordField } from './password-field';
         </sl-labelled>
         <sl-email-field [control]="form.controls.email" />
         <sl-password-field [control]="form.controls.password" [fresh]="true" />
+        <p class="sl-quiet">
+          What you publish here others may use by naming you, under {{ licence.shortName }} (<a
+            routerLink="/dump"
+            >open data</a
+          >).
+        </p>
         @if (sending.problem(); as problem) {
           <sl-problem-note [problem]="problem" />
         }
@@ -67,6 +74,7 @@ import { PasswordField } from './password-field';
   `,
 })
 export class SignUp {
+  protected readonly licence = licence;
   private readonly accounts = inject(Accounts);
   protected readonly sending = formSending();
   protected readonly mailedTo = signal<string | null>(null);

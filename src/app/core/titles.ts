@@ -12,6 +12,8 @@ export interface PageFacts {
   readonly path?: string;
   /** False: search engines are asked not to keep it. */
   readonly kept?: false;
+  /** Atom feeds that tell what is new here. */
+  readonly feeds?: readonly { readonly title: string; readonly path: string }[];
   /** JSON-LD. */
   readonly data?: object;
 }
@@ -37,7 +39,7 @@ export class ShimloreTitles extends TitleStrategy {
     this.meta.removeTag('name="description"');
     this.meta.removeTag('name="robots"');
     this.document.head
-      .querySelectorAll('link[rel=canonical], script[data-page]')
+      .querySelectorAll('link[rel=canonical], link[type="application/atom+xml"], script[data-page]')
       .forEach((element) => element.remove());
   }
 
@@ -47,6 +49,7 @@ export class ShimloreTitles extends TitleStrategy {
     if (page.description) this.meta.updateTag({ name: 'description', content: page.description });
     if (page.kept === false) this.meta.updateTag({ name: 'robots', content: 'noindex' });
     if (page.path) this.link(page.path);
+    this.feeds(page.feeds ?? []);
     if (page.data) this.data(page.data);
   }
 
@@ -72,6 +75,18 @@ export class ShimloreTitles extends TitleStrategy {
       this.document.head.appendChild(this.document.createElement('link'));
     link.setAttribute('rel', 'canonical');
     link.setAttribute('href', this.addressOf(path));
+  }
+
+  private feeds(feeds: NonNullable<PageFacts['feeds']>): void {
+    const { head } = this.document;
+    head.querySelectorAll('link[type="application/atom+xml"]').forEach((element) => element.remove());
+    for (const { title, path } of feeds) {
+      const link = head.appendChild(this.document.createElement('link'));
+      link.setAttribute('rel', 'alternate');
+      link.setAttribute('type', 'application/atom+xml');
+      link.setAttribute('title', title);
+      link.setAttribute('href', path);
+    }
   }
 
   /** JSON-LD is data and is never run; `<` is written as an escape so that no text can end the element. */

@@ -131,6 +131,7 @@ export class PartPage {
       title: `${part.name} by ${part.maker.name}`,
       description: part.about || `Revisions of the ${part.name} and how to tell which one you have.`,
       path,
+      feeds: [{ title: `What is new about the ${part.name}`, path: `/feeds/parts/${part.slug}.atom` }],
       data: {
         '@context': 'https://schema.org',
         '@type': 'Product',

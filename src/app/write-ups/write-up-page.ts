@@ -112,6 +112,7 @@ export class WriteUpPageView {
           title,
           description: summary,
           path,
+          feeds: [{ title: 'Write-ups', path: '/feeds/write-ups.atom' }],
           data: writeUpData(now.value, this.titles.addressOf(path)),
         });
       }

@@ -67,6 +67,7 @@ export async function startTestApp(
     SMTP_URL: fromSetUp('TEST_SMTP_URL'),
     SEARCH_INDEX: `write-ups-${workerNumber}`,
     PHOTO_DIR: photoDir,
+    DUMP_DIR: join(photoDir, 'dump'),
     SESSION_SECRET: 'a session secret for the tests only',
     BOUNCE_SECRET: 'a bounce secret for the tests only',
     LOG_LEVEL: process.env['LOG_LEVEL'] ?? 'silent',

@@ -12,6 +12,7 @@ import {
 import { ReactiveFormsModule } from '@angular/forms';
 import { Router, RouterLink } from '@angular/router';
 import { finalize } from 'rxjs';
+import { licence } from '../../../../shared/contract/licence';
 import type { Problem } from '../../../../shared/contract/problem';
 import type { Draft } from '../../../../shared/contract/write-ups';
 import { toApiProblem } from '../../core/api-problem';
@@ -73,6 +74,7 @@ import { SymptomsFields } from './symptoms-fields';
   styleUrl: './draft-editor.scss',
 })
 export class DraftEditor implements OnInit {
+  protected readonly licence = licence;
   readonly draft = input.required<Draft>();
   readonly handedIn = output<Draft>();
   protected readonly editing = inject(DraftEditing);
