@@ -109,6 +109,9 @@ import { Members } from './members';
       padding-block: 0.5rem;
       cursor: pointer;
     }
+    label strong {
+      margin-inline-end: 0.35em;
+    }
     sl-labelled {
       inline-size: 100%;
     }
