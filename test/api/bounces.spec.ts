@@ -65,6 +65,7 @@ describe('a mail that comes back for good', () => {
   it('is taken back by confirming the address again', async () => {
     await tell();
     await handIn(await returned('5.1.1'));
+    expect(await refusedAt()).not.toBeNull();
     await ada.post('/api/account/confirm-again').expect(202);
     await app.mailbox.waitFor(ada.account.email, 2);
     now = new Date(now.getTime() + 1000);
