@@ -51,12 +51,16 @@ describe('two moderators at the desk', () => {
     await two.page.getByRole('dialog').getByRole('button', { name: 'Take it over' }).click();
     await two.page.getByText('You have this in hand until').waitFor();
 
-    await one.page.getByLabel('Reason').fill('Say which leaf you mean, and how thick it is.');
+    await one.page
+      .getByRole('textbox', { name: 'Reason' })
+      .fill('Say which leaf you mean, and how thick it is.');
     await one.page.getByRole('button', { name: 'Give it back' }).click();
     await one.page.getByText('Somebody else at the desk has this in hand').first().waitFor();
-    expect(await one.page.getByLabel('Reason').inputValue()).toContain('which leaf');
+    expect(await one.page.getByRole('textbox', { name: 'Reason' }).inputValue()).toContain('which leaf');
 
-    await two.page.getByLabel('Reason').fill('Say which leaf you mean, and how thick it is.');
+    await two.page
+      .getByRole('textbox', { name: 'Reason' })
+      .fill('Say which leaf you mean, and how thick it is.');
     await two.page.getByRole('button', { name: 'Give it back' }).click();
     await two.page.getByRole('heading', { name: 'Given back' }).waitFor();
   });
