@@ -1,9 +1,10 @@
 import { lettersOf } from './resolve-content.js';
 import { pick, shuffled } from './random.js';
 import { bracketQuestions } from './questions/brackets.js';
+import { cameraQuestions } from './questions/cameras.js';
 import { driveQuestions } from './questions/drives.js';
 import type { QuestionFamily } from './questions/family.js';
-import { trainQuestions } from './questions/trains.js';
+import { spacerQuestions } from './questions/spacers.js';
 import { unansweredQuestions, type SingleQuestion } from './questions/unanswered.js';
 import type { DemoReading, DemoWriteUp } from './write-up-shape.js';
 import type { QuestionReading } from '../../shared/contract/questions.js';
@@ -12,7 +13,8 @@ import type { WorksheetRecord } from '../../shared/contract/worksheet.js';
 export const questionFamilies: readonly QuestionFamily[] = [
   ...driveQuestions,
   ...bracketQuestions,
-  ...trainQuestions,
+  ...cameraQuestions,
+  ...spacerQuestions,
 ];
 
 export interface PlannedReply {

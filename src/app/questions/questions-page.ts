@@ -78,6 +78,11 @@ export class QuestionsPage {
     void this.router.navigate([], { relativeTo: this.route, queryParams, queryParamsHandling: 'merge' });
   }
 
+  protected repliesOf({ replyCount }: QuestionLine): string {
+    if (replyCount === 0) return 'Nobody has replied yet.';
+    return replyCount === 1 ? 'One reply.' : `${replyCount} replies.`;
+  }
+
   protected partsOf(item: QuestionLine): string {
     return item.parts
       .map(({ part, revision }) => `${part.name}, ${revision?.label ?? 'revision not known'}`)
