@@ -1,17 +1,11 @@
+import { gatheredKinds } from '../../shared/contract/watches.js';
 import type { DigestSection } from '../mail/watch-letters.js';
 import { groupBy } from '../rows.js';
 import type { DigestRow } from './digest.store.js';
-import type { HappeningKind } from './happenings.js';
 import { subjectKey, type SubjectName } from './subject-names.store.js';
 
 /** As many lines as a mail can be read with; the rest is on the page of notices. */
 const mostLines = 60;
-
-const gathered: Partial<Record<HappeningKind, (count: number) => string>> = {
-  'reading-recorded': (count) => `${count} new readings`,
-  'trial-reported': (count) => `${count} new trials`,
-  'fit-reported': (count) => `${count} new reports of whether it fits`,
-};
 
 /**
  * What happened under headings of what it concerns, in the order in which each first had something to tell. Readings,
@@ -45,10 +39,13 @@ function headingOf(
 }
 
 function linesOf(rows: readonly DigestRow[]): { text: string; path: string; count: number }[] {
-  const alike = groupBy(rows, (row) => (row.kind in gathered ? `${row.kind} ${row.path}` : String(row.id)));
+  const alike = groupBy(rows, (row) =>
+    gatheredKinds.has(row.kind) ? `${row.kind} ${row.path}` : String(row.id),
+  );
   return [...alike.values()].map((group) => {
     const [first] = group as [DigestRow];
-    const text = group.length === 1 ? first.title : (gathered[first.kind]?.(group.length) ?? first.title);
+    const text =
+      group.length === 1 ? first.title : (gatheredKinds.get(first.kind)?.(group.length) ?? first.title);
     return { text, path: first.path, count: group.length };
   });
 }

@@ -1,4 +1,5 @@
 import type { Knex } from 'knex';
+import { gatheredKinds } from '../../shared/contract/watches.js';
 import type { WatchMail } from '../mail/watch-mail.js';
 import type { HappeningKind } from './happenings.js';
 import { namesOf, subjectKey, type SubjectName } from './subject-names.store.js';
@@ -9,13 +10,6 @@ import {
   type Reached,
   type UntoldHappening,
 } from './telling.store.js';
-
-/** Kinds of which there may be many a day: by mail they come gathered, even to who wants the others at once. */
-export const gatheredKinds: ReadonlySet<HappeningKind> = new Set<HappeningKind>([
-  'reading-recorded',
-  'trial-reported',
-  'fit-reported',
-]);
 
 /**
  * Tells the oldest happening that is not told yet to each person it concerns, once: their notices, the mail of those who

@@ -43,6 +43,16 @@ export const Notice = z.object({
 });
 export type Notice = z.infer<typeof Notice>;
 
+/**
+ * Kinds of which there may be many a day, and what several of one page are called: they never go by mail at once, and
+ * are one line in a digest and among the notices.
+ */
+export const gatheredKinds: ReadonlyMap<string, (count: number) => string> = new Map([
+  ['reading-recorded', (count: number) => `${count} new readings`],
+  ['trial-reported', (count: number) => `${count} new trials`],
+  ['fit-reported', (count: number) => `${count} new reports of whether it fits`],
+]);
+
 export const NoticeFilter = z.enum(['part', 'revision', 'joint', 'write-up', 'question', 'bench', 'person']);
 export type NoticeFilter = z.infer<typeof NoticeFilter>;
 

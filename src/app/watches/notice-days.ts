@@ -1,4 +1,4 @@
-import type { Notice } from '../../../shared/contract/watches';
+import { gatheredKinds, type Notice } from '../../../shared/contract/watches';
 
 /** One line of the list: a notice, or several of one kind on one page of one day. */
 export interface NoticeGroup {
@@ -15,13 +15,6 @@ export interface NoticeDay {
   readonly groups: readonly NoticeGroup[];
 }
 
-/** Kinds of which there may be many a day, and what several of them are called. */
-const gathered: Readonly<Record<string, (count: number) => string>> = {
-  'reading-recorded': (count) => `${count} new readings`,
-  'trial-reported': (count) => `${count} new trials`,
-  'fit-reported': (count) => `${count} new reports of whether it fits`,
-};
-
 /** Notices, the newest first, by day; readings, trials and reports of fit of one page and day become one line. */
 export function noticeDays(notices: readonly Notice[]): NoticeDay[] {
   const days = new Map<string, Map<string, [Notice, ...Notice[]]>>();
@@ -29,7 +22,7 @@ export function noticeDays(notices: readonly Notice[]): NoticeDay[] {
     const day = notice.at.slice(0, 10);
     const groups = days.get(day) ?? new Map<string, [Notice, ...Notice[]]>();
     days.set(day, groups);
-    const key = notice.kind in gathered ? `${notice.kind} ${notice.path}` : String(notice.id);
+    const key = gatheredKinds.has(notice.kind) ? `${notice.kind} ${notice.path}` : String(notice.id);
     const group = groups.get(key);
     if (group) group.push(notice);
     else groups.set(key, [notice]);
@@ -46,6 +39,6 @@ export function noticeDays(notices: readonly Notice[]): NoticeDay[] {
 }
 
 function titleOf([first, ...others]: readonly [Notice, ...Notice[]]): string {
-  const several = others.length > 0 ? gathered[first.kind] : undefined;
+  const several = others.length > 0 ? gatheredKinds.get(first.kind) : undefined;
   return several ? several(others.length + 1) : first.title;
 }
