@@ -11,6 +11,7 @@ import { createJoints } from '../../server/joints/joints.js';
 import { startMariaDb } from '../../server/local/mariadb.mjs';
 import { freePort } from '../../server/local/start/ports.mjs';
 import { createAuditLog } from '../../server/audit/audit.js';
+import { createDeskInbox } from '../../server/moderation/desk-inbox.js';
 import { createHappenings } from '../../server/watches/happenings.js';
 import { createMeasurements } from '../../server/measurements/measurements.js';
 import { migrateToLatest } from '../../server/migration-source.js';
@@ -56,6 +57,7 @@ interface Pages {
 }
 
 function pagesOn(knex: Knex): Pages {
+  const deskInbox = createDeskInbox({ clock });
   const measurements = createMeasurements({
     knex,
     clock,
@@ -63,6 +65,7 @@ function pagesOn(knex: Knex): Pages {
     limits: noRateLimits,
     audit: createAuditLog({ clock }),
     happenings: createHappenings({ clock }),
+    deskInbox,
   });
   const nobody = { cautionsOfMany: () => Promise.resolve([]) } as unknown as WriteUpService;
   const joints = createJoints({
@@ -71,6 +74,7 @@ function pagesOn(knex: Knex): Pages {
     measurements: measurements.service,
     writeUps: nobody,
     happenings: createHappenings({ clock }),
+    deskInbox,
   });
   let turn = 0;
   const next = (): number => (turn = (turn % parts) + 1);
