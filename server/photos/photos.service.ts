@@ -1,7 +1,7 @@
 import { readFile } from 'node:fs/promises';
 import type { Readable } from 'node:stream';
 import type { Photo } from '../../shared/contract/photos.js';
-import { NotFound } from '../http/problems.js';
+import { NotFound, TakenDownByDesk } from '../http/problems.js';
 import { createGate } from './gate.js';
 import {
   hashOfPhoto,
@@ -29,10 +29,12 @@ export function createPhotoService({
 }) {
   const inTurn = createGate(atOnce);
 
-  /** Stores a photo, or finds the one that is there: the same bytes from the same owner give the same photo. Throws PhotoRefused. */
+  /** Stores a photo, or finds the one that is there: the same bytes from the same owner give the same photo. Throws PhotoRefused, or TakenDownByDesk for one of theirs that the desk has taken down. */
   async function store(bytes: Buffer, alt: string, ownerId: number): Promise<Photo> {
     const hash = hashOfPhoto(bytes);
     const known = (await photos.findByHash(hash, ownerId))[0];
+    if (known?.ownerId === ownerId && known.takenDownReason !== null)
+      throw new TakenDownByDesk('This photo of yours', known.takenDownReason);
     const complete = known && (await hasFilesOf(known.photo));
     if (complete && known.ownerId === ownerId) return known.photo;
     const made = complete ? known.photo : await makeFiles(hash, bytes);
@@ -60,7 +62,7 @@ export function createPhotoService({
     storeUpload: (path: string, alt: string, ownerId: number): Promise<Photo> =>
       inTurn(async () => store(await readFile(path), alt, ownerId)),
 
-    /** Photos by identity; those that are not there are left out. */
+    /** Photos by identity; those that are not there, or taken down, are left out. */
     async photosByIds(ids: readonly number[]): Promise<Map<number, Photo>> {
       return new Map((await photos.byIds([...new Set(ids)])).map((photo) => [photo.id, photo]));
     },
@@ -79,8 +81,10 @@ export function createPhotoService({
       await Promise.all(filesOf(photo).map((name) => files.remove(name)));
     },
 
-    /** The bytes of a photo file. Throws NotFound. */
+    /** The bytes of a photo file. Throws NotFound, or TakenDownByDesk unless somebody's photo of the same bytes still stands. */
     async readFile(name: string): Promise<Buffer> {
+      const hash = name.slice(0, name.indexOf('-'));
+      if (await photos.isTakenDown(hash)) throw new TakenDownByDesk('This photo', null);
       const bytes = await files.get(name);
       if (!bytes)
         throw new NotFound(

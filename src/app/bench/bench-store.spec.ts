@@ -30,6 +30,7 @@ const member: Account = {
   safetyMail: true,
   benchWatch: false,
   mailRefusedAt: null,
+  deletionAt: null,
   units: 'mm',
   createdAt: '2026-01-01T00:00:00Z',
 };
@@ -119,7 +120,9 @@ describe('bench', () => {
     http.expectOne('/api/bench').flush({ items: [] });
 
     const moved = bench.moveOver();
-    http.expectOne({ method: 'POST', url: '/api/bench' }).flush('', { status: 503, statusText: 'Unavailable' });
+    http
+      .expectOne({ method: 'POST', url: '/api/bench' })
+      .flush('', { status: 503, statusText: 'Unavailable' });
     await expect(moved).rejects.toThrow();
     expect(kept()).toHaveLength(1);
   });

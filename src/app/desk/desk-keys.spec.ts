@@ -1,4 +1,4 @@
-import { Component } from '@angular/core';
+import { ChangeDetectionStrategy, Component } from '@angular/core';
 import { TestBed } from '@angular/core/testing';
 import { DeskKeys, deskKeys } from './desk-keys';
 
@@ -6,6 +6,7 @@ const done: string[] = [];
 
 @Component({
   selector: 'sl-page-with-keys',
+  changeDetection: ChangeDetectionStrategy.OnPush,
   template: '<input /><textarea></textarea><button type="button">Do it</button>',
 })
 class PageWithKeys {

@@ -102,6 +102,7 @@ describe('the page of a joint', () => {
       safetyMail: true,
       benchWatch: false,
       mailRefusedAt: null,
+      deletionAt: null,
       units: 'mm',
       createdAt: '2026-01-01T00:00:00Z',
     });
