@@ -23,7 +23,7 @@ describe('the secrets', () => {
 
     expect(readSecrets(dataDir)).toEqual(made);
     expect(Object.values(made).every((secret) => secret.length >= 32)).toBe(true);
-    expect(new Set(Object.values(made)).size).toBe(4);
+    expect(new Set(Object.values(made)).size).toBe(5);
   });
 
   it('can be read by their owner only', () => {
