@@ -29,7 +29,7 @@ describe('the notice of a withdrawn write-up', () => {
     expect(page.textContent).toContain('The coin comes loose.');
     expect(page.textContent).toContain('4 March 2026');
     expect(page.textContent).toContain('the desk has withdrawn');
-    expect(links(page)).toEqual(['/search', '/questions/new']);
+    expect(links(page)).toEqual(['/search', '/questions/ask']);
   });
 
   it('leads to what stands instead, and authors to the history', () => {

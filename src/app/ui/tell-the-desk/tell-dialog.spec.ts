@@ -2,6 +2,7 @@ import { provideHttpClient } from '@angular/common/http';
 import { HttpTestingController, provideHttpClientTesting } from '@angular/common/http/testing';
 import { TestBed } from '@angular/core/testing';
 import { MAT_DIALOG_DATA } from '@angular/material/dialog';
+import { flagGroundWords } from '../../../../shared/contract/flags';
 import { TellDialog } from './tell-dialog';
 
 const api = () => TestBed.inject(HttpTestingController);
@@ -45,7 +46,8 @@ describe('telling the desk', () => {
 
   it('sends the thing, the ground and the line, and says what comes next', async () => {
     const { fixture, page, type, send } = await dialog();
-    page.querySelector<HTMLInputElement>('input[value=copied]')!.click();
+    const grounds = [...page.querySelectorAll('label')];
+    grounds.find(({ textContent }) => textContent.includes(flagGroundWords.copied))!.click();
     type('The second half stands in a book of mine.');
     await send();
     const sent = api().expectOne('/api/flags');
