@@ -1,7 +1,7 @@
 import { randomUUID } from 'node:crypto';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible } from './support/accessibility.js';
-import { startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
+import { crash, startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
 import { handIn, openOnDesk, platePhoto, untilSaved, writeWriteUp } from './support/write-up-errand.js';
 
 let browser: TestBrowser;
@@ -135,7 +135,7 @@ describe('an author', () => {
     expect(await author.page.getByLabel('Title').inputValue()).toBe(title);
   });
 
-  it('when the connection is gone while typing and the page is closed, then the text is back when the draft is opened again', async () => {
+  it('when the connection is gone while typing and the page dies, then the text is back when the draft is opened again', async () => {
     const author = await open();
     const { page, context } = author;
     await author.signInAs('author');
@@ -148,7 +148,7 @@ describe('an author', () => {
     await context.setOffline(true);
     await page.getByLabel('What touches what, and why').fill('Typed without a connection.');
     await page.getByText('Not saved: The server cannot be reached.').waitFor();
-    await page.close({ runBeforeUnload: false });
+    await crash(page);
     await context.setOffline(false);
 
     const again = await context.newPage();

@@ -2,7 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible } from './support/accessibility.js';
 import { callFrom } from './support/api-call.js';
-import { startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
+import { crash, startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
 import { handIn, openOnDesk, untilSaved, writeWriteUp } from './support/write-up-errand.js';
 
 let browser: TestBrowser;
@@ -137,7 +137,7 @@ describe('an author whose browser or server stops', () => {
       route.request().method() === 'PUT' ? route.abort() : route.continue(),
     );
     await author.page.getByLabel(cause).pressSequentially('The lip is wi');
-    await author.page.close({ runBeforeUnload: false });
+    await crash(author.page);
 
     const again = await author.context.newPage();
     await again.goto(path);
