@@ -2,6 +2,7 @@ import { randomUUID } from 'node:crypto';
 import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { expectAccessible } from './support/accessibility.js';
 import { crash, startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
+import { signUp } from './support/sign-up.js';
 import { handIn, openOnDesk, platePhoto, untilSaved, writeWriteUp } from './support/write-up-errand.js';
 
 let browser: TestBrowser;
@@ -25,24 +26,12 @@ async function open(viewport?: 'phone' | 'desktop'): Promise<TestPage> {
 }
 
 /** Signs a new member up through the mailed link. */
-async function signUp({ page, visit }: TestPage, name: string): Promise<void> {
-  const email = `${randomUUID()}@example.org`;
-  await visit('/account/sign-up');
-  await page.getByLabel('Name shown to others').fill(name);
-  await page.getByLabel('E-mail address').fill(email);
-  await page.getByLabel('Password', { exact: true }).fill('shim behind the plate');
-  await page.getByRole('button', { name: 'Make the account' }).click();
-  await page.getByText('A mail is on its way').waitFor();
-  await visit(`/account/confirm?token=${await browser.mailbox.tokenFor(email)}`);
-  await page.getByRole('heading', { name: `Welcome, ${name}` }).waitFor();
-}
-
 describe('an author', () => {
   it('writes with a photo, finds all of it after a reload, sees the preview, hands it in, and later writes a second edition', async () => {
     const title = `Plate rocks on the lip ${randomUUID().slice(0, 8)}`;
     const author = await open();
     const { page, visit } = author;
-    await signUp(author, 'Runa Holm');
+    await signUp(browser, author, 'Runa Holm');
 
     await writeWriteUp(author, title, 'Put the coin on the face and screw the plate down.');
     await page.getByLabel('Choose photos').setInputFiles(await platePhoto());
