@@ -136,7 +136,7 @@ describe('an author', () => {
     await page.getByLabel('What touches what, and why').waitFor();
     await context.setOffline(true);
     await page.getByLabel('What touches what, and why').fill('Typed without a connection.');
-    await page.getByText('Not saved: The server cannot be reached.').waitFor();
+    await page.getByText('Not saved, trying again').waitFor();
     await crash(page);
     await context.setOffline(false);
 
