@@ -2,6 +2,7 @@ import { afterAll, afterEach, beforeAll, describe, expect, it } from 'vitest';
 import { demoAccounts } from '../../seeds/demo/accounts.js';
 import { expectAccessible } from './support/accessibility.js';
 import { startBrowser, type TestBrowser, type TestPage } from './support/browser.js';
+import { signUp } from './support/sign-up.js';
 import { handIn, openOnDesk, writeWriteUp } from './support/write-up-errand.js';
 
 let browser: TestBrowser;
@@ -28,8 +29,8 @@ async function openAs(account: string | null, viewport: 'phone' | 'desktop' = 'd
 describe('who watches a part', () => {
   it('is told once of what is published on it, by mail and in the app, and stops it with one press', async () => {
     const title = `Plate rocks, told to who watches ${Date.now()}`;
-    const { email } = demoAccounts.find(({ key }) => key === 'maker')!;
-    const watcher = await openAs('maker', 'phone');
+    const watcher = await openAs(null, 'phone');
+    const email = await signUp(browser, watcher, `Wenda Watcher ${Date.now()}`);
     await watcher.visit('/parts/larkfield-wren-60');
     const button = watcher.page.getByRole('button', { name: 'Watch Wren 60', exact: true });
     await button.click();
@@ -41,12 +42,14 @@ describe('who watches a part', () => {
     const moderator = await openAs('moderator');
     await openOnDesk(moderator, title);
     await moderator.page.getByRole('button', { name: 'Publish' }).click();
-    await moderator.page.getByText(/is published/).waitFor();
+    await moderator.page.getByRole('heading', { name: 'Published' }).waitFor();
 
-    await browser.mailbox.waitFor(email);
+    const mailsOfIt = async () =>
+      (await browser.mailbox.list(email)).filter(({ subject }) => subject.includes(title));
+    await expect.poll(async () => (await mailsOfIt()).length, { timeout: 20_000 }).toBe(1);
     await watcher.visit('/notices');
     await watcher.page.getByRole('link', { name: new RegExp(title) }).waitFor();
-    const told = (await browser.mailbox.list(email)).filter(({ subject }) => subject.includes(title));
+    const told = await mailsOfIt();
     expect(told).toHaveLength(1);
     expect(await watcher.page.getByRole('link', { name: new RegExp(title) }).count()).toBe(1);
     await expectAccessible(watcher.page);
