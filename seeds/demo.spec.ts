@@ -78,11 +78,11 @@ describe('the demo', () => {
     }
   });
 
-  it('has at least 36 published write-ups, eight of them with two to four published editions', () => {
+  it('has at least 60 published write-ups, eight of them with two to four published editions', () => {
     const counts = published.map(
       (writeUp) => editionsOf(writeUp).filter((item) => item.state === 'published').length,
     );
-    expect(published.length).toBeGreaterThanOrEqual(36);
+    expect(published.length).toBeGreaterThanOrEqual(60);
     expect(counts.filter((count) => count >= 2 && count <= 4).length).toBeGreaterThanOrEqual(8);
   });
 
