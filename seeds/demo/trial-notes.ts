@@ -10,11 +10,15 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Held through a night from 14 °C to minus 3 °C. I check the screws each new moon.',
       'Same remedy, brass strip instead of what the write-up uses. Works as told.',
       'Measured before and after with the same caliper; the gap is gone.',
+      'Cut the piece with scissors, then flattened the burr between two steel blocks. It measured 0.02 mm less after that.',
+      'Took two tries: the first strip was a tenth too thick and the screws would not start.',
+      'A spot of grease holds the pieces while you turn it over. No tape needed.',
     ],
     'held-for-a-while': [
       'Good for six weeks, then the tape had crept. Metal instead of tape would do it.',
       'Worked until I took the camera off; one piece fell out and I could not find it. Stick them down.',
       'Fine on the bench, came loose after a drive on a gravel road.',
+      'Held through the summer. In damp autumn the paper part of it swelled and I went over to brass.',
     ],
     'did-not-help': [
       'The rock is gone but the drive still stalls: mine had a second cause.',
@@ -29,6 +33,8 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Done with a file only, slower but no nerves. Sits flush.',
       'Half a millimetre more than told to get room on mine; wall still thick enough.',
       'Two seasons on, no cracks where I cut.',
+      'Practised on a scrap of the same plastic first. Glad I did.',
+      'A friend with a lathe did it in five minutes; by hand I would not have kept it square.',
     ],
     'held-for-a-while': [
       'Flush for a season; then the thin wall cracked at one screw. Leave more than I did.',
@@ -46,6 +52,7 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Clears over the whole travel; I ran it end to end five times.',
       'Had to move the finder too, but it works.',
       'No change in a year. Marked the place with a scribe line.',
+      'Needed a longer cable, nothing else.',
     ],
     'held-for-a-while': [
       'Crept back after a month because the clamp screw was not tight enough.',
@@ -62,6 +69,7 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Had it turned by a friend. Best thing I did to this telescope.',
       'The first print was too tight by 0.1; scaled the bore and the second one fits.',
       'Held a summer in the car without creeping.',
+      'Rubbed the faces flat on wet paper; straight from the printer it rocked by 0.1.',
     ],
     'held-for-a-while': [
       'Printed it in the easy plastic and it sagged on a hot day. Use what the write-up says.',
@@ -75,6 +83,7 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'Bought the newer revision second hand. All good, nothing to cut.',
       'Swapped, ran the whole travel, no touch anywhere.',
       'Newer one is 12 g heavier, otherwise the same and it seats.',
+      'Sold the old one on with a note of what it does fit.',
     ],
     'held-for-a-while': ['Good until the clamp worked loose; that is another matter.'],
     'did-not-help': ['The one I got was the old revision in the new bag. Look at the marks before paying.'],
@@ -87,6 +96,7 @@ export const trialNotes: Record<FixKind, Record<TrialOutcome, readonly string[]>
       'I turned it an eighth less than told because mine is the short-travel one.',
       'Checked again after a month: same figure within what I can read.',
       'Quiet now, and it starts from cold.',
+      'Wrote the setting on a strip of tape inside the lid, so that I find it again.',
     ],
     'held-for-a-while': [
       'Held till the first frost, then I had to do it again.',

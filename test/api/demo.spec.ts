@@ -76,6 +76,12 @@ describe('the seeded demo', () => {
     expect(Number(replied)).toBeGreaterThan(110);
   });
 
+  it('has at least sixty published write-ups and four hundred trials', async () => {
+    expect(published.length).toBeGreaterThanOrEqual(60);
+    const [{ all }] = (await app.knex('trials').count({ all: '*' })) as [{ all: number }];
+    expect(Number(all)).toBeGreaterThanOrEqual(400);
+  });
+
   it('has trials that carry a worksheet', async () => {
     expect((await app.knex('trials').whereNotNull('worksheet')).length).toBeGreaterThan(3);
   });
