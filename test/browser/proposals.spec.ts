@@ -82,7 +82,10 @@ describe('which one do I have', () => {
         await page.getByRole('button', { name: 'Take it' }).click();
         break;
       }
+      // The next look must not be at a question that is answered already.
+      const question = await page.locator('#asked').innerText();
       await page.getByRole('button', { name: 'I can’t tell' }).click();
+      await expect.poll(() => page.locator('#asked').innerText()).not.toBe(question);
     }
     await page.getByText('suits none of the revisions').waitFor();
     while (await page.getByRole('button', { name: 'Take the last one back' }).isVisible())
