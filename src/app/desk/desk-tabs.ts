@@ -20,24 +20,6 @@ import { RouterLink, RouterLinkActive } from '@angular/router';
       <a routerLink="/desk/members" routerLinkActive="here" ariaCurrentWhenActive="page">Members</a>
     </nav>
   `,
-  styles: `
-    nav {
-      display: flex;
-      flex-wrap: wrap;
-      gap: 0 1.5rem;
-      margin-block-end: 1rem;
-    }
-    a {
-      display: inline-flex;
-      align-items: center;
-      min-block-size: 2.75rem;
-      font: 600 1.15rem/1.2 var(--sl-heading);
-      text-decoration: none;
-      border-block-end: 3px solid transparent;
-    }
-    .here {
-      border-color: currentColor;
-    }
-  `,
+  styleUrl: '../ui/room-tabs.scss',
 })
 export class DeskTabs {}
